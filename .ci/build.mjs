@@ -1,0 +1,56 @@
+// Sources -> dist/: one bundle each for the library, the command line and the checker's worker (shared parts in common
+// chunks, so that the library exists once per process), and one self-contained declaration file.
+import { existsSync, readFileSync, rmSync, writeFileSync } from "node:fs";
+import { join } from "node:path";
+import { build } from "esbuild";
+import { rollup } from "rollup";
+import { dts } from "rollup-plugin-dts";
+
+const top = new URL("..", import.meta.url).pathname;
+const { dependencies, version } = JSON.parse(readFileSync(join(top, "package.json"), "utf8"));
+
+/** Bundled because they load several times faster as the few functions used. */
+const bundled = new Set(["mathjs", "temml", "markdown-it", "fastest-levenshtein"]);
+const external = Object.keys(dependencies)
+  .filter((name) => !bundled.has(name))
+  .flatMap((name) => [name, `${name}/*`]);
+
+const entries = { hingebook: "lib/index.ts", cli: "kernel/cli.ts", "check-worker": "kernel/check/worker.ts" };
+const present = Object.fromEntries(Object.entries(entries).filter(([, path]) => existsSync(join(top, path))));
+
+rmSync(join(top, "dist"), { recursive: true, force: true });
+await build({
+  absWorkingDir: top,
+  entryPoints: present,
+  outdir: "dist",
+  bundle: true,
+  splitting: true,
+  chunkNames: "parts/[name]-[hash]",
+  format: "esm",
+  platform: "node",
+  target: "node20",
+  external,
+  define: { HINGEBOOK_VERSION: JSON.stringify(version) },
+  // mathjs and markdown-it reach for require in places that are never run; ESM output needs one to be there.
+  banner: {
+    js: 'import { createRequire as __createRequire } from "node:module"; const require = __createRequire(import.meta.url);',
+  },
+  logLevel: "warning",
+});
+
+const declarations = await rollup({
+  input: join(top, "lib/index.ts"),
+  plugins: [
+    dts({ tsconfig: join(top, "tsconfig.json"), compilerOptions: { stripInternal: true, paths: {} } }),
+  ],
+  onwarn: (warning) => {
+    throw new Error(`declaration file: ${warning.message}`);
+  },
+});
+const { output } = await declarations.generate({ format: "es" });
+await declarations.close();
+const text = output[0].code;
+const foreign = /from ['"]([^.'"][^'"]*)['"]/.exec(text);
+if (foreign)
+  throw new Error(`declaration file: ${foreign[1]} shows in a public signature; only our own types may`);
+writeFileSync(join(top, "dist/hingebook.d.ts"), text);

@@ -1,0 +1,193 @@
+// The record: one run of a calculation as plain JSON. Numbers are SI; `unit` is the unit they are shown in.
+
+export const RECORD_FORMAT = "hingebook record" as const;
+export const RECORD_VERSION = 0 as const;
+
+/** A number in SI with the dimension it has and the unit and text it is shown with, e.g. 5200, "force per length", "kN/m", "5.20 kN/m". */
+export interface ShownValue {
+  readonly si: number;
+  readonly dimension: string;
+  readonly unit: string;
+  readonly text: string;
+}
+
+export interface Head {
+  readonly title: string;
+  readonly job: string;
+  readonly preparedBy: string;
+  readonly checkedBy?: string;
+  readonly approvedBy?: string;
+  readonly date?: string;
+  readonly revision?: string;
+  readonly basis: string;
+  /** The units results are shown in, e.g. "kN, m". */
+  readonly units: string;
+  readonly status: string;
+}
+
+interface EntryBase {
+  /** Stable name: the symbol of a given, assumption, calculation or result; otherwise a name made from what the entry is about. */
+  readonly id: string;
+  /** Grows when the entry's value changes: "g@2" is the second value of g. */
+  readonly version: number;
+  /** 1-based number of the notebook cell that made it; 0 without a notebook. */
+  readonly cell: number;
+  /** What it stands on, each "id@version". */
+  readonly uses: readonly string[];
+  /** True when something it stands on has changed since. */
+  readonly outOfDate: boolean;
+}
+
+/** A formula in three lines, each TeX: symbols, numbers with units, result. */
+export interface FormulaLines {
+  readonly symbols: string;
+  readonly numbers: string;
+  readonly result: string;
+}
+
+export interface GivenEntry extends EntryBase {
+  readonly kind: "given";
+  readonly symbol: string;
+  readonly tex: string;
+  readonly value: ShownValue;
+  readonly description: string;
+  /** Where it was taken from: "drawing S-102 rev B". */
+  readonly source?: string;
+  /** The value written in the notebook when another was set from outside. */
+  readonly overridden?: ShownValue;
+}
+
+export interface AssumptionEntry extends EntryBase {
+  readonly kind: "assumption";
+  readonly symbol?: string;
+  readonly tex?: string;
+  readonly value?: ShownValue;
+  readonly text: string;
+  readonly because: string;
+}
+
+export interface CalcEntry extends EntryBase {
+  readonly kind: "calc";
+  readonly symbol: string;
+  readonly tex: string;
+  readonly formula: string;
+  readonly lines: FormulaLines;
+  /** Value of each symbol the formula names, SI. */
+  readonly inputs: Readonly<Record<string, number>>;
+  readonly value: ShownValue;
+  readonly description: string;
+}
+
+export interface CheckEntry extends EntryBase {
+  readonly kind: "check";
+  readonly formula: string;
+  readonly lines: FormulaLines;
+  readonly inputs: Readonly<Record<string, number>>;
+  readonly passed: boolean;
+  /** Left side over right side of a "<=" (inverse for ">="), 1 at the limit; absent where the limit is zero. */
+  readonly utilisation?: number;
+  readonly description: string;
+}
+
+/** A number taken from an analysis and given a symbol; the governing ones stand on the cover. */
+export interface ResultEntry extends EntryBase {
+  readonly kind: "result";
+  readonly symbol: string;
+  readonly tex: string;
+  readonly value: ShownValue;
+  readonly description: string;
+  readonly governing: boolean;
+}
+
+/** One free-body equation in three lines, with the data to re-add it. */
+export interface StepEntry extends EntryBase {
+  readonly kind: "step";
+  readonly body: string;
+  readonly lines: FormulaLines;
+  readonly value: ShownValue;
+  readonly terms: readonly { readonly coefficient: number; readonly value: number }[];
+  readonly coefficient: number;
+}
+
+export interface NoteEntry extends EntryBase {
+  readonly kind: "note";
+  readonly text: string;
+}
+
+/** Markdown of a notebook's text cell. */
+export interface TextEntry extends EntryBase {
+  readonly kind: "text";
+  readonly markdown: string;
+}
+
+/** Something the tool found and says: a verdict, with its working in lines. */
+export interface FindingEntry extends EntryBase {
+  readonly kind: "finding";
+  readonly title: string;
+  readonly verdict: string;
+  readonly lines: readonly string[];
+}
+
+/** A question the tool raises and the engineer or checker must settle. */
+export interface QueryEntry extends EntryBase {
+  readonly kind: "query";
+  readonly text: string;
+}
+
+export type TableCell = string | { readonly value: ShownValue; readonly uses: readonly string[] };
+
+export interface TableEntry extends EntryBase {
+  readonly kind: "table";
+  readonly caption: string;
+  readonly columns: readonly string[];
+  readonly rows: readonly (readonly TableCell[])[];
+}
+
+/** A figure as its drawing instructions (`lib/drawing`); drawn when shown. */
+export interface FigureEntry extends EntryBase {
+  readonly kind: "figure";
+  readonly caption: string;
+  /** What the figure shows, in words, for readers who cannot see it. */
+  readonly alternative: string;
+  readonly spec: { readonly kind: string };
+}
+
+export interface ConclusionEntry extends EntryBase {
+  readonly kind: "conclusion";
+  readonly text: string;
+}
+
+export type Entry =
+  | GivenEntry
+  | AssumptionEntry
+  | CalcEntry
+  | CheckEntry
+  | ResultEntry
+  | StepEntry
+  | NoteEntry
+  | TextEntry
+  | FindingEntry
+  | QueryEntry
+  | TableEntry
+  | FigureEntry
+  | ConclusionEntry;
+
+/** Why a run stopped before its end. */
+export interface Failure {
+  readonly cell: number;
+  readonly line?: number;
+  readonly message: string;
+  readonly excerpt: string;
+}
+
+export interface CalculationRecord {
+  readonly format: typeof RECORD_FORMAT;
+  readonly version: typeof RECORD_VERSION;
+  readonly complete: boolean;
+  readonly failure?: Failure;
+  readonly head: Head;
+  readonly overrides: readonly { readonly symbol: string; readonly written: string; readonly set: string }[];
+  readonly entries: readonly Entry[];
+  readonly notebook: { readonly name: string; readonly source: string };
+  readonly versions: Readonly<Record<string, string>>;
+}

@@ -1,0 +1,97 @@
+// The model: joints, members, supports, hinges and loads as frozen plain data, SI throughout (m, N, rad).
+//
+// Axes: x to the right, y up, moments and rotations counter-clockwise positive.
+// A member runs from its `start` joint to its `end` joint; positions along it are metres from the start.
+// Its reference fibre lies on the right-hand side of the walk from start to end: the lower side of a member
+// drawn left to right, the right side of a member going up. A positive bending moment puts that fibre in tension.
+
+/** Ledger entries a value came from, each "entry@version"; carried along unread by the mechanics. */
+export type Sources = readonly string[];
+
+/** A point where members meet or are supported. Coordinates in m. */
+export interface Joint {
+  readonly name: string;
+  readonly x: number;
+  readonly y: number;
+  readonly from: Sources;
+}
+
+/** A moment hinge inside a member, `at` metres from the member's start. */
+export interface Hinge {
+  readonly name: string;
+  readonly member: string;
+  readonly at: number;
+  readonly from: Sources;
+}
+
+/** What a released member end no longer transmits. */
+export interface Release {
+  readonly moment: boolean;
+}
+
+export interface Member {
+  readonly name: string;
+  readonly start: string;
+  readonly end: string;
+  readonly releases: { readonly start: Release; readonly end: Release };
+  readonly from: Sources;
+}
+
+/** A support and the displacements it holds: x, y, rotation. */
+export interface Support {
+  readonly joint: string;
+  readonly kind: "fixed" | "pinned" | "roller" | "free";
+  readonly holds: { readonly x: boolean; readonly y: boolean; readonly rotation: boolean };
+  readonly from: Sources;
+}
+
+/** A plane skeleton of beams. `family` says which builder made it, for wording and drawing only. */
+export interface Structure {
+  readonly family: "beam" | "portal" | "general";
+  readonly joints: readonly Joint[];
+  readonly members: readonly Member[];
+  readonly supports: readonly Support[];
+  readonly hinges: readonly Hinge[];
+}
+
+/** A place along a member: metres from its start, or a fraction of its length. */
+export type Place = { readonly metres: number } | { readonly fraction: number };
+
+/** Load spread over part of a member, N per metre of member, varying linearly from `q1` at `begin` to `q2` at `end`;
+ *  `direction` is a unit vector in global axes along which q is positive (gravity: [0, -1]). */
+export interface DistributedLoad {
+  readonly kind: "distributed";
+  readonly member: string;
+  readonly begin: Place;
+  readonly end: Place;
+  readonly q1: number;
+  readonly q2: number;
+  readonly direction: readonly [number, number];
+  readonly label: string;
+  readonly from: Sources;
+}
+
+/** Force (fx, fy) in N and couple in N·m at one place of a member. */
+export interface MemberPointLoad {
+  readonly kind: "member point";
+  readonly member: string;
+  readonly at: Place;
+  readonly fx: number;
+  readonly fy: number;
+  readonly couple: number;
+  readonly label: string;
+  readonly from: Sources;
+}
+
+/** Force (fx, fy) in N and couple in N·m at a joint. */
+export interface JointLoad {
+  readonly kind: "joint";
+  readonly joint: string;
+  readonly fx: number;
+  readonly fy: number;
+  readonly couple: number;
+  readonly label: string;
+  readonly from: Sources;
+}
+
+export type Load = DistributedLoad | MemberPointLoad | JointLoad;

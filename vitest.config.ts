@@ -1,0 +1,7 @@
+import { fileURLToPath } from "node:url";
+import { defineConfig } from "vitest/config";
+
+export default defineConfig({
+  resolve: { alias: { hingebook: fileURLToPath(new URL("./lib/index.ts", import.meta.url)) } },
+  test: { include: ["tests/**/*.test.ts"], testTimeout: 60_000, hookTimeout: 120_000 },
+});
