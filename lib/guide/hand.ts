@@ -1,0 +1,193 @@
+// Hand results as plain data with named questions: moment here, shear there, reaction at A.
+
+import { type Measure, type Quantity, quantity } from "../quantity/index.ts";
+import { extremes, memberLoads, type Side, sum, valueAt } from "../results/index.ts";
+import type { MemberForces, Piecewise, Reaction } from "../results/types.ts";
+import { axisOf, memberNamed, mergeSources, metresAlong, readPlace, snapToEnds } from "../structure/index.ts";
+import type { Sources, Structure } from "../structure/types.ts";
+import { loadSources, memberSources } from "./sources.ts";
+import type { Hand, Peak, SolvedSet, Spot } from "./types.ts";
+import { and } from "./words.ts";
+
+/** The results of solved hinge sets, added. All sets must be of one structure. */
+export function handOf(solved: readonly SolvedSet[]): Hand {
+  const first = solved[0];
+  if (first === undefined) throw new Error("freeBodies: no hinge set");
+  const frame = first.set.frame;
+  const key = JSON.stringify(frame);
+  for (const { set } of solved)
+    if (JSON.stringify(set.frame) !== key)
+      throw new Error(
+        `freeBodies: hinge sets ${first.set.name} and ${set.name} are of different structures; solve them apart`,
+      );
+  const members = addedMembers(solved);
+  const hand: Hand = {
+    frame,
+    name: solved.map(({ set }) => set.name).join(" + "),
+    solved,
+    members,
+    axial: (member, { at }) => forceAt(solved, members, "N", member, at),
+    shear: (member, { at }) => forceAt(solved, members, "V", member, at),
+    moment: (member, { at }) => momentAt(solved, members, member, at),
+    peakMoment: (member, sign) => peakMoment(solved, members, member, sign),
+    reaction: ((joint: string, component: Component) =>
+      reactionAt(solved, joint, component)) as Hand["reaction"],
+  };
+  return Object.freeze(hand);
+}
+
+type Component = "x" | "y" | "moment";
+
+function addedMembers(solved: readonly SolvedSet[]): readonly MemberForces[] {
+  const [first, ...others] = solved;
+  if (first === undefined || others.length === 0) return first?.solution.members ?? [];
+  return first.solution.members.map((forces) => {
+    const rest = others.flatMap(({ solution }) =>
+      solution.members.filter(({ member }) => member === forces.member),
+    );
+    const added = (pick: (one: MemberForces) => Piecewise): Piecewise => sum(pick(forces), ...rest.map(pick));
+    return {
+      ...forces,
+      N: added((one) => one.N),
+      V: added((one) => one.V),
+      M: added((one) => one.M),
+      uses: [],
+    };
+  });
+}
+
+function forcesOf(members: readonly MemberForces[], name: string): MemberForces {
+  const found = members.find(({ member }) => member === name);
+  if (found === undefined)
+    throw new Error(`no member "${name}"; members are ${members.map(({ member }) => member).join(", ")}`);
+  return found;
+}
+
+/** Distance from the member's start, and from which side the value is read there. */
+interface Station {
+  readonly x: number;
+  readonly side: Side;
+  readonly from: Sources;
+}
+
+function station(structure: Structure, member: string, at: Spot): Station {
+  const found = memberNamed(structure, member, "result");
+  const { length } = axisOf(structure, found);
+  if (at === found.start) return { x: 0, side: "right", from: [] };
+  if (at === found.end) return { x: length, side: "left", from: [] };
+  if (structure.joints.some(({ name }) => name === at))
+    throw new Error(
+      `joint ${String(at)} is not an end of ${member}; its ends are ${found.start} and ${found.end}`,
+    );
+  const { place, from } = readPlace(at as Measure<"length">, `place on ${member}`);
+  const x = snapToEnds(metresAlong(place, length), length);
+  if (!(x >= 0 && x <= length))
+    throw new Error(
+      `place ${String(at)} is outside ${member}, which is ${length} m long from ${found.start} to ${found.end}`,
+    );
+  const inside = x > 0 && x < length;
+  return {
+    x,
+    side: x === length ? "left" : "right",
+    from: inside ? from.concat(memberSources(structure, member)) : from,
+  };
+}
+
+/** What a value at a station stands on: the steps the functions follow from and, away from the ends, the member's loads. */
+function sourcesAt(
+  solved: readonly SolvedSet[],
+  member: string,
+  { from }: Station,
+  inside: boolean,
+): Sources {
+  const perSet = solved.flatMap(({ set, loads, solution, entries }) => {
+    const uses = solution.members.find((one) => one.member === member)?.uses ?? [];
+    const own = inside ? memberLoads(set.hinged, loads, member).loads.flatMap((i) => loads[i] ?? []) : [];
+    return [...uses.flatMap((i) => entries[i] ?? []), ...loadSources(own)];
+  });
+  return mergeSources(perSet, from);
+}
+
+function forceAt(
+  solved: readonly SolvedSet[],
+  members: readonly MemberForces[],
+  which: "N" | "V",
+  member: string,
+  at: Spot,
+): Quantity<"force"> {
+  const forces = forcesOf(members, member);
+  const where = station(frameOf(solved), member, at);
+  const inside = where.x > 0 && where.x < forces.length;
+  const value = valueAt(forces[which], where.x, where.side);
+  return quantity(value, "force", { from: sourcesAt(solved, member, where, inside) });
+}
+
+function momentAt(
+  solved: readonly SolvedSet[],
+  members: readonly MemberForces[],
+  member: string,
+  at: Spot,
+): Quantity<"moment"> {
+  const forces = forcesOf(members, member);
+  const where = station(frameOf(solved), member, at);
+  const inside = where.x > 0 && where.x < forces.length;
+  const value = valueAt(forces.M, where.x, where.side);
+  return quantity(value, "moment", { from: sourcesAt(solved, member, where, inside) });
+}
+
+function peakMoment(
+  solved: readonly SolvedSet[],
+  members: readonly MemberForces[],
+  member: string,
+  sign: "positive" | "negative",
+): Peak {
+  if (sign !== "positive" && sign !== "negative")
+    throw new Error(`peakMoment: "${String(sign)}" is neither "positive" nor "negative"`);
+  const forces = forcesOf(members, member);
+  const { greatest, least } = extremes(forces.M);
+  const { x, value } = sign === "positive" ? greatest : least;
+  const inside = { x, side: "right" as const, from: memberSources(frameOf(solved), member) };
+  const from = sourcesAt(solved, member, inside, true);
+  return Object.freeze({ moment: quantity(value, "moment", { from }), at: quantity(x, "length", { from }) });
+}
+
+function frameOf(solved: readonly SolvedSet[]): Structure {
+  const first = solved[0];
+  if (first === undefined) throw new Error("no hinge set");
+  return first.set.frame;
+}
+
+function reactionAt(
+  solved: readonly SolvedSet[],
+  joint: string,
+  component: Component,
+): Quantity<"force" | "moment"> {
+  const found = solved.map((one) => ({ one, reaction: reactionOf(one, joint) }));
+  const dimension = component === "moment" ? "moment" : "force";
+  let total = 0;
+  const from: string[] = [];
+  for (const { one, reaction } of found) {
+    const value = reaction[component];
+    if (value === undefined) throw new Error(notHeld(frameOf(solved), joint, component));
+    total += value;
+    const step = reaction.steps[component];
+    from.push(...(step === undefined ? [] : [one.entries[step] ?? ""]));
+  }
+  return quantity<"force" | "moment">(total, dimension, {
+    from: mergeSources(from.filter((use) => use !== "")),
+  });
+}
+
+function reactionOf({ solution }: SolvedSet, joint: string): Reaction {
+  const found = solution.reactions.find((one) => one.joint === joint);
+  if (found === undefined)
+    throw new Error(
+      `no support at "${joint}"; supports are at ${and(solution.reactions.map((one) => one.joint))}`,
+    );
+  return found;
+}
+
+function notHeld({ supports }: Structure, joint: string, component: Component): string {
+  const kind = supports.find((one) => one.joint === joint)?.kind ?? "support";
+  return `the ${kind} support at ${joint} has no reaction "${component}"`;
+}

@@ -1,0 +1,146 @@
+// The verb `reactions`: what the supports give, and whether the whole closes.
+
+import { footing, type Quantity, quantity } from "../quantity/index.ts";
+import {
+  type FormulaLines,
+  type Ledger,
+  type ShownValue,
+  shownValue,
+  type TableCell,
+  valueTex,
+} from "../sheet/index.ts";
+import { equilibrium } from "../statics/index.ts";
+import { mergeSources } from "../structure/index.ts";
+import { shownAs } from "./shown.ts";
+import { geometrySources, loadSources } from "./sources.ts";
+import type { Hand } from "./types.ts";
+
+type Component = "x" | "y" | "moment";
+
+/** One support's reactions, absent where it holds nothing. */
+export interface SupportReaction {
+  readonly joint: string;
+  readonly x?: Quantity<"force">;
+  readonly y?: Quantity<"force">;
+  readonly moment?: Quantity<"moment">;
+}
+
+const headings: Readonly<Record<Component, string>> = {
+  x: "horizontal, to the right",
+  y: "vertical, up",
+  moment: "moment, counter-clockwise",
+};
+
+/** Records the reactions as a table whose printed forces foot, and the equilibrium of the whole as three checks. */
+export function recordReactions(ledger: Ledger, hand: Hand): readonly SupportReaction[] {
+  const reactions = supportReactions(hand);
+  const used = (["x", "y", "moment"] as const).filter((one) =>
+    reactions.some((reaction) => reaction[one] !== undefined),
+  );
+  const columns = used.map((component) => column(reactions, component));
+  const cells = (row: number): readonly TableCell[] => columns.map((one) => one[row] ?? "");
+  ledger.put({
+    kind: "table",
+    id: `reactions ${hand.name}`,
+    uses: mergeSources(...reactions.flatMap(quantities).map(({ from }) => from)),
+    caption: `Reactions under ${hand.name}, on the structure`,
+    columns: ["support", ...used.map((component) => headings[component])],
+    rows: [
+      ...reactions.map(({ joint }, row) => [joint, ...cells(row)]),
+      ["sum of forces", ...cells(reactions.length)],
+    ],
+  });
+  recordEquilibrium(ledger, hand, reactions);
+  const lines = reactions.map(
+    ({ joint, ...values }) => `  ${joint}: ${used.map((c) => `${c} ${values[c] ?? "free"}`).join(", ")}`,
+  );
+  return shownAs(reactions, () => ({ "text/plain": [`reactions under ${hand.name}`, ...lines].join("\n") }));
+}
+
+function supportReactions(hand: Hand): readonly SupportReaction[] {
+  return hand.frame.supports
+    .filter(({ kind }) => kind !== "free")
+    .map(({ joint, holds }) => ({
+      joint,
+      ...(holds.x ? { x: hand.reaction(joint, "x") } : {}),
+      ...(holds.y ? { y: hand.reaction(joint, "y") } : {}),
+      ...(holds.rotation ? { moment: hand.reaction(joint, "moment") } : {}),
+    }));
+}
+
+function quantities({ x, y, moment }: SupportReaction): readonly Quantity[] {
+  return [x, y, moment].filter((value) => value !== undefined);
+}
+
+/** The cells of one column, then the cell of its sum; forces are printed so that they foot. */
+function column(reactions: readonly SupportReaction[], component: Component): readonly TableCell[] {
+  const values = reactions.flatMap((reaction) => reaction[component] ?? []);
+  if (component === "moment") return [...reactions.map((reaction) => cell(reaction.moment)), ""];
+  const forces = values as readonly Quantity<"force">[];
+  const { parts, total } = footing(forces);
+  let next = 0;
+  const cells = reactions.map((reaction) =>
+    cell(reaction[component], reaction[component] === undefined ? "" : parts[next++]),
+  );
+  const sum = forces.reduce((a, b) => a + b.si, 0);
+  const from = mergeSources(...forces.map((force) => force.from));
+  return [...cells, cell(quantity(sum, "force", { from }), total)];
+}
+
+function cell(value: Quantity | undefined, text?: string): TableCell {
+  if (value === undefined) return "";
+  const shown = shownValue(value);
+  return { value: text === undefined ? shown : { ...shown, text }, uses: value.from };
+}
+
+function recordEquilibrium(ledger: Ledger, hand: Hand, reactions: readonly SupportReaction[]): void {
+  const loads = hand.solved.flatMap((one) => one.loads);
+  const plain = reactions.map(({ joint, x, y, moment }) => ({
+    joint,
+    ...(x === undefined ? {} : { x: x.si }),
+    ...(y === undefined ? {} : { y: y.si }),
+    ...(moment === undefined ? {} : { moment: moment.si }),
+    steps: {},
+  }));
+  const [ofLoads, ofReactions, all] = [
+    equilibrium(hand.frame, loads, []),
+    equilibrium(hand.frame, [], plain),
+    equilibrium(hand.frame, loads, plain),
+  ];
+  const steps = mergeSources(...reactions.flatMap(quantities).map(({ from }) => from));
+  const sums = [
+    { key: "sumFx", name: "sum Fx", tex: "\\sum F_x", dimension: "force", scale: all.scale.force },
+    { key: "sumFy", name: "sum Fy", tex: "\\sum F_y", dimension: "force", scale: all.scale.force },
+    {
+      key: "sumM",
+      name: `sum M about ${all.about}`,
+      tex: `\\sum M_{${all.about}}`,
+      dimension: "moment",
+      scale: all.scale.moment,
+    },
+  ] as const;
+  for (const { key, name, tex, dimension, scale } of sums) {
+    const shown = (value: number): ShownValue => shownValue(quantity<"force" | "moment">(value, dimension));
+    ledger.put({
+      kind: "check",
+      id: `equilibrium ${hand.name} ${name}`,
+      uses: mergeSources(loadSources(loads), steps, key === "sumM" ? geometrySources(hand.frame) : []),
+      formula: `${name} = 0`,
+      lines: sumLines(tex, shown(ofReactions[key]), shown(ofLoads[key]), shown(all[key])),
+      inputs: {},
+      passed: Math.abs(all[key]) <= 1e-9 * Math.max(scale, negligible),
+      description: `whole structure under ${hand.name}: reactions and loads, ${name.replace("sum ", "Σ")}`,
+    });
+  }
+}
+
+/** Sums are judged by the largest force or moment in them, but not finer than this, N or N·m. */
+const negligible = 1e-3;
+
+function sumLines(tex: string, reactions: ShownValue, loads: ShownValue, total: ShownValue): FormulaLines {
+  return {
+    symbols: `${tex} = \\text{reactions} + \\text{loads}`,
+    numbers: `(${valueTex(reactions)}) + (${valueTex(loads)})`,
+    result: `${tex} = ${valueTex(total)}`,
+  };
+}
