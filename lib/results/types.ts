@@ -22,6 +22,8 @@ export interface MemberForces {
   readonly V: Piecewise;
   readonly M: Piecewise;
   readonly uses: readonly number[];
+  /** Indices of the loads that act on this member between its ends. */
+  readonly loads?: readonly number[];
 }
 
 /** Reaction components at a support; a component the support does not hold is absent.
@@ -83,10 +85,14 @@ export interface Term {
   readonly coefficient: number;
   readonly source: { readonly force: string; readonly step: number } | { readonly load: number };
   readonly value: number;
+  /** True where the value is a couple, so that the coefficient is a sense and not a lever arm. */
+  readonly couple?: true;
 }
 
 /** One equation of one body with one unknown: sum of terms + coefficient * result = 0. */
 export interface Step {
+  /** Stable name, unique in the solution: body, equation and point, "beam between h1 and h2: sum M about h1". */
+  readonly id: string;
   /** Index into `FreeBodySolution.bodies`; several when bodies were joined. */
   readonly bodies: readonly number[];
   readonly equation: "sum Fx" | "sum Fy" | "sum M";
@@ -98,6 +104,8 @@ export interface Step {
   readonly result: number;
   /** Indices of steps whose equations had to be solved together with this one (empty: a single unknown). */
   readonly together: readonly number[];
+  /** True when nothing with a value enters the equation, so that the unknown is zero: such steps may be shown together. */
+  readonly idle?: boolean;
   /** What the equation stands on: indices of loads, names of joints whose position enters, indices of earlier steps. */
   readonly uses: {
     readonly loads: readonly number[];
@@ -109,6 +117,8 @@ export interface Step {
 
 /** An equation left over after every unknown is found: it must close by itself. */
 export interface Closure {
+  /** Stable name, made as a step's. */
+  readonly id?: string;
   readonly bodies: readonly number[];
   readonly equation: Step["equation"];
   readonly about?: Point;
@@ -126,6 +136,8 @@ export interface FreeBodySolution {
   readonly closures: readonly Closure[];
   readonly reactions: readonly Reaction[];
   readonly members: readonly MemberForces[];
+  /** What was settled without an equation, in words: an axial reaction that is zero because no load acts along the line. */
+  readonly notes?: readonly string[];
 }
 
 /** A motion the structure can make without straining any member: displacement of each joint and hinge (unit: arbitrary,

@@ -17,6 +17,9 @@ export interface Head {
   readonly preparedBy: string;
   readonly checkedBy?: string;
   readonly approvedBy?: string;
+  /** Dates of checking and approval; `date` is that of preparation. */
+  readonly checkedOn?: string;
+  readonly approvedOn?: string;
   readonly date?: string;
   readonly revision?: string;
   readonly basis: string;
@@ -64,6 +67,8 @@ export interface AssumptionEntry extends EntryBase {
   readonly value?: ShownValue;
   readonly text: string;
   readonly because: string;
+  /** The value written in the notebook when another was set from outside. */
+  readonly overridden?: ShownValue;
 }
 
 export interface CalcEntry extends EntryBase {
@@ -186,6 +191,8 @@ export interface CalculationRecord {
   readonly complete: boolean;
   readonly failure?: Failure;
   readonly head: Head;
+  /** What the engineer says was left out of consideration, a sentence each. */
+  readonly notConsidered?: readonly string[];
   readonly overrides: readonly { readonly symbol: string; readonly written: string; readonly set: string }[];
   readonly entries: readonly Entry[];
   readonly notebook: { readonly name: string; readonly source: string };

@@ -27,6 +27,18 @@ export interface Hinge {
 /** What a released member end no longer transmits. */
 export interface Release {
   readonly moment: boolean;
+  readonly shear?: boolean;
+  readonly axial?: boolean;
+}
+
+/** A prismatic cross-section: A in m², I in m⁴, E in N/m²; or ratios of them, when only forces are wanted.
+ *  `alpha` is the thermal expansion in 1/K, `depth` the depth in m that a temperature difference acts over. */
+export interface Section {
+  readonly A: number;
+  readonly I: number;
+  readonly E: number;
+  readonly alpha?: number;
+  readonly depth?: number;
 }
 
 export interface Member {
@@ -34,20 +46,29 @@ export interface Member {
   readonly start: string;
   readonly end: string;
   readonly releases: { readonly start: Release; readonly end: Release };
+  readonly section?: Section;
+  /** Members that share sections and variations of them: "columns", "beams". */
+  readonly group?: string;
   readonly from: Sources;
 }
 
-/** A support and the displacements it holds: x, y, rotation. */
+/** A support and the displacements it holds: x, y, rotation. `kind` is the nearest of four, for wording and drawing.
+ *  With an `angle` (rad) x and y are axes turned counter-clockwise by it; `springs` resist along the same axes,
+ *  N/m and N·m/rad, where nothing is held. */
 export interface Support {
   readonly joint: string;
   readonly kind: "fixed" | "pinned" | "roller" | "free";
   readonly holds: { readonly x: boolean; readonly y: boolean; readonly rotation: boolean };
+  readonly springs?: { readonly x?: number; readonly y?: number; readonly rotation?: number };
+  readonly angle?: number;
   readonly from: Sources;
 }
 
 /** A plane skeleton of beams. `family` says which builder made it, for wording and drawing only. */
 export interface Structure {
   readonly family: "beam" | "portal" | "general";
+  /** What a "general" one is, when a builder made it. */
+  readonly form?: "building frame" | "truss" | "panel girder" | "truss portal";
   readonly joints: readonly Joint[];
   readonly members: readonly Member[];
   readonly supports: readonly Support[];
@@ -58,7 +79,9 @@ export interface Structure {
 export type Place = { readonly metres: number } | { readonly fraction: number };
 
 /** Load spread over part of a member, N per metre of member, varying linearly from `q1` at `begin` to `q2` at `end`;
- *  `direction` is a unit vector in global axes along which q is positive (gravity: [0, -1]). */
+ *  `direction` is a unit vector in global axes along which q is positive (gravity: [0, -1]).
+ *  With `axes: "member"` the direction is given as [along, towards the left of the walk]; with `per` q is per metre of
+ *  the member's projection on the horizontal or the vertical (see `inGlobalAxes`). */
 export interface DistributedLoad {
   readonly kind: "distributed";
   readonly member: string;
@@ -67,17 +90,21 @@ export interface DistributedLoad {
   readonly q1: number;
   readonly q2: number;
   readonly direction: readonly [number, number];
+  readonly axes?: "member";
+  readonly per?: "horizontal" | "vertical";
   readonly label: string;
   readonly from: Sources;
 }
 
-/** Force (fx, fy) in N and couple in N·m at one place of a member. */
+/** Force (fx, fy) in N and couple in N·m at one place of a member; with `axes: "member"` fx acts along the member
+ *  and fy towards the left of the walk. */
 export interface MemberPointLoad {
   readonly kind: "member point";
   readonly member: string;
   readonly at: Place;
   readonly fx: number;
   readonly fy: number;
+  readonly axes?: "member";
   readonly couple: number;
   readonly label: string;
   readonly from: Sources;
@@ -95,3 +122,28 @@ export interface JointLoad {
 }
 
 export type Load = DistributedLoad | MemberPointLoad | JointLoad;
+
+/** Change of temperature of a whole member, K: `uniform` at its axis, and `difference` = reference fibre less opposite
+ *  fibre. Needs the section's alpha, the difference its depth too. */
+export interface TemperatureLoad {
+  readonly kind: "temperature";
+  readonly member: string;
+  readonly uniform: number;
+  readonly difference: number;
+  readonly label: string;
+  readonly from: Sources;
+}
+
+/** Movement of the ground under a support, m and rad, along the support's own axes. */
+export interface Settlement {
+  readonly kind: "settlement";
+  readonly joint: string;
+  readonly x: number;
+  readonly y: number;
+  readonly rotation: number;
+  readonly label: string;
+  readonly from: Sources;
+}
+
+/** Deformations imposed from outside. They make no force in a determinate structure, so statics knows only `Load`. */
+export type Imposed = TemperatureLoad | Settlement;

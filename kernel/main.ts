@@ -1,0 +1,44 @@
+// The command line: from words to exit code.
+import { readFileSync } from "node:fs";
+import { join } from "node:path";
+import { type Asked, HELP, readArguments, UsageError } from "./arguments.ts";
+import { ownFolder } from "./folders.ts";
+import type { Library } from "./library.ts";
+import type { Terminal } from "./run.ts";
+
+function version(): string {
+  const { version: text } = JSON.parse(readFileSync(join(ownFolder(), "package.json"), "utf8")) as {
+    version: string;
+  };
+  return text;
+}
+
+async function loaded(): Promise<Library> {
+  const { loadLibrary } = await import("./library.ts");
+  return loadLibrary();
+}
+
+async function run(asked: Extract<Asked, { command: "run" }>, terminal: Terminal): Promise<number> {
+  const { runNotebooks } = await import("./run.ts");
+  const { files, out, overrides } = asked;
+  const versions = { hingebook: version(), node: process.versions.node };
+  const states = await runNotebooks({ files, out, overrides, terminal, versions, library: loaded });
+  return states.every((state) => state === "complete") ? 0 : 1;
+}
+
+/** Do what the words after "hingebook" ask; answers the exit code: 0 done, 1 failed, 2 not understood. */
+export async function main(words: readonly string[], terminal: Terminal): Promise<number> {
+  try {
+    const asked = readArguments(words);
+    if (asked.command === "run") return await run(asked, terminal);
+    terminal.out(asked.command === "help" ? HELP : `${version()}\n`);
+    return 0;
+  } catch (error) {
+    if (error instanceof UsageError) {
+      terminal.err(`hingebook: ${error.message}\nhingebook --help tells more\n`);
+      return 2;
+    }
+    terminal.err(`hingebook: ${error instanceof Error ? error.message : String(error)}\n`);
+    return 1;
+  }
+}

@@ -1,0 +1,77 @@
+// Plane geometry of the page: units of the viewBox, x to the right, y down.
+
+export type Pt = readonly [number, number];
+export type Segment = readonly [Pt, Pt];
+
+/** Left, top, right, bottom. */
+export interface Box {
+  readonly left: number;
+  readonly top: number;
+  readonly right: number;
+  readonly bottom: number;
+}
+
+export const plus = (a: Pt, b: Pt): Pt => [a[0] + b[0], a[1] + b[1]];
+export const minus = (a: Pt, b: Pt): Pt => [a[0] - b[0], a[1] - b[1]];
+export const times = (a: Pt, k: number): Pt => [a[0] * k, a[1] * k];
+export const along = (a: Pt, direction: Pt, distance: number): Pt => plus(a, times(direction, distance));
+export const between = (a: Pt, b: Pt, t: number): Pt => [a[0] + (b[0] - a[0]) * t, a[1] + (b[1] - a[1]) * t];
+export const distance = (a: Pt, b: Pt): number => Math.hypot(a[0] - b[0], a[1] - b[1]);
+export const dot = (a: Pt, b: Pt): number => a[0] * b[0] + a[1] * b[1];
+export const turned = (a: Pt, angle: number): Pt => [
+  a[0] * Math.cos(angle) - a[1] * Math.sin(angle),
+  a[0] * Math.sin(angle) + a[1] * Math.cos(angle),
+];
+
+/** Unit vector of `a`, or `otherwise` where `a` has no length. */
+export function unit(a: Pt, otherwise: Pt = [0, -1]): Pt {
+  const length = Math.hypot(a[0], a[1]);
+  return length < 1e-9 ? otherwise : [a[0] / length, a[1] / length];
+}
+
+export function boxOf(points: readonly Pt[], pad = 0): Box {
+  const xs = points.map((p) => p[0]);
+  const ys = points.map((p) => p[1]);
+  return {
+    left: Math.min(...xs) - pad,
+    top: Math.min(...ys) - pad,
+    right: Math.max(...xs) + pad,
+    bottom: Math.max(...ys) + pad,
+  };
+}
+
+export function union(boxes: readonly Box[]): Box {
+  return {
+    left: Math.min(...boxes.map((b) => b.left)),
+    top: Math.min(...boxes.map((b) => b.top)),
+    right: Math.max(...boxes.map((b) => b.right)),
+    bottom: Math.max(...boxes.map((b) => b.bottom)),
+  };
+}
+
+/** Area two boxes share. */
+export function overlap(a: Box, b: Box): number {
+  const width = Math.min(a.right, b.right) - Math.max(a.left, b.left);
+  const height = Math.min(a.bottom, b.bottom) - Math.max(a.top, b.top);
+  return width > 0 && height > 0 ? width * height : 0;
+}
+
+/** Length of a segment inside a box, by clipping its parameter against the four sides; a touching point counts 0. */
+export function lengthInside([a, b]: Segment, box: Box): number {
+  const [dx, dy] = minus(b, a);
+  let enters = 0;
+  let leaves = 1;
+  const sides: readonly (readonly [number, number])[] = [
+    [-dx, a[0] - box.left],
+    [dx, box.right - a[0]],
+    [-dy, a[1] - box.top],
+    [dy, box.bottom - a[1]],
+  ];
+  for (const [p, q] of sides) {
+    if (p === 0) {
+      if (q < 0) return 0;
+    } else if (p < 0) enters = Math.max(enters, q / p);
+    else leaves = Math.min(leaves, q / p);
+  }
+  return leaves > enters ? (leaves - enters) * Math.hypot(dx, dy) : 0;
+}

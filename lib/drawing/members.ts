@@ -1,0 +1,113 @@
+// Members, joints and hinges of a structure on the page.
+
+import type { Joint, Place, Structure } from "../structure/types.ts";
+import { minus, type Pt, plus, times, unit } from "./geometry.ts";
+import type { Scale } from "./scale.ts";
+import { disc, type Label, line, merge, PENS, type Pen, type Scene, scene } from "./scene.ts";
+
+export function jointOf(structure: Structure, name: string): Joint {
+  const joint = structure.joints.find((j) => j.name === name);
+  if (joint) return joint;
+  const known = structure.joints.map((j) => j.name).join(", ");
+  throw new Error(`figure: joint "${name}" is not in the structure; joints are ${known}`);
+}
+
+/** A member as it lies on the page. */
+export interface MemberLine {
+  readonly name: string;
+  readonly length: number;
+  /** World unit vector from start to end, y up. */
+  readonly axis: Pt;
+  /** Page unit vector towards the reference fibre. */
+  readonly fibre: Pt;
+  /** Page point `x` metres from the start. */
+  readonly page: (x: number) => Pt;
+  /** World point `x` metres from the start. */
+  readonly world: (x: number) => Pt;
+}
+
+export function memberLine(structure: Structure, name: string, scale: Scale): MemberLine {
+  const member = structure.members.find((m) => m.name === name);
+  if (!member) {
+    const known = structure.members.map((m) => m.name).join(", ");
+    throw new Error(`figure: member "${name}" is not in the structure; members are ${known}`);
+  }
+  const a = jointOf(structure, member.start);
+  const b = jointOf(structure, member.end);
+  const length = Math.hypot(b.x - a.x, b.y - a.y);
+  if (!(length > 0))
+    throw new Error(`figure: member "${name}" has length ${length} m; more than 0 is wanted`);
+  const axis: Pt = [(b.x - a.x) / length, (b.y - a.y) / length];
+  const world = (x: number): Pt => [a.x + axis[0] * x, a.y + axis[1] * x];
+  // Right-hand side of the walk is (dy, -dx) with y up, hence (dy, dx) on the page.
+  return {
+    name,
+    length,
+    axis,
+    fibre: [axis[1], axis[0]],
+    world,
+    page: (x) => scale.page(...world(x)),
+  };
+}
+
+/** Metres from the start of a member of given length. */
+export const metresOf = (place: Place, length: number): number =>
+  "metres" in place ? place.metres : place.fraction * length;
+
+export const worldPoints = (structure: Structure): Pt[] => structure.joints.map((j): Pt => [j.x, j.y]);
+
+/** All members as lines of one pen. */
+export function memberLines(structure: Structure, scale: Scale, pen: Pen): Scene {
+  return scene(
+    structure.members.map((m) => {
+      const on = memberLine(structure, m.name, scale);
+      return line(on.page(0), on.page(on.length), pen);
+    }),
+  );
+}
+
+/** Page direction away from the members that meet at a joint. */
+export function outwardAt(structure: Structure, joint: string, scale: Scale): Pt {
+  const own = jointOf(structure, joint);
+  const here = scale.page(own.x, own.y);
+  const towards = structure.members
+    .filter((m) => m.start === joint || m.end === joint)
+    .map((m): Pt => {
+      const other = jointOf(structure, m.start === joint ? m.end : m.start);
+      return unit(minus(scale.page(other.x, other.y), here));
+    });
+  const sum = towards.reduce((s, t) => plus(s, t), [0, 0] as Pt);
+  return unit(times(sum, -1), [0, -1]);
+}
+
+const HINGE_RADIUS = 4.6;
+
+export const hingeDisc = (centre: Pt): Scene =>
+  scene([disc(centre, HINGE_RADIUS, { ...PENS.load, width: 1.5 }, false)]);
+
+/** Hinges inside members with their names, and released member ends a little off the joint. */
+export function hinges(structure: Structure, scale: Scale): Scene {
+  const inside = structure.hinges.map((hinge) => {
+    const on = memberLine(structure, hinge.member, scale);
+    const label: Label = { text: hinge.name, at: on.page(hinge.at), prefer: on.fibre, gap: 8 };
+    return merge(hingeDisc(on.page(hinge.at)), scene([], [label]));
+  });
+  const released = structure.members.flatMap((member) => {
+    const on = memberLine(structure, member.name, scale);
+    const inset = Math.min(9 / scale.k, on.length / 4);
+    return [
+      ...(member.releases.start.moment ? [hingeDisc(on.page(inset))] : []),
+      ...(member.releases.end.moment ? [hingeDisc(on.page(on.length - inset))] : []),
+    ];
+  });
+  return merge(...inside, ...released);
+}
+
+/** Names of joints, outside the corner they mark. */
+export function jointNames(structure: Structure, scale: Scale): Scene {
+  const labels = structure.joints.map((joint): Label => {
+    const outward = outwardAt(structure, joint.name, scale);
+    return { text: joint.name, at: scale.page(joint.x, joint.y), prefer: outward, gap: 7, bold: true };
+  });
+  return scene([], labels);
+}

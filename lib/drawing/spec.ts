@@ -1,0 +1,104 @@
+// What a figure shows, as plain data for the record. Geometry and loads are SI (m, N, N·m); everything that is
+// printed comes as text, because units and rounding are decided where the numbers are known.
+
+import type { FreeBody, Mechanism, MemberForces, Point } from "../results/types.ts";
+import type { Load, Structure } from "../structure/types.ts";
+
+interface FigureWords {
+  /** Short name of the figure, read out first. */
+  readonly title: string;
+  /** What the figure shows, in words, for readers who cannot see it. */
+  readonly description: string;
+}
+
+/** A dimension line between two places, measured along x (drawn below the figure) or along y (drawn beside it). */
+export interface DimensionLine {
+  readonly along: "x" | "y";
+  readonly from: readonly [number, number];
+  readonly to: readonly [number, number];
+  readonly text: string;
+}
+
+/** A text beside a place of the figure. */
+export interface PlacedText {
+  readonly at: readonly [number, number];
+  readonly text: string;
+}
+
+/** The structure with supports, hinges and loads. `loadTexts` are printed beside the loads, in their order
+ *  (default: each load's label). */
+export interface StructureFigure extends FigureWords {
+  readonly kind: "structure";
+  readonly structure: Structure;
+  readonly loads: readonly Load[];
+  readonly loadTexts?: readonly string[];
+  readonly dimensions?: readonly DimensionLine[];
+  readonly labels?: readonly PlacedText[];
+}
+
+/** A motion the structure can make: its skeleton thin, the moved skeleton dashed, arrows at what moves. */
+export interface MechanismFigure extends FigureWords {
+  readonly kind: "mechanism";
+  readonly structure: Structure;
+  readonly mechanism: Mechanism;
+}
+
+/** One body cut free with everything that acts on it. `texts` go with `body.actions`, one each: the magnitude of a
+ *  known action, the name of an unknown one. An action with a value is drawn in its true sense, one without along
+ *  its positive sense. `sought` are the unknowns this body is to give. `resultants`, one per action, adds the
+ *  resultant of a distributed load with this text; an empty text adds none. */
+export interface FreeBodyFigure extends FigureWords {
+  readonly kind: "free body";
+  readonly structure: Structure;
+  readonly loads: readonly Load[];
+  readonly body: FreeBody;
+  readonly texts: readonly string[];
+  readonly resultants?: readonly string[];
+  readonly sought?: readonly string[];
+  /** The point moments are taken about. */
+  readonly about?: Point;
+  readonly dimensions?: readonly DimensionLine[];
+}
+
+export type ForceQuantity = "N" | "V" | "M";
+
+/** A printed place of a diagram: `at` in m from the member's start, `value` in N or N·m as drawn there. */
+export interface DiagramMark {
+  readonly quantity: ForceQuantity;
+  readonly member: string;
+  readonly at: number;
+  readonly value: number;
+  readonly kind: "end" | "extreme" | "jump" | "zero";
+  /** May be empty for a zero that is only marked. */
+  readonly text: string;
+}
+
+/** N, V and M drawn on the members, one panel per quantity. `headings` replace the panels' own headings. */
+export interface DiagramsFigure extends FigureWords {
+  readonly kind: "diagrams";
+  readonly structure: Structure;
+  readonly forces: readonly MemberForces[];
+  readonly quantities: readonly ForceQuantity[];
+  readonly moments: "tension side" | "compression side";
+  readonly marks: readonly DiagramMark[];
+  readonly headings?: Readonly<Partial<Record<ForceQuantity, string>>>;
+}
+
+/** One line of a chart: points in the units of the axis titles. */
+export interface ChartSeries {
+  readonly name: string;
+  readonly points: readonly (readonly [number, number])[];
+}
+
+/** An x-y chart; its lines are told apart by their dashes. */
+export interface LineChartFigure extends FigureWords {
+  readonly kind: "line chart";
+  readonly x: string;
+  readonly y: string;
+  readonly series: readonly ChartSeries[];
+}
+
+/** Figures drawn at once, without loading anything. */
+export type SketchSpec = StructureFigure | MechanismFigure | FreeBodyFigure | DiagramsFigure;
+
+export type FigureSpec = SketchSpec | LineChartFigure;

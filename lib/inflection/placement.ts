@@ -1,0 +1,206 @@
+// Placing a hinge in a member, and what to say about the place.
+
+import { type MemberLoads, memberLoads } from "../results/index.ts";
+import {
+  type Along,
+  axisOf,
+  type HingeAt,
+  inGlobalAxes,
+  type Load,
+  type Member,
+  memberNamed,
+  metresAlong,
+  readPlace,
+  type Sources,
+  type Structure,
+  snapToEnds,
+} from "../structure/index.ts";
+import { InflectionError } from "./faults.ts";
+import {
+  type End,
+  inflectionPoints,
+  inflectionRange,
+  isolatedRange,
+  type Range,
+} from "./inflection-points.ts";
+import { isLoaded } from "./span.ts";
+
+export interface PlacementChoice {
+  readonly member: string;
+  /** The end joint the hinge is measured from and belongs to. */
+  readonly from: string;
+  /** Distance from that end: a length, or a part of the member's length such as "0.125 L". */
+  readonly at?: Along;
+  /** Or the fixities of both ends, 0 free to turn to 1 fixed; the hinge goes to the point of inflection they give. */
+  readonly fixity?: { readonly near: number; readonly far: number };
+}
+
+export interface Placement {
+  readonly member: string;
+  readonly from: string;
+  /** m from the joint `from`. */
+  readonly distance: number;
+  /** m from the member's start. */
+  readonly at: number;
+  readonly length: number;
+  /** Where the point of inflection of the isolated member can lie, m from `from`; absent where its own loads give none. */
+  readonly range?: Range;
+  /** Whether the hinge lies in the range. */
+  readonly inside?: boolean;
+  /** What the distance was made from. */
+  readonly sources: Sources;
+  /** One sentence: where it is, why there, and how it lies to the range. */
+  readonly words: string;
+  /** Ready for `withHinges`. */
+  readonly hinge: HingeAt;
+}
+
+/** A hinge placed by a distance or by end fixity, judged by the range of the isolated span under these loads.
+ *  An end held or free to turn for certain (a support with no other member) counts as such, other ends as anything between.
+ *  A member without load across it, under loads that do not push the structure sideways, is judged as turned at its far end. */
+export function placement(structure: Structure, loads: readonly Load[], choice: PlacementChoice): Placement {
+  const member = memberNamed(structure, choice.member, "hinge");
+  const { length } = axisOf(structure, member);
+  const { from } = choice;
+  if (from !== member.start && from !== member.end)
+    throw new InflectionError({
+      kind: "not an end",
+      member: member.name,
+      joint: from,
+      ends: [member.start, member.end],
+    });
+  if ((choice.at === undefined) === (choice.fixity === undefined))
+    throw new InflectionError({ kind: "both or neither", member: member.name });
+  const near: End = from === member.start ? "left" : "right";
+  const own = memberLoads(structure, loads, member.name);
+  const { distance, sources } = distanceOf(own, choice, near, length);
+  if (!(distance > 0 && distance < length))
+    throw new InflectionError({ kind: "outside", member: member.name, distance, length });
+  const judged = rangeOf(structure, loads, member, near, own);
+  const inside = judged.range === undefined ? undefined : isInside(distance, judged.range, length);
+  const at = near === "left" ? distance : length - distance;
+  const words = wordsOf(choice, distance, length, judged, inside);
+  const hinge: HingeAt = { member: member.name, from, at: choice.at ?? `${distance} m`, sources };
+  const found = {
+    member: member.name,
+    from,
+    distance,
+    at,
+    length,
+    sources,
+    words,
+    hinge: Object.freeze(hinge),
+  };
+  return Object.freeze(
+    judged.range === undefined || inside === undefined ? found : { ...found, range: judged.range, inside },
+  );
+}
+
+function distanceOf(
+  own: MemberLoads,
+  choice: PlacementChoice,
+  near: End,
+  length: number,
+): { readonly distance: number; readonly sources: Sources } {
+  if (choice.at !== undefined) {
+    const { place, from } = readPlace(choice.at, `hinge in ${choice.member}`);
+    return { distance: snapToEnds(metresAlong(place, length), length), sources: from };
+  }
+  const { near: rNear = 1, far: rFar = 1 } = choice.fixity ?? {};
+  if (!isLoaded(own)) throw new InflectionError({ kind: "unloaded" });
+  const points = inflectionPoints(
+    own,
+    near === "left" ? { left: rNear, right: rFar } : { left: rFar, right: rNear },
+  );
+  const point = near === "left" ? points[0] : points[points.length - 1];
+  if (point === undefined) throw new InflectionError({ kind: "no inflection", end: choice.from });
+  return { distance: near === "left" ? point : length - point, sources: [] };
+}
+
+interface Judged {
+  readonly range?: Range;
+  readonly why: string;
+}
+
+function rangeOf(
+  structure: Structure,
+  loads: readonly Load[],
+  member: Member,
+  near: End,
+  own: MemberLoads,
+): Judged {
+  const [here, there] = near === "left" ? [member.start, member.end] : [member.end, member.start];
+  const [known, far] = [knownFixity(structure, member, here), knownFixity(structure, member, there)];
+  if (known === 0) throw new InflectionError({ kind: "pinned end", member: member.name, joint: here });
+  if (!isLoaded(own))
+    return unloadedRange(
+      loads.map((load) => inGlobalAxes(structure, load)),
+      own.length,
+      far,
+    );
+  try {
+    const range = far === undefined ? isolatedRange(own, near) : inflectionRange(own, near, far);
+    return { range, why: `isolated span, ${here} from free to turn to fixed, ${farWords(there, far)}` };
+  } catch (error) {
+    if (error instanceof InflectionError && error.fault.kind === "no inflection")
+      return { why: error.message };
+    throw error;
+  }
+}
+
+/** A member turned at its far end only: M_near = -r M_far/2, hence zero at L r / (2 + r) from the near end, L/3 at most. */
+function unloadedRange(loads: readonly Load[], length: number, far: number | undefined): Judged {
+  if (loads.some(pushesSideways))
+    return {
+      why: "no load across the member and loads that may move the structure sideways: its own loads give no range",
+    };
+  if (far !== undefined)
+    return {
+      why: "no load across the member, and its far end cannot be turned by others: its own loads give no range",
+    };
+  return {
+    range: Object.freeze({ least: 0, most: length / 3 }),
+    why: "no load across the member, far end turned by the frame, this end from free to turn to fixed",
+  };
+}
+
+function pushesSideways(load: Load): boolean {
+  return load.kind === "distributed" ? load.direction[0] !== 0 : load.fx !== 0;
+}
+
+/** 0 or 1 where nothing but a support decides how the end can turn. */
+function knownFixity(structure: Structure, member: Member, joint: string): 0 | 1 | undefined {
+  const released = joint === member.start ? member.releases.start.moment : member.releases.end.moment;
+  if (released) return 0;
+  if (structure.supports.some((s) => s.joint === joint && s.holds.rotation)) return 1;
+  const others = structure.members.some((m) => m !== member && (m.start === joint || m.end === joint));
+  return others ? undefined : 0;
+}
+
+function isInside(distance: number, { least, most }: Range, length: number): boolean {
+  return distance >= least - 1e-9 * length && distance <= most + 1e-9 * length;
+}
+
+function farWords(joint: string, far: number | undefined): string {
+  if (far === undefined) return `${joint} likewise`;
+  return far === 0 ? `${joint} free to turn` : `${joint} fixed`;
+}
+
+function wordsOf(
+  { member, from, fixity }: PlacementChoice,
+  distance: number,
+  length: number,
+  { range, why }: Judged,
+  inside: boolean | undefined,
+): string {
+  const part = (x: number): string => `${Number((x / length).toPrecision(4))} L`;
+  const chosen =
+    fixity === undefined
+      ? ""
+      : `, the point of inflection for end fixities ${fixity.near} at ${from} and ${fixity.far} at the far end`;
+  const place = `hinge in ${member} ${Number(distance.toPrecision(4))} m (${part(distance)}) from ${from}${chosen}`;
+  if (range === undefined) return `${place}; ${why}`;
+  const span = `${range.least === 0 ? "0" : part(range.least)} to ${part(range.most)} (${why})`;
+  if (inside) return `${place}; inside the range ${span}`;
+  return `${place}; OUTSIDE the range ${span}: right only beside loaded or much longer spans, or where a joint moves`;
+}

@@ -1,0 +1,3 @@
+export { figureBundle, figureDisplay, type MediaBundle } from "./display.ts";
+export { drawFigureSpec } from "./figure.ts";
+export { type PackageOptions, renderPackage } from "./package.ts";

@@ -1,0 +1,44 @@
+// Tables, whose numbers lead to what they stand on like any other.
+
+import type { TableCell, TableEntry } from "../sheet/index.ts";
+import { type Html, h, type Part } from "./html.ts";
+import { cellLink } from "./references.ts";
+
+/** Cells of a table that stand on the same entries. */
+export interface CellGroup {
+  readonly uses: readonly string[];
+  readonly texts: readonly string[];
+}
+
+const keyOf = (cell: Exclude<TableCell, string>): string => JSON.stringify(cell.uses);
+
+/** The numbers of a table grouped by what they stand on, in reading order. */
+export function cellGroups(entry: TableEntry): readonly CellGroup[] {
+  const groups = new Map<string, { uses: readonly string[]; texts: string[] }>();
+  for (const cell of entry.rows.flat()) {
+    if (typeof cell === "string") continue;
+    const group = groups.get(keyOf(cell)) ?? { uses: cell.uses, texts: [] };
+    group.texts.push(cell.value.text);
+    groups.set(keyOf(cell), group);
+  }
+  return [...groups.values()];
+}
+
+function rowOf(entry: TableEntry, row: readonly TableCell[], keys: readonly string[]): Html {
+  return h`<tr>${row.map((cell, i): Part => {
+    if (typeof cell === "string") return i === 0 ? h`<th scope="row">${cell}</th>` : h`<td>${cell}</td>`;
+    return h`<td class="figures">${cellLink(entry.id, keys.indexOf(keyOf(cell)), cell.value.text)}</td>`;
+  })}</tr>
+`;
+}
+
+/** A table with its caption, in a frame that scrolls where the page is narrow. */
+export function table(entry: TableEntry): Html {
+  const keys = cellGroups(entry).map((g) => JSON.stringify(g.uses));
+  return h`<div class="scroll" tabindex="0" role="region" aria-label="${entry.caption}"><table>
+<caption>${entry.caption}</caption>
+<thead><tr>${entry.columns.map((c) => (c === "" ? h`<td></td>` : h`<th scope="col">${c}</th>`))}</tr></thead>
+<tbody>
+${entry.rows.map((row) => rowOf(entry, row, keys))}</tbody>
+</table></div>`;
+}

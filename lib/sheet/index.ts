@@ -1,0 +1,14 @@
+// The ledger of one calculation: givens, assumptions, steps, checks; formulas; the record format; the runner's contract.
+
+export { escaped, formulaDisplay, lineDisplay } from "./display.ts";
+export type { Draft } from "./draft.ts";
+export { attachHost, type CellRef, type Host, host } from "./host.ts";
+export type { CheckResult, DimensionAsked, Ledger } from "./ledger.ts";
+export { toMathML } from "./mathml.ts";
+export { currentLedger, forgetLedger, openLedger } from "./open.ts";
+export type { Overridden } from "./overrides.ts";
+export * from "./record.ts";
+export { shownAsWritten, shownValue } from "./shown.ts";
+export { readUse } from "./store.ts";
+export { checkedSymbol, symbolTex } from "./symbol.ts";
+export { numberTex, unitTex, valueTex } from "./tex.ts";

@@ -1,0 +1,144 @@
+// The entries of a ledger: their versions, the cells that made them, their order, and whether they are out of date.
+
+import { type Draft, frozen, substance, symbolOf } from "./draft.ts";
+import { type CellRef, type Host, host } from "./host.ts";
+import type { Entry } from "./record.ts";
+
+interface Stored {
+  readonly draft: Draft;
+  readonly version: number;
+  readonly cell: CellRef | undefined;
+  readonly order: number;
+}
+
+interface Past {
+  readonly version: number;
+  readonly substance: string;
+}
+
+export class EntryStore {
+  readonly #stored = new Map<string, Stored>();
+  // Outlives an entry that is dropped, so that a version is never given to two values.
+  readonly #past = new Map<string, Past>();
+  readonly #numbers = new Map<string, number>();
+  #made = new Set<string>();
+  #host: Host | undefined;
+  #order = 0;
+
+  /** Stores an entry made by the running cell and answers with it. A symbol must not belong to another cell;
+   *  the id of any other entry gets a number when it is taken. */
+  put(draft: Draft, at: CellRef | undefined = host().cell): Entry {
+    this.#newRun(at);
+    const kept: Draft = frozen({ ...draft, id: this.#freeId(draft, at) });
+    const now = substance(kept);
+    const before = this.#past.get(kept.id);
+    const version = before === undefined ? 1 : before.substance === now ? before.version : before.version + 1;
+    this.#past.set(kept.id, { version, substance: now });
+    this.#stored.set(kept.id, { draft: kept, version, cell: at, order: this.#order++ });
+    this.#made.add(kept.id);
+    return this.#entry(kept.id, new Map());
+  }
+
+  /** The entry of an id, if there is one. */
+  get(id: string): Entry | undefined {
+    return this.#stored.has(id) ? this.#entry(id, new Map()) : undefined;
+  }
+
+  /** All entries in the order of the cells, then of making. */
+  all(): readonly Entry[] {
+    const known = new Map<string, boolean>();
+    return [...this.#stored]
+      .sort(([, a], [, b]) => this.#number(a.cell) - this.#number(b.cell) || a.order - b.order)
+      .map(([id]) => this.#entry(id, known));
+  }
+
+  /** Drops the entries an earlier run of the cell made and its last run did not. */
+  endCell(cellId: string): void {
+    // A cell that recorded nothing this time has started no run of its own here.
+    if (host().cell?.id === cellId) this.#newRun(host().cell);
+    for (const [id, { cell }] of [...this.#stored]) {
+      if (cell?.id === cellId && !this.#made.has(id)) this.#stored.delete(id);
+    }
+    this.#made = new Set();
+    this.#host = undefined;
+  }
+
+  /** A runner attaches a new host before each cell: entries made since then are of this run. */
+  #newRun(at: CellRef | undefined): void {
+    if (at !== undefined) this.#numbers.set(at.id, at.number);
+    if (host() === this.#host) return;
+    this.#host = host();
+    this.#made = new Set();
+  }
+
+  #freeId(draft: Draft, at: CellRef | undefined): string {
+    const symbol = symbolOf(draft);
+    if (symbol !== undefined) {
+      this.#refuseSecond(symbol, draft.id, at);
+      return draft.id;
+    }
+    if (draft.kind === "text") return draft.id; // one text cell, one entry
+    let id = draft.id;
+    for (let n = 2; this.#taken(id, at); n++) id = `${draft.id} (${n})`;
+    return id;
+  }
+
+  #taken(id: string, at: CellRef | undefined): boolean {
+    const there = this.#stored.get(id);
+    return there !== undefined && (this.#made.has(id) || there.cell?.id !== at?.id);
+  }
+
+  #refuseSecond(symbol: string, id: string, at: CellRef | undefined): void {
+    const there = this.#stored.get(id);
+    if (there === undefined || at === undefined) return;
+    if (there.cell?.id !== at.id) {
+      const first =
+        there.cell === undefined ? "before the first cell" : `in cell ${this.#number(there.cell)}`;
+      throw new Error(
+        `${symbol} is defined ${first} and again in cell ${at.number}; give one of them another symbol`,
+      );
+    }
+    if (this.#made.has(id)) {
+      throw new Error(`${symbol} is defined twice in cell ${at.number}; give one of them another symbol`);
+    }
+  }
+
+  #number(cell: CellRef | undefined): number {
+    return cell === undefined ? 0 : (this.#numbers.get(cell.id) ?? cell.number);
+  }
+
+  #entry(id: string, known: Map<string, boolean>): Entry {
+    const stored = this.#stored.get(id);
+    if (stored === undefined) throw new Error(`there is no entry "${id}"`);
+    const { draft, version, cell } = stored;
+    return Object.freeze({
+      ...draft,
+      version,
+      cell: this.#number(cell),
+      outOfDate: this.#outOfDate(id, known),
+    });
+  }
+
+  /** Whether something an entry uses has another version now, is gone, or is itself out of date. */
+  #outOfDate(id: string, known: Map<string, boolean>): boolean {
+    const answer = known.get(id);
+    if (answer !== undefined) return answer;
+    known.set(id, true); // what stands on itself never settles
+    const uses = this.#stored.get(id)?.draft.uses ?? [];
+    const old = uses.some((use) => this.#changed(use, known));
+    known.set(id, old);
+    return old;
+  }
+
+  #changed(use: string, known: Map<string, boolean>): boolean {
+    const { id, version } = readUse(use);
+    return this.#stored.get(id)?.version !== version || this.#outOfDate(id, known);
+  }
+}
+
+/** The entry and version of a use "id@version". Throws on a text of another form. */
+export function readUse(use: string): { readonly id: string; readonly version: number } {
+  const match = /^(.+)@(\d+)$/s.exec(use);
+  if (match?.[1] === undefined) throw new Error(`"${use}" is not an entry and its version, such as "L@1"`);
+  return { id: match[1], version: Number(match[2]) };
+}

@@ -1,0 +1,12 @@
+/** A text that says something. Throws when it is missing, naming what is wanted. */
+export function checkedText(what: string, text: unknown): string {
+  if (typeof text !== "string" || text.trim() === "")
+    throw new Error(`${what} is missing; write a few words`);
+  return text;
+}
+
+/** A stable id for an entry that has nothing but its words: kind and how they begin. */
+export function idFromText(kind: string, text: string): string {
+  const words = text.trim().replace(/\s+/g, " ");
+  return `${kind} ${words.length > 60 ? words.slice(0, 60).trimEnd() : words}`;
+}

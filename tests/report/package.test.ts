@@ -1,0 +1,217 @@
+import { createHash } from "node:crypto";
+import { describe, expect, it } from "vitest";
+import { lineAnchor, parseUse } from "../../lib/report/book.ts";
+import { renderPackage } from "../../lib/report/index.ts";
+import type { CalculationRecord, Entry } from "../../lib/sheet/index.ts";
+import { incomplete, outdated, record } from "./fixtures.ts";
+
+const withoutJson = (html: string): string =>
+  html.replace(/<script type="application\/json"[\s\S]*?<\/script>/, "");
+
+const change = (id: string, with_: Partial<Entry>): CalculationRecord => ({
+  ...record,
+  entries: record.entries.map((e) => (e.id === id ? ({ ...e, ...with_ } as Entry) : e)),
+});
+
+const lineOf = (html: string, id: string): string => {
+  const start = html.indexOf(`id="${lineAnchor(id)}"`);
+  expect(start, `line of ${id}`).toBeGreaterThan(0);
+  return html.slice(start, html.indexOf('<div class="line', start));
+};
+
+const hostile = `"><script>alert(1)</script><img src=x onerror=alert(2)>'</style></title>`;
+const KEEP = new Set(
+  "format,kind,version,cell,id,uses,complete,outOfDate,governing,passed,spec,dimension,tex,lines,versions".split(
+    ",",
+  ),
+);
+function poisoned<T>(value: T): T {
+  if (typeof value === "string") return `${hostile}${value}` as T;
+  if (Array.isArray(value)) return value.map(poisoned) as T;
+  if (typeof value !== "object" || value === null) return value;
+  return Object.fromEntries(Object.entries(value).map(([k, v]) => [k, KEEP.has(k) ? v : poisoned(v)])) as T;
+}
+
+describe("renderPackage", () => {
+  it("renderPackage is the same on every run", async () => {
+    expect(await renderPackage(record)).toBe(await renderPackage(record));
+  });
+
+  it("renderPackage reaches for nothing outside itself", async () => {
+    const html = withoutJson(await renderPackage(record));
+    expect(/\s(?:src|srcset|action|poster|data|background)=/.test(html)).toBe(false);
+    for (const [, target] of html.matchAll(/\shref="([^"]*)"/g)) expect(target).toMatch(/^#/);
+    expect(/@import|url\((?!#)/.test(html)).toBe(false);
+    expect(/\sstyle="/.test(html)).toBe(false);
+  });
+
+  it("renderPackage: the security policy allows exactly this style and this script", async () => {
+    const html = await renderPackage(record);
+    const policy = /Content-Security-Policy" content="([^"]*)"/.exec(html)?.[1] ?? "";
+    const digest = (text: string) => `&#39;sha256-${createHash("sha256").update(text).digest("base64")}&#39;`;
+    expect(policy).toContain("default-src &#39;none&#39;");
+    expect(policy).toContain(`style-src ${digest(/<style>([\s\S]*?)<\/style>/.exec(html)?.[1] ?? "")}`);
+    expect(policy).toContain(`script-src ${digest(/<script>([\s\S]*?)<\/script>/.exec(html)?.[1] ?? "")}`);
+    expect(/unsafe|https?:|\*/.test(policy)).toBe(false);
+  });
+
+  it.each([
+    ["complete", record],
+    ["incomplete", incomplete],
+    ["out of date", outdated],
+  ])("renderPackage(%s record): every link arrives, no id is there twice", async (_, rec) => {
+    const html = withoutJson(await renderPackage(rec));
+    const ids = [...html.matchAll(/\sid="([^"]*)"/g)].map((m) => m[1] ?? "");
+    expect(new Set(ids).size).toBe(ids.length);
+    const targets = [...html.matchAll(/href="#([^"]*)"/g)].map((m) => m[1] ?? "");
+    expect(targets.length).toBeGreaterThan(80);
+    expect(targets.filter((t) => !ids.includes(t))).toEqual([]);
+  });
+
+  const worked = record.entries.filter((e) =>
+    ["calc", "step", "result", "check", "finding"].includes(e.kind),
+  );
+  it.each(worked.map((e) => [e.kind, e.id, e] as const))(
+    "renderPackage: %s %s shows in its line and in the list everything it stands on",
+    async (_kind, id, entry) => {
+      const html = await renderPackage(record);
+      const line = lineOf(html, id);
+      const row = html.slice(html.indexOf(`<li id="why-${lineAnchor(id).slice(2)}"`)).split("</li>")[0] ?? "";
+      expect(entry.uses.length).toBeGreaterThan(0);
+      for (const use of entry.uses) {
+        const link = `href="#${lineAnchor(parseUse(use).id)}"`;
+        expect(line).toContain(link);
+        expect(row.split("what stands on it")[0]).toContain(link);
+      }
+      expect(line).toContain(`href="#why-${lineAnchor(id).slice(2)}"`);
+    },
+  );
+
+  it("renderPackage: a given says what stands on it, and a result which givens it rests on in the end", async () => {
+    const html = await renderPackage(record);
+    const row = (id: string) => html.slice(html.indexOf(`<li id="why-${id}"`)).split("</li>")[0] ?? "";
+    expect(row("f_y")).toContain(`href="#${lineAnchor("M_Rd")}"`);
+    const roots = row("M_B").split("rests in the end on")[1]?.split("</p>")[0] ?? "";
+    for (const id of ["L", "h", "g", "s", "hinge h1"]) expect(roots).toContain(`href="#${lineAnchor(id)}"`);
+    expect(roots).not.toContain(`href="#${lineAnchor("f_y")}"`);
+  });
+
+  it("renderPackage: cells of a table lead to what each stands on", async () => {
+    const html = await renderPackage(record);
+    expect(html).toContain('href="#why-reactions.0">24.9 kN</a>');
+    expect(html).toContain('href="#why-reactions.1">89.6 kN</a>');
+    const group = html.slice(html.indexOf('<li id="why-reactions.1"')).split("</li>")[0] ?? "";
+    expect(group).toContain(`href="#${lineAnchor("A_y")}"`);
+    expect(group).not.toContain(`href="#${lineAnchor("A_x")}"`);
+  });
+
+  it("renderPackage: cover names the status, the failing check, the query, and what was set from outside", async () => {
+    const html = await renderPackage(record);
+    const cover = html.slice(0, html.indexOf('<nav class="contents"'));
+    expect(cover).toContain("PRELIMINARY, NOT FOR CONSTRUCTION");
+    expect(cover).toContain("(1 DO NOT HOLD)");
+    expect(cover).toContain("DOES NOT HOLD, utilisation 1.18");
+    expect(cover).toContain("has base fixity been considered?");
+    expect(cover).toMatch(/set from outside: <math>.*<\/math> = 6\.00 kN\/m, notebook says 5\.20 kN\/m/);
+    expect(cover).toContain("licensed");
+    expect(cover).not.toContain("INCOMPLETE");
+    expect(cover).not.toContain("OUT OF DATE");
+  });
+
+  it("renderPackage(status for construction) prints that instead", async () => {
+    const html = await renderPackage({ ...record, head: { ...record.head, status: "for construction" } });
+    expect(html).toContain('<p class="status">FOR CONSTRUCTION</p>');
+    expect(html).not.toContain("NOT FOR CONSTRUCTION");
+  });
+
+  it("renderPackage(utilisation a hair over 1) is not printed as 1.00", async () => {
+    const html = await renderPackage(change("check 2", { utilisation: 1.0004 } as Partial<Entry>));
+    expect(html).toContain("DOES NOT HOLD, utilisation 1.0004");
+  });
+
+  it("renderPackage(incomplete) says so in title, banner, running foot and with the failure in full", async () => {
+    const html = await renderPackage(incomplete);
+    expect(html).toContain("<title>INCOMPLETE: 2031");
+    expect(html).toContain('class="banner"');
+    expect(html).toMatch(/@bottom-left \{ content: "INCOMPLETE, NOT A RESULT"/);
+    expect(html).toContain("cell 6, line 3");
+    expect(html).toContain("joints are A, B, C, D");
+    expect(html).toContain("sheet.freeBodies(gravity, &quot;E&quot;);");
+  });
+
+  it("renderPackage(out of date) marks exactly the entries that are, and names what changed", async () => {
+    const html = await renderPackage(outdated);
+    const stale = outdated.entries.filter((e) => e.outOfDate);
+    expect(stale.length).toBeGreaterThan(4);
+    for (const entry of outdated.entries) {
+      expect(lineOf(html, entry.id).includes("OUT OF DATE"), entry.id).toBe(entry.outOfDate);
+    }
+    expect(lineOf(html, "M_m")).toContain("(changed since)");
+    expect(html).toContain(`OUT OF DATE: ${stale.length} of ${outdated.entries.length} entries`);
+  });
+
+  it("renderPackage(reference to an entry that is gone) says so", async () => {
+    const html = await renderPackage(change("note 1", { uses: ["gone@1"] }));
+    expect(lineOf(html, "note 1")).toContain("gone (no longer on the sheet)");
+  });
+
+  it("renderPackage keeps the record in the file, whole", async () => {
+    const html = await renderPackage(poisoned(record));
+    const json = /<script type="application\/json" id="record">([\s\S]*?)<\/script>/.exec(html)?.[1] ?? "";
+    expect(JSON.parse(json)).toEqual(poisoned(record));
+  });
+
+  it("renderPackage(hostile text in every field) holds no markup but its own", async () => {
+    const bad = {
+      ...poisoned(record),
+      complete: false,
+      failure: poisoned(incomplete.failure),
+    } as CalculationRecord;
+    const html = withoutJson(await renderPackage(bad));
+    expect(html.match(/<script/g)).toHaveLength(1);
+    expect(html.match(/<\/style>/g)).toHaveLength(1);
+    expect(html.match(/<\/title>/g)?.length).toBe(
+      1 + record.entries.filter((e) => e.kind === "figure").length,
+    );
+    expect(/<img|<[a-z][^<>]*\sonerror=/.test(html.replace(/="[^"]*"/g, ""))).toBe(false);
+    expect(html.match(/&lt;script&gt;/g)?.length ?? 0).toBeGreaterThan(60);
+  });
+
+  const texts: readonly (readonly [string, string, RegExp])[] = [
+    ["HTML", "<b>bold</b>", /&lt;b&gt;bold&lt;\/b&gt;/],
+    ["a script link", "[press](javascript:alert(1))", /\[press\]\(javascript:alert\(1\)\)/],
+    [
+      "a picture from elsewhere",
+      "![sketch](https://example.invalid/a.png)",
+      /picture not in this file: sketch/,
+    ],
+    ["a heading", "# Loads", /<h3>Loads<\/h3>/],
+    ["maths", "span $L_1$", /span <math><msub>/],
+    ["money, not maths", "from $5 to $6", /from \$5 to \$6/],
+  ];
+  it.each(texts)("renderPackage(text cell with %s)", async (_, markdown, expected) => {
+    const html = withoutJson(await renderPackage(change("text 1", { markdown } as Partial<Entry>)));
+    expect(expected.test(html)).toBe(true);
+    expect(/<img|href="(?:javascript|https?):/.test(html)).toBe(false);
+  });
+
+  it.each([
+    [
+      "an id twice",
+      { ...record, entries: [...record.entries, ...record.entries.slice(1, 2)] },
+      /entry "L" is there twice/,
+    ],
+    [
+      "a use without version",
+      change("w", { uses: ["g"] }),
+      /"g" is no reference to an entry; "id@version" is wanted/,
+    ],
+    [
+      "an unknown figure",
+      change("frame", { spec: { kind: "painting" } } as Partial<Entry>),
+      /figure "frame" \(Frame, loads and hinges\.\): figure kind "painting" is unknown; kinds are structure/,
+    ],
+  ] as const)("renderPackage(%s) is refused, naming it", async (_, rec, message) => {
+    await expect(renderPackage(rec)).rejects.toThrow(message);
+  });
+});
