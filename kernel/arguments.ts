@@ -31,7 +31,7 @@ const COMMANDS = ["run"];
 const RUN_FLAGS = ["--out", "--set", "--help"];
 
 const nearest = (word: string, known: readonly string[]): string =>
-  `did you mean "${closest(word, [...known])}"?`;
+  `did you mean "${known.find((whole) => whole.startsWith(word)) ?? closest(word, [...known])}"?`;
 
 function addOverride(overrides: Map<string, string>, text: string): void {
   const at = text.indexOf("=");

@@ -59,11 +59,11 @@ const list = (names: readonly string[]): string => (names.length > 0 ? names.joi
 /** An export by name, with a CommonJS package's exports as the compiler sees them. */
 function exported(module: object, name: string): { readonly value: unknown } | undefined {
   const space = module as Record<string, unknown>;
-  const inner = space["default"];
+  const inner = space.default;
   const fromPackage = types.isModuleNamespaceObject(module) && typeof inner === "object" && inner !== null;
   const common = fromPackage ? (inner as Record<string, unknown>) : undefined;
-  if (name === "default" && common?.["__esModule"] === true && "default" in common)
-    return { value: common["default"] };
+  if (name === "default" && common?.__esModule === true && "default" in common)
+    return { value: common.default };
   if (name in space) return { value: space[name] };
   return common && name in common ? { value: common[name] } : undefined;
 }

@@ -63,8 +63,8 @@ function languageOf(notebook: Json): string | undefined {
   const { metadata } = notebook;
   if (!isObject(metadata)) return undefined;
   const { kernelspec, language_info } = metadata;
-  const fromInfo = isObject(language_info) ? language_info["name"] : undefined;
-  const fromKernel = isObject(kernelspec) ? kernelspec["language"] : undefined;
+  const fromInfo = isObject(language_info) ? language_info.name : undefined;
+  const fromKernel = isObject(kernelspec) ? kernelspec.language : undefined;
   const language = fromInfo ?? fromKernel;
   return typeof language === "string" ? language : undefined;
 }
@@ -95,15 +95,15 @@ function readCell(file: string, cell: unknown, number: number): NotebookCell {
   const where = `cell ${number}`;
   if (!isObject(cell))
     refuse(file, `${where} is ${named(cell)}; a cell is an object with cell_type and source`);
-  const kind = cell["cell_type"];
+  const kind = cell.cell_type;
   if (typeof kind !== "string" || !KINDS.includes(kind)) {
     refuse(file, `${where}: cell_type is ${named(kind)}; it must be "code", "markdown" or "raw"`);
   }
   return Object.freeze({
     number,
-    id: idOf(file, where, cell["id"], number),
+    id: idOf(file, where, cell.id, number),
     kind: kind as NotebookCell["kind"],
-    source: textOf(file, where, cell["source"]),
+    source: textOf(file, where, cell.source),
   });
 }
 

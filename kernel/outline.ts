@@ -17,19 +17,25 @@ export function headingOf(markdown: string): string | undefined {
   return text === undefined ? undefined : shortened(text.replace(/[*_`]/g, ""));
 }
 
-function callName({ type, ...node }: Node): string | undefined {
-  if (type !== "CallExpression") return undefined;
-  const { callee } = node as Extract<Node, { type: "CallExpression" }>;
-  if (callee.type === "Identifier") return callee.name;
+/** A call as it is named in a line: `sheet.calc "M = q*L^2/8"`, with its first text if that comes first. */
+function callWords(node: Node): string | undefined {
+  if (node.type !== "CallExpression") return undefined;
+  const { callee } = node;
+  const [first] = node.arguments;
+  const text =
+    first?.type === "Literal" && typeof first.value === "string" ? ` ${JSON.stringify(first.value)}` : "";
+  if (callee.type === "Identifier") return callee.name + text;
   if (callee.type !== "MemberExpression" || callee.property.type !== "Identifier") return undefined;
-  return callee.object.type === "Identifier" ? `${callee.object.name}.${callee.property.name}` : undefined;
+  return callee.object.type === "Identifier"
+    ? `${callee.object.name}.${callee.property.name}${text}`
+    : undefined;
 }
 
-/** The functions a cell calls, in order, each once. */
+/** The calls of a cell, in order, each once. */
 function calls(source: string): string[] {
   const names = new Set<string>();
   walk(parse(source).program, (node) => {
-    const name = callName(node);
+    const name = callWords(node);
     if (name !== undefined) names.add(name);
     return true;
   });

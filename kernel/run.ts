@@ -1,12 +1,14 @@
 // Runs notebooks from start to end without Jupyter and leaves a calculation package for each.
 import { mkdir, rm } from "node:fs/promises";
-import { join, relative } from "node:path";
+import { join } from "node:path";
+import { setImmediate as nextTurn } from "node:timers/promises";
 import writeFileAtomic from "write-file-atomic";
-import type { CalculationRecord, Entry } from "../lib/sheet/index.ts";
+import type { CalculationRecord } from "../lib/sheet/index.ts";
 import type { CellFailure } from "./failure.ts";
 import { type Library, libraryTypes, type OpenLedger } from "./library.ts";
 import { type Notebook, type NotebookCell, readNotebook } from "./notebook.ts";
 import { outline } from "./outline.ts";
+import { failureText, shownPath, summaryText, unusedText } from "./run-words.ts";
 import { Session } from "./session.ts";
 
 /** Where the runner's lines go; each text ends with a line break. */
@@ -32,7 +34,8 @@ export interface RunOptions {
 /** How a notebook came out. */
 export type RunState = "complete" | "incomplete" | "failed";
 
-const UNIT_OF_WAIT = 3000;
+/** How long a cell may take before the runner says that it is still at it, and between two such lines. */
+const PATIENCE_ms = 3000;
 
 const line = (text: string): string => `${text}\n`;
 
@@ -66,20 +69,20 @@ class NotebookRun {
     this.#notebook = notebook;
     let loaded: Library | undefined;
     // The compiler's process is started before the library is loaded, so that they start side by side.
-    const asked = new Promise<void>((go) => setImmediate(go));
-    this.#library = asked.then(library);
-    this.#library.then(
-      (ready) => {
-        loaded = ready;
-      },
-      () => undefined,
-    );
+    this.#library = nextTurn().then(library);
+    const ready = this.#library.then((it) => {
+      loaded = it;
+      return it;
+    });
+    const module = ready.then((it) => it.module);
+    const unitsOf = ready.then((it) => it.unitsOf);
+    for (const later of [module, unitsOf]) later.catch(() => undefined); // `run` reports what keeps it from loading
     const { overrides, types = libraryTypes(), terminal } = options;
     this.#session = new Session({
       folder: notebook.folder,
-      modules: { hingebook: this.#library.then(({ module }) => module) },
+      modules: { hingebook: module },
       libraryTypes: types,
-      unitsOf: this.#library.then(({ unitsOf }) => unitsOf),
+      unitsOf,
       beforeCell: (cell) => loaded?.attachHost({ cell, overrides, notebook: notebook.fileName }),
       afterCell: (cell) => loaded?.currentLedger()?.endCell(cell.id),
       onOutput: (event) => {
@@ -106,16 +109,16 @@ class NotebookRun {
       );
       if (result.status === "error") return result.error;
     }
-    await new Promise((turn) => setImmediate(turn));
+    await nextTurn();
     return this.#stray;
   }
 
   async #patiently<T>(cell: number, work: () => Promise<T>): Promise<T> {
     let waited = 0;
     const timer = setInterval(() => {
-      waited += UNIT_OF_WAIT / 1000;
+      waited += PATIENCE_ms / 1000;
       this.#options.terminal.out(line(`      … cell ${cell} has been running for ${waited} s`));
-    }, UNIT_OF_WAIT);
+    }, PATIENCE_ms);
     try {
       return await work();
     } finally {
@@ -124,17 +127,19 @@ class NotebookRun {
   }
 
   async run(): Promise<RunState> {
-    const { terminal } = this.#options;
-    terminal.out(line(this.#notebook.fileName));
-    const library = await this.#library;
-    library.forgetLedger();
+    this.#options.terminal.out(line(this.#notebook.fileName));
     try {
-      const failure = await this.#cells();
-      return failure ? await this.#incomplete(library, failure) : await this.#complete(library);
+      const library = await this.#library;
+      library.forgetLedger();
+      try {
+        const failure = await this.#cells();
+        return failure ? await this.#incomplete(library, failure) : await this.#complete(library);
+      } finally {
+        library.attachHost();
+        library.forgetLedger();
+      }
     } finally {
       await this.#session.close();
-      library.attachHost();
-      library.forgetLedger();
     }
   }
 
@@ -198,43 +203,6 @@ class NotebookRun {
     terminal.out(summaryText(record, good));
     return "complete";
   }
-}
-
-function shownPath(path: string): string {
-  const near = relative(process.cwd(), path);
-  return near.startsWith("..") ? path : near;
-}
-
-/** What a failed cell says: notebook, cell, line, message, and the engineer's own code around it. */
-export function failureText({ fileName, cells }: Notebook, failure: CellFailure): string {
-  const { cell, line: row, column, name, message, excerpt, traceback } = failure;
-  const code = cells.filter(({ kind, number }) => kind === "code" && number <= cell).length;
-  const where = [`${fileName}, cell ${cell} (code cell ${code})`];
-  if (row !== undefined) where.push(`line ${row}`, `column ${column}`);
-  const further = traceback.slice(1).filter((text) => text.trim() !== "");
-  return [`${where.join(", ")}: ${name}`, message, ...(excerpt === "" ? [] : ["", excerpt]), ...further, ""]
-    .map(line)
-    .join("");
-}
-
-function unusedText(fileName: string, unused: readonly string[], entries: readonly Entry[]): string {
-  const givens = entries.flatMap((entry) => (entry.kind === "given" ? [entry.symbol] : []));
-  const what = unused.map((symbol) => `"${symbol}"`).join(", ");
-  return `${fileName}: --set ${what} was not used; the givens are ${givens.join(", ") || "none"}. No package was written.`;
-}
-
-function summaryText({ head, entries }: CalculationRecord, file: string): string {
-  const checks = entries.filter((entry) => entry.kind === "check");
-  const failed = checks.filter((entry) => !entry.passed);
-  const lines = [`  ${head.title}: ${head.status}`];
-  for (const entry of entries)
-    if (entry.kind === "result" && entry.governing)
-      lines.push(`    ${entry.symbol} = ${entry.value.text}  ${entry.description}`);
-  if (checks.length > 0)
-    lines.push(`    checks: ${checks.length - failed.length} of ${checks.length} satisfied`);
-  for (const { formula, description } of failed) lines.push(`    NOT SATISFIED: ${formula}  ${description}`);
-  lines.push(`  package: ${shownPath(file)}`);
-  return lines.map(line).join("");
 }
 
 /** Run notebooks, each in a session of its own. Answers how each came out; throws before anything runs when a file

@@ -2,17 +2,17 @@
 // drive the same class, so that their outputs are the same.
 import { setImmediate as nextTurn } from "node:timers/promises";
 import { types } from "node:util";
-import { runInContext } from "node:vm";
-import { type CellDiagnostic, type Checker, createChecker, type UnitsOf } from "./check/index.ts";
+import { createChecker, type UnitsOf } from "./check/index.ts";
 import { display, type MimeBundle } from "./display.ts";
-import { Evaluator, type Outcome } from "./evaluate.ts";
+import { startEngine } from "./engine.ts";
+import type { Evaluator, Outcome } from "./evaluate.ts";
 import { type CellFailure, checkFailure, syntaxFailure, thrownFailure } from "./failure.ts";
 import { ownFolder as hingebookFolder } from "./folders.ts";
-import { bridgeBuiltIns, cellGlobals, decoratorHelpers, prologue } from "./globals.ts";
-import { completedPart, History } from "./history.ts";
-import { Modules } from "./modules.ts";
+import { Foresight } from "./foresight.ts";
+import { cellGlobals } from "./globals.ts";
+import { completedPart } from "./history.ts";
 import type { Position } from "./position.ts";
-import { type Rewritten, RUNNER, rewriteCell, SyntaxRefusal } from "./rewrite/index.ts";
+import { type Rewritten, rewriteCell, SyntaxRefusal } from "./rewrite/index.ts";
 import { nextCellScript, Scripts } from "./scripts.ts";
 
 /** A cell: its place in the notebook (from 1) and an id that survives editing. */
@@ -49,22 +49,15 @@ export interface SessionOptions {
   readonly ownFolder?: string;
 }
 
-/** Frames kept in a stack: a cell's line must not be lost below those of the library it called. */
-const STACK_DEPTH = 100;
-
 export class Session {
   readonly #options: SessionOptions;
   readonly #scripts = new Scripts();
-  readonly #history = new History();
-  readonly #checker: Checker | undefined;
+  readonly #foresight: Foresight;
   readonly #strays: unknown[] = [];
   readonly #clearTimers: () => void;
   readonly #globals: Record<string, unknown>;
   #engine: Promise<Evaluator> | undefined;
   #queue: Promise<unknown> = Promise.resolve();
-  #foreseen:
-    | { readonly cells: readonly string[]; readonly found: Promise<readonly CellDiagnostic[]> }
-    | undefined;
   #shown: unknown;
   #running: CellName = { number: 0, id: "" };
   #busy = false;
@@ -74,7 +67,8 @@ export class Session {
     this.#options = options;
     const { folder, libraryTypes, unitsOf, ownFolder = hingebookFolder(), check = true } = options;
     const paths = libraryTypes === undefined ? {} : { hingebook: libraryTypes };
-    if (check) this.#checker = createChecker({ folder, ownFolder, paths, ...(unitsOf ? { unitsOf } : {}) });
+    const about = { folder, ownFolder, paths, ...(unitsOf ? { unitsOf } : {}) };
+    this.#foresight = new Foresight(check ? createChecker(about) : undefined);
     const hooks = {
       write: (name: "stdout" | "stderr", text: string) => this.#emit({ kind: "stream", name, text }),
       stray: (thrown: unknown) => this.#stray(thrown),
@@ -110,38 +104,27 @@ export class Session {
     return this.#engine;
   }
 
-  async #start(): Promise<Evaluator> {
-    const globals = this.#globals;
-    const evaluator = await Evaluator.open(globals);
-    const { context } = evaluator;
+  #start(): Promise<Evaluator> {
     const { folder, modules: given = {}, ownFolder = hingebookFolder() } = this.#options;
-    const onThrow = (value: unknown): void => {
-      const stackless = typeof value !== "object" || value === null || !("stack" in value);
-      this.#thrown = stackless ? { value, stack: new Error("thrown here").stack } : undefined;
-    };
-    const modules = new Modules({ folder, ownFolder, given, context, scripts: this.#scripts, onThrow });
-    bridgeBuiltIns(context);
-    Error.stackTraceLimit = Math.max(Error.stackTraceLimit, STACK_DEPTH);
-    runInContext(`Error.stackTraceLimit = ${STACK_DEPTH}`, context);
-    globals[RUNNER] = Object.freeze(
-      modules.cellRunner((value) => {
+    return startEngine({
+      folder,
+      ownFolder,
+      given,
+      globals: this.#globals,
+      scripts: this.#scripts,
+      show: (value) => {
         this.#shown = value;
-      }),
-    );
-    globals["babelHelpers"] = decoratorHelpers;
-    const ready = await evaluator.run(prologue(context), "hingebook:start");
-    delete globals[RUNNER];
-    delete globals["babelHelpers"];
-    if (!ready.ok) throw ready.thrown;
-    return evaluator;
+      },
+      onThrow: (value) => {
+        const stackless = typeof value !== "object" || value === null || !("stack" in value);
+        this.#thrown = stackless ? { value, stack: new Error("thrown here").stack } : undefined;
+      },
+    });
   }
 
   /** Say which cells are going to be run, in order: they are checked together, while the rest is still starting. */
   foresee(cells: readonly string[]): void {
-    if (!this.#checker) return;
-    const found = this.#checker.check(cells);
-    found.catch(() => undefined); // whoever executes the cell sees it
-    this.#foreseen = { cells: [...cells], found };
+    this.#foresight.foresee(cells);
   }
 
   /** Run one cell, after those asked for before it. Never throws for what the cell does: that is its result. */
@@ -183,7 +166,7 @@ export class Session {
       if (outcome.ok) {
         const value = this.#shown;
         const shown = await display(value);
-        this.#history.add(cell.id, code);
+        this.#foresight.history.add(cell.id, code);
         return Object.freeze({ status: "ok" as const, value, ...(shown ? { display: shown } : {}) });
       }
       return this.#failed(outcome.thrown, code, cell, script, outcome.at);
@@ -215,7 +198,7 @@ export class Session {
     const { line, column } = error;
     const place = line !== undefined && column !== undefined ? { line, column } : undefined;
     const done = completedPart(code, place);
-    if (done !== "") this.#history.add(cell.id, done);
+    if (done !== "") this.#foresight.history.add(cell.id, done);
     return Object.freeze({ status: "error" as const, error });
   }
 
@@ -235,27 +218,16 @@ export class Session {
   }
 
   async #refused(code: string, cell: CellName): Promise<CellFailure | undefined> {
-    const found = await this.#found(code);
+    const found = await this.#foresight.found(code);
     const [first, ...rest] = found;
     return first ? checkFailure([first, ...rest], cell.number, code) : undefined;
-  }
-
-  async #found(code: string): Promise<readonly CellDiagnostic[]> {
-    if (!this.#checker) return [];
-    const before = this.#history.sources;
-    const foreseen = this.#foreseen;
-    const isForeseen =
-      foreseen?.cells[before.length] === code &&
-      before.every((source, index) => foreseen.cells[index] === source);
-    const found = isForeseen ? await foreseen.found : await this.#checker.check([...before, code]);
-    return found.filter(({ index }) => index === before.length);
   }
 
   /** End it: timers stop, the checker's process ends, the context is let go. */
   async close(): Promise<void> {
     process.off("unhandledRejection", this.#rejected);
     this.#clearTimers();
-    await this.#checker?.close();
+    await this.#foresight.close();
     const engine = await this.#engine;
     engine?.close();
   }

@@ -41,7 +41,7 @@ function subjectAt({ program }: Tree, offset: number): Subject | undefined {
     if (parent.type === "Property" && parent.value === node && parent.key.type === "Identifier")
       return { node, role: parent.key.name };
     if (parent.type === "CallExpression") {
-      const index = parent.arguments.findIndex((argument) => argument === node);
+      const index = parent.arguments.indexOf(node as (typeof parent.arguments)[number]);
       const name = calleeName(parent.callee);
       if (index >= 0)
         return { node, ...(name === undefined ? {} : { role: `argument ${index + 1} of ${name}` }) };

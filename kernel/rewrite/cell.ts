@@ -3,7 +3,7 @@
 // checker's business.) Functions are set before anything else runs, `var` is declared in front, imports are awaited
 // lookups, and the last statement, when it is an expression, is shown.
 import type { Function as FunctionNode, Node, VariableDeclaration } from "oxc-parser";
-import { parse, varNames, walk } from "../syntax.ts";
+import { declaredNames, parse, varNames, walk } from "../syntax.ts";
 import { RUNNER } from "./names.ts";
 import {
   type Draft,
@@ -16,7 +16,7 @@ import {
   rewriteFrom,
   rewriteImport,
 } from "./statements.ts";
-import { strip } from "./strip.ts";
+import { SyntaxRefusal, strip } from "./strip.ts";
 
 function refuseUsing(edit: Draft, original: string, node: VariableDeclaration): void {
   if (node.kind !== "using" && node.kind !== "await using") return;
@@ -133,7 +133,13 @@ function rewriteLast({ program, text }: Draft): void {
 
 /** Rewrite one cell for V8's REPL mode. Throws `SyntaxRefusal` for text that is not TypeScript or cannot run here. */
 export function rewriteCell(source: string): Rewritten {
-  const edit = draft(strip(parse(source), { keepImports: true }));
+  const tree = parse(source);
+  const edit = draft(strip(tree, { keepImports: true }));
+  const taken = [RUNNER, "babelHelpers"].find((name) => declaredNames(tree.program).has(name));
+  if (taken !== undefined) {
+    const message = `the name ${taken} is kept for hingebook; choose another`;
+    throw new SyntaxRefusal(source, [{ message, start: source.indexOf(taken), end: source.length }]);
+  }
   const vars = varNames(edit.program);
   rewriteExpressions(edit, source);
   for (const node of edit.program.body) rewriteTop(edit, source, node);

@@ -1,6 +1,6 @@
 // Types out of TypeScript, positions kept: everything `oxc-transform` is used for.
 //
-// Behaviours leaned on (held by tests/kernel/rewrite.test.ts):
+// Behaviours leaned on (held by tests/kernel/rewrite.test.ts and semantics-table.ts):
 //   - a name imported without `type` is kept although the cell never uses it (`onlyRemoveTypeImports`), in cells;
 //     in local modules unused names are dropped, as the compiler does;
 //   - enums become `var A = (function…)(A || {})`, namespaces `let N; (function…)(N || (N = {}))`;
@@ -34,6 +34,7 @@ export class SyntaxRefusal extends Error {
 export function locator(map: unknown): (place: Position) => Position | undefined {
   let trace: TraceMap | undefined;
   return ({ line, column }) => {
+    if (line < 1) return undefined; // what the rewriting put in front
     trace ??= new TraceMap(map as ConstructorParameters<typeof TraceMap>[0]);
     const segment = traceSegment(trace, line - 1, column - 1);
     if (!segment || segment.length === 1) return undefined;

@@ -27,6 +27,7 @@ describe("readArguments", () => {
     [[], /say what to do/],
     [["rum"], /"rum" is not a command of hingebook; did you mean "run"\?/],
     [["--verson"], /"--verson" is not an option of hingebook; did you mean "--version"\?/],
+    [["--vers"], /did you mean "--version"\?/],
     [["run"], /run needs a notebook/],
     [["run", "a", "--outt", "x"], /"--outt" is not an option of run; did you mean "--out"\?/],
     [["run", "a", "--out"], /--out needs a folder/],

@@ -44,4 +44,19 @@ describe("Compiler", () => {
     expect(await check("export const a = [1].toSorted().at(-1);")).toEqual([]);
     expect(await check("export const a = document;")).toHaveLength(1);
   });
+
+  test("close ends the process", async () => {
+    const processes = () => process.getActiveResourcesInfo().filter((name) => name === "ProcessWrap").length;
+    const before = processes();
+    const other = new Compiler(
+      { folder, ownFolder: ownFolder(), paths: {} },
+      { node: false, borrowed: false },
+    );
+    await other.check("export {};");
+    expect(processes()).toBe(before + 1);
+    await other.close();
+    for (let tries = 0; tries < 100 && processes() > before; tries++)
+      await new Promise((done) => setTimeout(done, 20));
+    expect(processes()).toBe(before);
+  });
 });

@@ -149,6 +149,10 @@ export const table: readonly Row[] = [
     ["(globalThis as { leak?: number }).leak = 1", nothing],
     ["'leak' in globalThis", shows("true")],
   ),
+  row("the one name hingebook keeps is refused", [
+    "const __hingebook = 1",
+    refused(/__hingebook is kept for hingebook/),
+  ]),
   // Declaring again
   row(
     "const again, with another type",
@@ -262,6 +266,7 @@ export const table: readonly Row[] = [
     "abstract class A { abstract f(): number }\nclass B extends A { constructor(private readonly n: number) { super() } f() { return this.n } }\nnew B(4).f()",
     shows("4"),
   ]),
+  row("a field without a value is there", ["class A { x?: number }\n'x' in new A()", shows("true")]),
   row("private fields and static blocks", [
     "class C { #x = 1; static y: number; static { C.y = 2 } get x() { return this.#x } }\nnew C().x + C.y",
     shows("3"),
@@ -416,7 +421,7 @@ export const table: readonly Row[] = [
   row(
     "an own error class",
     [
-      "class LoadError extends Error { constructor(readonly load: string) { super(`bad load ${load}`) } }\nnew Error('x') instanceof LoadError",
+      "class LoadError extends Error { constructor(readonly load: string) { super('bad load ' + load) } }\nnew Error('x') instanceof LoadError",
       shows("false"),
     ],
     ["throw new LoadError('g')", throws(/^bad load g$/)],

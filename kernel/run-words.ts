@@ -1,0 +1,47 @@
+// What the headless runner says about a notebook.
+import { relative } from "node:path";
+import type { CalculationRecord, Entry } from "../lib/sheet/index.ts";
+import type { CellFailure } from "./failure.ts";
+import type { Notebook } from "./notebook.ts";
+
+const line = (text: string): string => `${text}\n`;
+
+/** A path as short as it can be said from the current folder. */
+export function shownPath(path: string): string {
+  const near = relative(process.cwd(), path);
+  return near.startsWith("..") ? path : near;
+}
+
+/** What a failed cell says: notebook, cell, line, message, and the engineer's own code around it. */
+export function failureText({ fileName, cells }: Notebook, failure: CellFailure): string {
+  const { cell, line: row, column, name, message, excerpt, traceback } = failure;
+  const code = cells.filter(({ kind, number }) => kind === "code" && number <= cell).length;
+  const where = [`${fileName}, cell ${cell} (code cell ${code})`];
+  if (row !== undefined) where.push(`line ${row}`, `column ${column}`);
+  const further = traceback.slice(1).filter((text) => text.trim() !== "");
+  return [`${where.join(", ")}: ${name}`, message, ...(excerpt === "" ? [] : ["", excerpt]), ...further, ""]
+    .map(line)
+    .join("");
+}
+
+/** The refusal of overrides nothing takes up. */
+export function unusedText(fileName: string, unused: readonly string[], entries: readonly Entry[]): string {
+  const givens = entries.flatMap((entry) => (entry.kind === "given" ? [entry.symbol] : []));
+  const what = unused.map((symbol) => `"${symbol}"`).join(", ");
+  return `${fileName}: --set ${what} was not used; the givens are ${givens.join(", ") || "none"}. No package was written.`;
+}
+
+/** How a calculation came out: status, governing results, checks, and where its package lies. */
+export function summaryText({ head, entries }: CalculationRecord, file: string): string {
+  const checks = entries.filter((entry) => entry.kind === "check");
+  const failed = checks.filter((entry) => !entry.passed);
+  const lines = [`  ${head.title}: ${head.status}`];
+  for (const entry of entries)
+    if (entry.kind === "result" && entry.governing)
+      lines.push(`    ${entry.symbol} = ${entry.value.text}  ${entry.description}`);
+  if (checks.length > 0)
+    lines.push(`    checks: ${checks.length - failed.length} of ${checks.length} satisfied`);
+  for (const { formula, description } of failed) lines.push(`    NOT SATISFIED: ${formula}  ${description}`);
+  lines.push(`  package: ${shownPath(file)}`);
+  return lines.map(line).join("");
+}
