@@ -4,7 +4,7 @@ import type { FreeBodyFigure } from "../drawing/index.ts";
 import { printValue, quantity } from "../quantity/index.ts";
 import type { Action, FreeBody, Point } from "../results/types.ts";
 import type { Load, Structure } from "../structure/types.ts";
-import { forceQuantity, type Named } from "./equation.ts";
+import { forceQuantity, forceText, type Named } from "./equation.ts";
 import { loadTexts } from "./load-words.ts";
 import { and } from "./words.ts";
 
@@ -22,7 +22,12 @@ export function bodyFigure(
   return {
     kind: "free body",
     title: `Free body: ${body.name}`,
-    description: description(body, actions, texts, sought),
+    description: description(
+      body,
+      actions,
+      texts,
+      sought.map((force) => forceText(force, named)),
+    ),
     structure,
     loads,
     body: { ...body, actions },
@@ -46,7 +51,7 @@ function actionText(action: Action, named: Named, loads: readonly Load[]): strin
     const load = loads[source.load];
     return load?.kind === "distributed" ? (loadTexts(loads)[source.load] ?? "") : resultant(action, named);
   }
-  if (value === undefined) return plainName(source.force);
+  if (value === undefined) return forceText(source.force, named);
   return printValue(forceQuantity(source.force, Math.abs(value), named));
 }
 
@@ -58,11 +63,7 @@ function resultantText(action: Action, named: Named, loads: readonly Load[]): st
 function resultant(action: Action, { loadNames }: Named): string {
   const name = "load" in action.source ? (loadNames[action.source.load] ?? "") : "";
   const dimension = action.turn === 0 ? "force" : "moment";
-  return `${plainName(name)} = ${printValue(quantity(Math.abs(action.value ?? 0), dimension))}`;
-}
-
-function plainName(name: string): string {
-  return name;
+  return `${name} = ${printValue(quantity(Math.abs(action.value ?? 0), dimension))}`;
 }
 
 function description(

@@ -60,9 +60,20 @@ export function forceTex(name: string, { solution }: Named): string {
   return solution.forces.find((force) => force.name === name)?.tex ?? symbolTex(name);
 }
 
+/** An unknown as plain text with one subscript, as figures print it: X_h1, M_BC,B. */
+export function forceText(name: string, named: Named): string {
+  return forceTex(name, named)
+    .replace(/\\mathrm\{([^}]*)\}/g, "$1")
+    .replace(/[{}]/g, "");
+}
+
 function sumTex({ equation, about }: Equation): string {
-  if (equation === "sum M") return `\\sum M_{${about?.name ?? ""}}`;
+  if (equation === "sum M") return `\\sum M_{${pointTex(about?.name ?? "")}}`;
   return equation === "sum Fx" ? "\\sum F_x" : "\\sum F_y";
+}
+
+function pointTex(name: string): string {
+  return name.length === 1 ? name : `\\mathrm{${name}}`;
 }
 
 function unknownTerm(step: Step, named: Named): SignedTerm {

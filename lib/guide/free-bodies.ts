@@ -101,6 +101,7 @@ function recordClosure(book: SetBook, closure: Closure): void {
     formula: `${text} = 0`,
     lines: closureLines(closure, named),
     inputs: {},
+    closure: true,
     passed: Math.abs(closure.sum) <= 1e-9 * Math.max(closure.scale, smallest(closure)),
     description: `${set.name}: ${bodyNames(book, closure)}: the equation left over closes by itself`,
   });

@@ -68,13 +68,15 @@ interface Station {
   readonly x: number;
   readonly side: Side;
   readonly from: Sources;
+  /** The end joint, where the station is one. */
+  readonly joint?: string;
 }
 
 function station(structure: Structure, member: string, at: Spot): Station {
   const found = memberNamed(structure, member, "result");
   const { length } = axisOf(structure, found);
-  if (at === found.start) return { x: 0, side: "right", from: [] };
-  if (at === found.end) return { x: length, side: "left", from: [] };
+  if (at === found.start) return { x: 0, side: "right", from: [], joint: found.start };
+  if (at === found.end) return { x: length, side: "left", from: [], joint: found.end };
   if (structure.joints.some(({ name }) => name === at))
     throw new Error(
       `joint ${String(at)} is not an end of ${member}; its ends are ${found.start} and ${found.end}`,
@@ -93,15 +95,19 @@ function station(structure: Structure, member: string, at: Spot): Station {
   };
 }
 
-/** What a value at a station stands on: the steps the functions follow from and, away from the ends, the member's loads. */
+/** What a value at a station stands on: at an end that was cut free the step that found it; elsewhere the steps the
+ *  functions follow from and, away from the ends, the member's loads. */
 function sourcesAt(
   solved: readonly SolvedSet[],
   member: string,
-  { from }: Station,
+  { from, joint }: Station,
   inside: boolean,
+  which: "N" | "V" | "M",
 ): Sources {
   const perSet = solved.flatMap(({ set, loads, solution, entries }) => {
-    const uses = solution.members.find((one) => one.member === member)?.uses ?? [];
+    const found = solution.steps.findIndex(({ unknown }) => unknown === `${member}_${joint}_${which}`);
+    const follows = solution.members.find((one) => one.member === member)?.uses ?? [];
+    const uses = found === -1 ? follows : [found];
     const own = inside ? memberLoads(set.hinged, loads, member).loads.flatMap((i) => loads[i] ?? []) : [];
     return [...uses.flatMap((i) => entries[i] ?? []), ...loadSources(own)];
   });
@@ -119,7 +125,7 @@ function forceAt(
   const where = station(frameOf(solved), member, at);
   const inside = where.x > 0 && where.x < forces.length;
   const value = valueAt(forces[which], where.x, where.side);
-  return quantity(value, "force", { from: sourcesAt(solved, member, where, inside) });
+  return quantity(value, "force", { from: sourcesAt(solved, member, where, inside, which) });
 }
 
 function momentAt(
@@ -132,7 +138,7 @@ function momentAt(
   const where = station(frameOf(solved), member, at);
   const inside = where.x > 0 && where.x < forces.length;
   const value = valueAt(forces.M, where.x, where.side);
-  return quantity(value, "moment", { from: sourcesAt(solved, member, where, inside) });
+  return quantity(value, "moment", { from: sourcesAt(solved, member, where, inside, "M") });
 }
 
 function peakMoment(
@@ -147,7 +153,7 @@ function peakMoment(
   const { greatest, least } = extremes(forces.M);
   const { x, value } = sign === "positive" ? greatest : least;
   const inside = { x, side: "right" as const, from: memberSources(frameOf(solved), member) };
-  const from = sourcesAt(solved, member, inside, true);
+  const from = sourcesAt(solved, member, inside, true, "M");
   return Object.freeze({ moment: quantity(value, "moment", { from }), at: quantity(x, "length", { from }) });
 }
 

@@ -55,7 +55,7 @@ export function recordHinges(
       return use === undefined ? one : Object.freeze({ ...one, from: Object.freeze([use]) });
     }),
   });
-  recordRanges(ledger, name, hinged, loads, own, judged);
+  recordRanges(ledger, name, hinged, loads, hinged.hinges.slice(frame.hinges.length), judged);
   const set = { name, frame, hinged, cases: Object.freeze([...cases]), determinacy: after };
   return recordVerdict(ledger, set, loads, before);
 }

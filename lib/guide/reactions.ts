@@ -128,6 +128,7 @@ function recordEquilibrium(ledger: Ledger, hand: Hand, reactions: readonly Suppo
       formula: `${name} = 0`,
       lines: sumLines(tex, shown(ofReactions[key]), shown(ofLoads[key]), shown(all[key])),
       inputs: {},
+      closure: true,
       passed: Math.abs(all[key]) <= 1e-9 * Math.max(scale, negligible),
       description: `whole structure under ${hand.name}: reactions and loads, ${name.replace("sum ", "Σ")}`,
     });

@@ -92,6 +92,8 @@ export interface CheckEntry extends EntryBase {
   /** Left side over right side of a "<=" (inverse for ">="), 1 at the limit; absent where the limit is zero. */
   readonly utilisation?: number;
   readonly description: string;
+  /** True for an equation of equilibrium the tool itself wrote as a check: it must close. */
+  readonly closure?: true;
 }
 
 /** A number taken from an analysis and given a symbol; the governing ones stand on the cover. */
