@@ -1,7 +1,7 @@
 // The library as the runner uses it: loaded once, shared with the cells.
 import { existsSync } from "node:fs";
 import { join } from "node:path";
-import type { CalculationRecord, CellRef, Failure, Host } from "../lib/sheet/index.ts";
+import type { CalculationRecord, CellRef, Failure, Head, Host } from "../lib/sheet/index.ts";
 import type { UnitsOf } from "./check/index.ts";
 import { ownFolder } from "./folders.ts";
 
@@ -25,6 +25,8 @@ export interface Library {
   readonly unitsOf: UnitsOf;
   attachHost(host?: Host): void;
   currentLedger(): OpenLedger | undefined;
+  /** Opens a ledger for a notebook that has not come to do so. */
+  openLedger(head: Head): OpenLedger;
   forgetLedger(): void;
   renderPackage(record: CalculationRecord): Promise<string>;
 }
@@ -37,13 +39,14 @@ export async function loadLibrary(): Promise<Library> {
     import("../lib/report/index.ts"),
     import("../lib/quantity/index.ts"),
   ]);
-  const { attachHost, currentLedger, forgetLedger } = sheet;
+  const { attachHost, currentLedger, forgetLedger, openLedger } = sheet;
   const { isNamedDimension, someUnits } = quantity;
   return Object.freeze({
     module,
     unitsOf: (dimension: string) => (isNamedDimension(dimension) ? someUnits(dimension) : []),
     attachHost,
     currentLedger,
+    openLedger,
     forgetLedger,
     renderPackage: report.renderPackage,
   });

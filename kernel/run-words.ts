@@ -41,6 +41,7 @@ export function summaryText({ head, entries }: CalculationRecord, file: string):
       lines.push(`    ${entry.symbol} = ${entry.value.text}  ${entry.description}`);
   if (checks.length > 0)
     lines.push(`    checks: ${checks.length - failed.length} of ${checks.length} satisfied`);
+  for (const entry of entries) if (entry.kind === "query") lines.push(`    OPEN QUERY: ${entry.text}`);
   for (const { formula, description } of failed) lines.push(`    NOT SATISFIED: ${formula}  ${description}`);
   lines.push(`  package: ${shownPath(file)}`);
   return lines.map(line).join("");

@@ -3,7 +3,7 @@ import { mkdir, rm } from "node:fs/promises";
 import { join } from "node:path";
 import { setImmediate as nextTurn } from "node:timers/promises";
 import writeFileAtomic from "write-file-atomic";
-import type { CalculationRecord } from "../lib/sheet/index.ts";
+import type { CalculationRecord, Head } from "../lib/sheet/index.ts";
 import type { CellFailure } from "./failure.ts";
 import { type Library, libraryTypes, type OpenLedger } from "./library.ts";
 import { type Notebook, type NotebookCell, readNotebook } from "./notebook.ts";
@@ -50,6 +50,12 @@ function checkNames(notebooks: readonly Notebook[], out: string): void {
     }
     seen.set(name.toLowerCase(), path);
   }
+}
+
+/** The head of a notebook that failed before it opened its sheet. */
+function unopenedHead(title: string): Head {
+  const unknown = "not reached";
+  return { title, job: unknown, preparedBy: unknown, basis: unknown, units: "kN, m", status: "incomplete" };
 }
 
 const packageFiles = (out: string, name: string): { good: string; incomplete: string } => ({
@@ -174,11 +180,7 @@ class NotebookRun {
     const { terminal, out } = this.#options;
     const { incomplete } = packageFiles(out, this.#notebook.name);
     terminal.err(failureText(this.#notebook, failure));
-    const ledger = library.currentLedger();
-    if (!ledger) {
-      terminal.err(line("No package was written: the calculation had not been opened yet."));
-      return "failed";
-    }
+    const ledger = library.currentLedger() ?? library.openLedger(unopenedHead(this.#notebook.name));
     await this.#write(library, incomplete, this.#record(ledger, failure));
     terminal.err(line(`INCOMPLETE: what was calculated before is in ${shownPath(incomplete)}`));
     return "incomplete";

@@ -29,6 +29,7 @@ export async function fixtureLibrary(): Promise<Library> {
     unitsOf: (dimension) => (isNamedDimension(dimension) ? someUnits(dimension) : []),
     attachHost,
     currentLedger,
+    openLedger,
     forgetLedger,
     renderPackage,
   };

@@ -108,10 +108,11 @@ describe("runNotebooks", () => {
     expect(content("canopy.INCOMPLETE.html")).toContain("at midspan");
   });
 
-  test("a failure before the sheet is open leaves nothing", async () => {
-    expect(await run([save("a.ipynb", ["throw new Error('early')", ...sound])])).toEqual(["failed"]);
-    expect(complained).toMatch(/early[\s\S]*No package was written/);
-    expect(written()).toEqual([]);
+  test("a failure before the sheet is open leaves a package marked INCOMPLETE that says so", async () => {
+    expect(await run([save("a.ipynb", ["throw new Error('early')", ...sound])])).toEqual(["incomplete"]);
+    expect(complained).toMatch(/early[\s\S]*INCOMPLETE/);
+    expect(written()).toEqual(["a.INCOMPLETE.html"]);
+    expect(content("a.INCOMPLETE.html")).toContain("The run stopped in cell 1");
   });
 
   test("a notebook without a sheet is told so", async () => {
@@ -131,9 +132,9 @@ describe("runNotebooks", () => {
 
   test("several notebooks: each afresh, with a summary", async () => {
     const files = [save("a.ipynb", sound), save("b.ipynb", ["q"]), save("c.ipynb", sound)];
-    expect(await run(files)).toEqual(["complete", "failed", "complete"]);
+    expect(await run(files)).toEqual(["complete", "incomplete", "complete"]);
     expect(complained).toMatch(/b\.ipynb, cell 1 .*\nCannot find name 'q'/);
-    expect(printed).toMatch(/3 notebooks: 2 complete, 1 not\n {2}failed: b\.ipynb/);
+    expect(printed).toMatch(/3 notebooks: 2 complete, 1 not\n {2}incomplete: b\.ipynb/);
   });
 
   test("two of one name, and a file that is not there, are refused before anything runs", async () => {
