@@ -13,8 +13,8 @@ export interface Footing {
   readonly decimals: number;
 }
 
-/** Values and their total printed with one number of decimals so that the printed parts add up to the printed total:
- *  each part is rounded down and the missing last units go to the parts with the largest remainders.
+/** Values printed with one number of decimals, each rounded to the nearest, and the total of what is printed: equal
+ *  values look equal, the column adds up, and the total is off by at most half a last unit for each part.
  *  `figures` are those of the largest value. All values need one dimension and are shown in the unit of the first. */
 export function footing<D extends Dimension>(values: readonly Quantity<D>[], figures?: number): Footing {
   const first = values[0];
@@ -23,30 +23,14 @@ export function footing<D extends Dimension>(values: readonly Quantity<D>[], fig
     if (value.dimension !== first.dimension) throw new Error(wrongSum("add", first, value));
   const { unit, factor } = shownUnit(first);
   const numbers = values.map((value) => value.si / factor);
-  const largest = Math.max(...numbers.map(Math.abs), Math.abs(sum(numbers)));
-  const places = decimals(largest, figures ?? shownIn().figures);
-  const { parts, total } = largestRemainder(numbers, 10 ** places);
+  const places = decimals(Math.max(...numbers.map(Math.abs)), figures ?? shownIn().figures);
+  const scale = 10 ** places;
+  // The last binary digits go first, so that 0.125 kN computed as 0.12499999999999999 rounds as it would on paper.
+  const parts = numbers.map((number) => Math.round(Number((number * scale).toPrecision(14))));
+  const print = (lastUnits: number): string => attach(printFixed(lastUnits / scale, places), unit);
   return Object.freeze({
-    parts: Object.freeze(parts.map((part) => attach(printFixed(part, places), unit))),
-    total: attach(printFixed(total, places), unit),
+    parts: Object.freeze(parts.map(print)),
+    total: print(parts.reduce((total, part) => total + part, 0)),
     decimals: places,
   });
-}
-
-function sum(numbers: readonly number[]): number {
-  return numbers.reduce((total, number) => total + number, 0);
-}
-
-function largestRemainder(numbers: readonly number[], scale: number): { parts: number[]; total: number } {
-  const scaled = numbers.map((number) => Number((number * scale).toPrecision(14)));
-  const total = Math.round(Number(sum(scaled).toPrecision(14)));
-  const whole = scaled.map(Math.floor);
-  const order = scaled
-    .map((number, index) => ({ index, remainder: number - Math.floor(number) }))
-    .sort((a, b) => b.remainder - a.remainder || a.index - b.index);
-  for (let left = total - sum(whole), k = 0; left > 0; left--, k++) {
-    const index = order[k % order.length]?.index ?? 0;
-    whole[index] = (whole[index] ?? 0) + 1;
-  }
-  return { parts: whole.map((part) => part / scale), total: total / scale };
 }

@@ -70,9 +70,9 @@ function readNumberAndUnit(text: string, name: string): Quantity | undefined {
   const unit = match?.[2];
   if (!Number.isFinite(number)) throw new Error(badNumber(name, text, undefined));
   if (unit === undefined) return quantity(number, "pure number");
-  return quantity(number * unitNamed(unit, text, name).factor, unitNamed(unit, text, name).dimension, {
-    unit,
-  });
+  const { factor, dimension } = unitNamed(unit, text, name);
+  if (!Number.isFinite(number * factor)) throw new Error(badNumber(name, text, dimension));
+  return quantity(number * factor, dimension, { unit });
 }
 
 function unitNamed(unit: string, text: string, name: string): { dimension: NamedDimension; factor: number } {

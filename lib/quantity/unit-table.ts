@@ -26,7 +26,7 @@ const si: Readonly<Record<NamedDimension, string>> = {
   "moment per angle": "N m / rad",
   "flexural rigidity": "N m^2",
   "temperature change": "K",
-  "per temperature": "1 / K",
+  "per temperature": "K^-1",
 };
 
 const forces: Readonly<Record<string, string>> = {
@@ -79,7 +79,7 @@ const rows: readonly Row[] = [
   ...each(metricForces, ["F m^2", "F mm^2"], "flexural rigidity"),
   ...each(usForces, ["F ft^2", "F in^2"], "flexural rigidity"),
   ["K", "temperature change", "1 K"],
-  ["1/K", "per temperature", "1 / K"],
+  ["1/K", "per temperature", "1 K^-1"],
   ["rad", "angle", "1 rad"],
   ["mrad", "angle", "1 mrad"],
   ["deg", "angle", "1 deg"],

@@ -33,7 +33,7 @@ import {
 import { shownAsWritten, shownGiven, shownValue } from "./shown.ts";
 import { EntryStore, readUse } from "./store.ts";
 import { checkedSymbol, symbolTex, unknownSymbol } from "./symbol.ts";
-import { checkedText, idFromText } from "./words.ts";
+import { checkedText, idFromText, percent } from "./words.ts";
 
 export class Book implements Ledger {
   head: Head;
@@ -115,7 +115,7 @@ export class Book implements Ledger {
       lines,
       result,
     } = calculate(definition, unit, (name) => this.#symbol(name));
-    this.#overrides.refuse(definition.symbol, basisOf(uses, this.#store));
+    this.#overrides.refuse(definition.symbol, () => basisOf(uses, this.#store));
     const shown = shownValue(result);
     return this.#keep(result, {
       kind: "calc",
@@ -144,7 +144,7 @@ export class Book implements Ledger {
       description,
       ...outcome,
     });
-    const share = utilisation === undefined ? "" : ` (${Math.round(utilisation * 100)} %)`;
+    const share = utilisation === undefined ? "" : ` (${percent(utilisation)})`;
     const plain = `${formula}: ${passed ? "holds" : "DOES NOT HOLD"}${share}`;
     return Object.freeze(
       Object.defineProperty(outcome, Symbol.for("Jupyter.display"), {
@@ -161,7 +161,7 @@ export class Book implements Ledger {
     options: { readonly governing?: boolean } = {},
   ): Quantity<D> {
     const read = readMeasure(value, undefined, symbol);
-    this.#overrides.refuse(symbol, basisOf(read.from, this.#store));
+    this.#overrides.refuse(symbol, () => basisOf(read.from, this.#store));
     return this.#keep(read, {
       kind: "result",
       ...this.#named(symbol, shownValue(read)),

@@ -8,7 +8,7 @@ import { valueTex } from "./tex.ts";
 /** A formula in its three lines, with its description. */
 export function formulaDisplay(plain: string, lines: FormulaLines, description: string): Display {
   const rows = [lines.symbols, lines.numbers, lines.result].map(
-    (tex) => `<div>${toMathML(`\\displaystyle ${tex}`)}</div>`,
+    (tex) => `<p>${toMathML(`\\displaystyle ${tex}`)}</p>`,
   );
   return Object.freeze({
     "text/html": `<div>${title(description)}${rows.join("")}</div>`,

@@ -34,12 +34,13 @@ export class Overrides {
   }
 
   /** Throws when a symbol that is worked out is to be set from outside, naming what it stands on. */
-  refuse(symbol: string, standsOn: readonly string[]): void {
+  refuse(symbol: string, basis: () => readonly string[]): void {
     if (!host().overrides.has(symbol)) return;
-    const basis =
+    const standsOn = basis();
+    const words =
       standsOn.length === 0
         ? "it stands on no given"
         : `it stands on ${standsOn.join(", ")}; set one of those`;
-    throw new Error(`${symbol} is calculated, not given: ${basis}`);
+    throw new Error(`${symbol} is calculated, not given: ${words}`);
   }
 }

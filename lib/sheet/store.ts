@@ -20,6 +20,10 @@ export class EntryStore {
   readonly #stored = new Map<string, Stored>();
   // Outlives an entry that is dropped, so that a version is never given to two values.
   readonly #past = new Map<string, Past>();
+  // Whether each entry is out of date, as of the last change; emptied when an entry changes that others may use.
+  readonly #old = new Map<string, boolean>();
+  // Ids that entries use and that are not there.
+  readonly #missing = new Set<string>();
   readonly #numbers = new Map<string, number>();
   #made = new Set<string>();
   #host: Host | undefined;
@@ -34,22 +38,22 @@ export class EntryStore {
     const before = this.#past.get(kept.id);
     const version = before === undefined ? 1 : before.substance === now ? before.version : before.version + 1;
     this.#past.set(kept.id, { version, substance: now });
+    if (this.#disturbs(kept, version)) this.#old.clear();
     this.#stored.set(kept.id, { draft: kept, version, cell: at, order: this.#order++ });
     this.#made.add(kept.id);
-    return this.#entry(kept.id, new Map());
+    return this.#entry(kept.id);
   }
 
   /** The entry of an id, if there is one. */
   get(id: string): Entry | undefined {
-    return this.#stored.has(id) ? this.#entry(id, new Map()) : undefined;
+    return this.#stored.has(id) ? this.#entry(id) : undefined;
   }
 
   /** All entries in the order of the cells, then of making. */
   all(): readonly Entry[] {
-    const known = new Map<string, boolean>();
     return [...this.#stored]
       .sort(([, a], [, b]) => this.#number(a.cell) - this.#number(b.cell) || a.order - b.order)
-      .map(([id]) => this.#entry(id, known));
+      .map(([id]) => this.#entry(id));
   }
 
   /** Drops the entries an earlier run of the cell made and its last run did not. */
@@ -59,6 +63,7 @@ export class EntryStore {
     for (const [id, { cell }] of [...this.#stored]) {
       if (cell?.id === cellId && !this.#made.has(id)) this.#stored.delete(id);
     }
+    this.#old.clear();
     this.#made = new Set();
     this.#host = undefined;
   }
@@ -107,32 +112,44 @@ export class EntryStore {
     return cell === undefined ? 0 : (this.#numbers.get(cell.id) ?? cell.number);
   }
 
-  #entry(id: string, known: Map<string, boolean>): Entry {
+  #entry(id: string): Entry {
     const stored = this.#stored.get(id);
     if (stored === undefined) throw new Error(`there is no entry "${id}"`);
     const { draft, version, cell } = stored;
-    return Object.freeze({
-      ...draft,
-      version,
-      cell: this.#number(cell),
-      outOfDate: this.#outOfDate(id, known),
-    });
+    return Object.freeze({ ...draft, version, cell: this.#number(cell), outOfDate: this.#outOfDate(id) });
+  }
+
+  /** Whether storing this draft can change what is out of date among the entries stored before. */
+  #disturbs(draft: Draft, version: number): boolean {
+    const there = this.#stored.get(draft.id);
+    if (there === undefined) return this.#missing.has(draft.id);
+    return there.version !== version || there.draft.uses.join() !== draft.uses.join();
+  }
+
+  #outOfDate(id: string): boolean {
+    // In the order of making nearly everything stands on what is settled already, however long the chain.
+    if (this.#old.size === 0) {
+      this.#missing.clear();
+      for (const each of this.#stored.keys()) this.#settled(each);
+    }
+    return this.#settled(id);
   }
 
   /** Whether something an entry uses has another version now, is gone, or is itself out of date. */
-  #outOfDate(id: string, known: Map<string, boolean>): boolean {
-    const answer = known.get(id);
+  #settled(id: string): boolean {
+    const answer = this.#old.get(id);
     if (answer !== undefined) return answer;
-    known.set(id, true); // what stands on itself never settles
-    const uses = this.#stored.get(id)?.draft.uses ?? [];
-    const old = uses.some((use) => this.#changed(use, known));
-    known.set(id, old);
+    this.#old.set(id, true); // what stands on itself never settles
+    const old = (this.#stored.get(id)?.draft.uses ?? []).map((use) => this.#changed(use)).includes(true);
+    this.#old.set(id, old);
     return old;
   }
 
-  #changed(use: string, known: Map<string, boolean>): boolean {
+  #changed(use: string): boolean {
     const { id, version } = readUse(use);
-    return this.#stored.get(id)?.version !== version || this.#outOfDate(id, known);
+    const there = this.#stored.get(id);
+    if (there === undefined) this.#missing.add(id);
+    return there?.version !== version || this.#settled(id);
   }
 }
 

@@ -21,7 +21,7 @@ function lowered(power: string): string {
 export function unitTex(unit: string): string {
   if (unit === "%") return "\\%";
   if (unit === "deg" || unit === "°") return "^{\\circ}";
-  const spelled = /^[a-z]+$/.test(unit) ? unit : plainSpelling(unit);
+  const spelled = /^[a-z]+$|°C/.test(unit) ? unit : plainSpelling(unit);
   return spelled
     .split(/([ /])/)
     .map((part) => (part === " " ? "{\\cdot}" : part === "/" ? "/" : baseTex(part)))

@@ -36,6 +36,9 @@ const read: readonly (readonly [unknown, Dimension, number, string])[] = [
   ["2.5", "pure number", 2.5, ""],
   ["30 %", "pure number", 0.3, "%"],
   ["0 kN", "force", 0, "kN"],
+  ["12e-6 1/K", "per temperature", 12e-6, "1/K"],
+  ["12e-6 1/°C", "per temperature", 12e-6, "1/°C"],
+  ["-25 °C", "temperature change", -25, "°C"],
 ];
 
 describe("readMeasure", () => {
@@ -70,6 +73,7 @@ const refused: readonly (readonly [unknown, Dimension, string])[] = [
   [Number.NaN, "length", "span: NaN is not a finite number; a length is wanted"],
   [Number.POSITIVE_INFINITY, "pure number", "span: Infinity is not a finite number"],
   ["1e999 m", "length", 'span: "1e999 m" is not a finite number'],
+  ["1e308 kN", "force", 'span: "1e308 kN" is not a finite number'],
   ["5,2 kN", "force", 'span: "5,2 kN" cannot be read; decimals take a point, thousands no mark'],
   ["5..2 kN", "force", 'span: "5..2 kN" cannot be read'],
   ["kN", "force", 'span: "kN" cannot be read'],
@@ -117,6 +121,8 @@ const moreUnits: readonly AnyUnit[] = [
   "mrad",
   "%",
   "pcf",
+  "K",
+  "1/K",
 ];
 const anyUnit = fc.constantFrom(...units, ...moreUnits);
 const written = fc

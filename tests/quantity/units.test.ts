@@ -63,6 +63,10 @@ const exact: readonly (readonly [AnyUnit, number])[] = [
   ["mrad", 1e-3],
   ["°", Math.PI / 180],
   ["%", 0.01],
+  ["K", 1],
+  ["°C", 1],
+  ["1/K", 1],
+  ["1/°C", 1],
 ];
 
 describe("lookUpUnit agrees with the definitions", () => {
@@ -106,6 +110,8 @@ const spellings: readonly (readonly [AnyUnit, string, NamedDimension])[] = [
   ["kip ft²", "kip ft^2", "flexural rigidity"],
   ["MN·m²", "MN m^2", "flexural rigidity"],
   ["°", "deg", "angle"],
+  ["°C", "K", "temperature change"],
+  ["1/°C", "1/K", "per temperature"],
 ];
 
 describe("plainSpelling", () => {

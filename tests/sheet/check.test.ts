@@ -75,6 +75,21 @@ describe("check", () => {
   });
 });
 
+const near = [
+  ["delta <= 35.05*delta/35", "99.857 %"],
+  ["delta <= 0.9999*delta", "100.010 %"],
+  ["delta <= 0.999999*delta", "100.000100 %"],
+  ["delta <= 1.000*delta", "100 %"],
+  ["delta <= L/500", "125 %"],
+] as const;
+
+describe("a utilisation near 1 is shown on the side of the limit it lies on", () => {
+  test.each(near)("%s: %s", (formula, percent) => {
+    const outcome = sheet.check(formula) as unknown as Record<symbol, () => Record<string, string>>;
+    expect(outcome[Symbol.for("Jupyter.display")]?.()["text/plain"]).toContain(`(${percent})`);
+  });
+});
+
 const refused = [
   ["L <= N", "L <= N: cannot compare L = 14 m (length) and N = −20 kN (force)"],
   ["L <= 5", "cannot compare L = 14 m (length) and 5 (pure number)"],

@@ -16,6 +16,8 @@ beforeEach(() => {
   sheet.given("r", 2.5);
   sheet.given("theta", "30 deg");
   sheet.given("d", "-0.2 m");
+  sheet.given("alpha_T", "12e-6 1/K");
+  sheet.given("DeltaT", "25 °C");
 });
 
 function lines(id: string): CalcEntry["lines"] {
@@ -56,6 +58,7 @@ const worked: readonly (readonly [
   ["a = w·L²/8", "kN m", 127.4],
   ["a = 1e3*L − 2×h", "m", 13989],
   ["a = θ*L", "m", (14 * Math.PI) / 6],
+  ["a = alpha_T*DeltaT*L", "mm", 4.2],
 ];
 
 describe("calc", () => {
@@ -137,7 +140,7 @@ const refused: readonly (readonly [string, "m" | "kN" | "kN m" | "", string])[] 
   [
     "a = Ln*2",
     "m",
-    'a = Ln*2: no symbol "Ln" on this sheet; did you mean "L"? known: L, h, w, H, E, I, r, theta, d',
+    'a = Ln*2: no symbol "Ln" on this sheet; did you mean "L"? known: L, h, w, H, E, I, r, theta, d, alpha_T, DeltaT',
   ],
   ["a = L + w", "m", "a = L + w: cannot add L = 14 m (length) and w = 5.2 kN/m (force per length)"],
   ["a = L - H", "m", "cannot subtract H = 18 kN (force) from L = 14 m (length)"],

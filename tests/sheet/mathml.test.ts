@@ -45,6 +45,8 @@ const texts = [
   ["8360 cm⁴", "8360\\,\\mathrm{cm}^{4}"],
   ["30 °", "30.0^{\\circ}"],
   ["30 deg", "30.0^{\\circ}"],
+  ["25 °C", "25.0\\,\\mathrm{°C}"],
+  ["12e-6 1/K", "1.20 \\times 10^{-5}\\,1/\\mathrm{K}"],
   ["5 %", "5.00\\,\\%"],
   ["5 kN m/rad", "5.00\\,\\mathrm{kN}{\\cdot}\\mathrm{m}/\\mathrm{rad}"],
 ] as const;
@@ -55,6 +57,7 @@ describe("valueTex", () => {
     sheet.given("x", readMeasure(text, undefined, "x"));
     const entry = sheet.entry("x");
     expect(entry?.kind === "given" && valueTex(entry.value)).toBe(tex);
+    expect(toMathML(tex)).toMatch(/^<math/);
   });
   test("of a pure number and of a composed unit", () => {
     expect(valueTex(shownValue(quantity(2.5, "pure number")))).toBe("2.50");
