@@ -60,9 +60,18 @@ const cost = (place: ArrowPlace, taken: readonly Segment[]): number => {
   return taken.reduce((sum, segment) => sum + lengthInside(segment, box), 0);
 };
 
-/** The clearest place for an arrow of given direction at a point: pushing on it, pulling from it, or farther out. */
-export function placeArrow(point: Pt, direction: Pt, length: number, taken: readonly Segment[]): ArrowPlace {
+/** The clearest place for an arrow of given direction at a point: pushing on it, pulling from it, or farther out;
+ *  never nearer to it than `nearest`. */
+export function placeArrow(
+  point: Pt,
+  direction: Pt,
+  length: number,
+  taken: readonly Segment[],
+  nearest: number,
+): ArrowPlace {
   const back = times(direction, -1);
+  // Arrows in line leave room for the text of the nearer one between them.
+  const apart = length + (Math.abs(direction[0]) > 0.5 ? 70 : 24);
   const push = (gap: number): ArrowPlace => {
     const tip = along(point, back, gap);
     const tail = along(tip, back, length);
@@ -73,10 +82,12 @@ export function placeArrow(point: Pt, direction: Pt, length: number, taken: read
     const tip = along(tail, direction, length);
     return { tail, tip, far: tip, outward: direction };
   };
-  const choices = [5, length + 14, 2 * length + 24].flatMap((gap, i) => [
-    { place: push(gap), price: i * 12 },
-    { place: pull(gap), price: i * 12 + 5 },
-  ]);
+  const choices = [0, 1, 2]
+    .map((n) => nearest + n * apart)
+    .flatMap((gap, i) => [
+      { place: push(gap), price: i * 12 },
+      { place: pull(gap), price: i * 12 + 5 },
+    ]);
   const priced = choices.map(({ place, price }) => ({ place, price: price + cost(place, taken) }));
   return priced.reduce((best, next) => (next.price < best.price ? next : best)).place;
 }

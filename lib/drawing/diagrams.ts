@@ -1,6 +1,6 @@
 // N, V and M drawn on the members, hatched in ink: N along the member, V diagonally, M across it.
 
-import type { MemberForces, Piecewise } from "../results/types.ts";
+import type { MemberForces } from "../results/index.ts";
 import { along, distance, type Pt, times } from "./geometry.ts";
 import { hatch } from "./hatch.ts";
 import { hinges, jointNames, type MemberLine, memberLine, memberLines, worldPoints } from "./members.ts";
@@ -9,30 +9,12 @@ import { disc, type Label, line, merge, PENS, polyline, type Scene, scene, strok
 import type { DiagramMark, DiagramsFigure, ForceQuantity } from "./spec.ts";
 import { supports } from "./supports.ts";
 import type { Panel } from "./svg.ts";
+import { traced } from "./traced.ts";
 
 const TALLEST = 215;
 const ORDINATE = 42;
 const FIBRE_GAP = 5;
 const SLOPE: Record<ForceQuantity, number> = { N: 0, V: Math.PI / 4, M: Math.PI / 2 };
-
-/** Value of piece `i` of a piecewise polynomial at x. */
-function valueOn(f: Piecewise, i: number, x: number): number {
-  const t = x - (f.breaks[i] ?? 0);
-  return (f.pieces[i] ?? []).reduceRight((sum, c) => sum * t + c, 0);
-}
-
-/** Points of a function in order of x, both limits at a jump; straight pieces by their ends only. */
-export function traced(f: Piecewise): readonly (readonly [number, number])[] {
-  return f.pieces.flatMap((coefficients, i) => {
-    const a = f.breaks[i] ?? 0;
-    const b = f.breaks[i + 1] ?? a;
-    const count = coefficients.slice(2).some((c) => c !== 0) ? 24 : 1;
-    return Array.from({ length: count + 1 }, (_, j): readonly [number, number] => {
-      const x = a + ((b - a) * j) / count;
-      return [x, valueOn(f, i, x)];
-    });
-  });
-}
 
 const greatestOf = (forces: readonly MemberForces[], quantity: ForceQuantity): number =>
   Math.max(0, ...forces.flatMap((f) => traced(f[quantity]).map(([, v]) => Math.abs(v))));

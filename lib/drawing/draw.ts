@@ -1,5 +1,5 @@
 import { diagramPanels } from "./diagrams.ts";
-import { freeBodyPanel } from "./freeBody.ts";
+import { freeBodyPanel } from "./free-body.ts";
 import { mechanismPanel } from "./mechanism.ts";
 import type { SketchSpec } from "./spec.ts";
 import { structurePanel } from "./structure.ts";

@@ -10,6 +10,7 @@ import {
   type Pt,
   type Segment,
   turned,
+  union,
   unit,
 } from "./geometry.ts";
 import type { Label } from "./scene.ts";
@@ -55,7 +56,7 @@ function candidates(label: Label): readonly Candidate[] {
         const here = { ...label, at };
         const direction = turned(unit(prefer), (step * Math.PI) / 4);
         const box = boxAt(here, direction, label.gap + extra);
-        return { label, at, box, tied: ring >= 2, price: p * (label.fixed ? 4 : 14) + i * 3 + ring * 9 };
+        return { label, at, box, tied: ring >= 2, price: p * (label.reluctance ?? 2.5) + i * 3 + ring * 9 };
       }),
     ),
   );
@@ -76,16 +77,41 @@ function priceOf(candidate: Candidate, placed: readonly PlacedLabel[], blocks: r
     if (shared > 0) price += 2000 + shared * 10;
   }
   for (const block of blocks) {
-    const covered = lengthInside(block, airy);
+    const covered = touches(block, airy) ? lengthInside(block, airy) : 0;
     if (covered > 0) price += 25 + covered * 3;
   }
   return price;
 }
 
-function best(label: Label, placed: readonly PlacedLabel[], blocks: readonly Segment[]): PlacedLabel {
-  const priced = candidates(label).map((c) => ({ c, price: priceOf(c, placed, blocks) }));
-  const { c } = priced.reduce((least, next) => (next.price < least.price ? next : least));
-  return { label: c.label, at: c.at, box: c.box, tied: c.tied };
+const touches = ([a, b]: Segment, box: Box): boolean =>
+  Math.max(a[0], b[0]) >= box.left &&
+  Math.min(a[0], b[0]) <= box.right &&
+  Math.max(a[1], b[1]) >= box.top &&
+  Math.min(a[1], b[1]) <= box.bottom;
+
+/** A label with its candidates, cheapest first, and the lines that any of them could touch. */
+interface Task {
+  readonly candidates: readonly Candidate[];
+  readonly blocks: readonly Segment[];
+}
+
+function taskOf(label: Label, blocks: readonly Segment[]): Task {
+  const all = [...candidates(label)].sort((p, q) => p.price - q.price);
+  const reach = grown(union(all.map((c) => c.box)), 2);
+  return { candidates: all, blocks: blocks.filter((block) => touches(block, reach)) };
+}
+
+function best(task: Task, placed: readonly PlacedLabel[]): PlacedLabel {
+  let least: Candidate | undefined;
+  let leastPrice = Number.POSITIVE_INFINITY;
+  for (const candidate of task.candidates) {
+    // From here on every candidate costs more by its place alone.
+    if (candidate.price >= leastPrice) break;
+    const price = priceOf(candidate, placed, task.blocks);
+    if (price < leastPrice) [least, leastPrice] = [candidate, price];
+  }
+  if (least === undefined) throw new Error("figure: a label has no finite place");
+  return { label: least.label, at: least.at, box: least.box, tied: least.tied };
 }
 
 /** Places for all labels, in their order: fixed ones first, then each where it costs least, then twice again with
@@ -94,17 +120,16 @@ export function placeLabels(labels: readonly Label[], blocks: readonly Segment[]
   const order = [...labels.filter((l) => l.fixed), ...labels.filter((l) => !l.fixed)].filter(
     (l) => l.text !== "",
   );
+  const tasks = order.map((label) => taskOf(label, blocks));
   const placed: PlacedLabel[] = [];
-  for (const label of order) placed.push(best(label, placed, blocks));
+  for (const task of tasks) placed.push(best(task, placed));
   for (let round = 0; round < 2; round++) {
-    for (let i = 0; i < placed.length; i++) {
-      const { label } = placed[i] as PlacedLabel;
+    tasks.forEach((task, i) => {
       placed[i] = best(
-        label,
+        task,
         placed.filter((_, j) => j !== i),
-        blocks,
       );
-    }
+    });
   }
   return placed;
 }

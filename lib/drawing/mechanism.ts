@@ -1,7 +1,7 @@
 // A mechanism: the skeleton thin, the moved skeleton dashed, an arrow at each point that moves.
 
-import type { Mechanism } from "../results/types.ts";
-import type { Structure } from "../structure/types.ts";
+import type { Mechanism } from "../results/index.ts";
+import type { Structure } from "../structure/index.ts";
 import { arrow } from "./arrows.ts";
 import { distance, type Pt } from "./geometry.ts";
 import { hinges, jointNames, memberLine, memberLines, worldPoints } from "./members.ts";

@@ -1,16 +1,12 @@
 // Members, joints and hinges of a structure on the page.
 
-import type { Joint, Place, Structure } from "../structure/types.ts";
+import { axisOf, type Joint, jointNamed, memberNamed, pointOn, type Structure } from "../structure/index.ts";
 import { minus, type Pt, plus, times, unit } from "./geometry.ts";
 import type { Scale } from "./scale.ts";
 import { disc, type Label, line, merge, PENS, type Pen, type Scene, scene } from "./scene.ts";
 
-export function jointOf(structure: Structure, name: string): Joint {
-  const joint = structure.joints.find((j) => j.name === name);
-  if (joint) return joint;
-  const known = structure.joints.map((j) => j.name).join(", ");
-  throw new Error(`figure: joint "${name}" is not in the structure; joints are ${known}`);
-}
+export const jointOf = (structure: Structure, name: string): Joint =>
+  jointNamed(structure, name, "the figure names joint");
 
 /** A member as it lies on the page. */
 export interface MemberLine {
@@ -27,32 +23,21 @@ export interface MemberLine {
 }
 
 export function memberLine(structure: Structure, name: string, scale: Scale): MemberLine {
-  const member = structure.members.find((m) => m.name === name);
-  if (!member) {
-    const known = structure.members.map((m) => m.name).join(", ");
-    throw new Error(`figure: member "${name}" is not in the structure; members are ${known}`);
+  const on = axisOf(structure, memberNamed(structure, name, "what the figure shows"));
+  if (!(on.length > 0)) {
+    throw new Error(`figure: member "${name}" has length ${on.length} m; more than 0 is wanted`);
   }
-  const a = jointOf(structure, member.start);
-  const b = jointOf(structure, member.end);
-  const length = Math.hypot(b.x - a.x, b.y - a.y);
-  if (!(length > 0))
-    throw new Error(`figure: member "${name}" has length ${length} m; more than 0 is wanted`);
-  const axis: Pt = [(b.x - a.x) / length, (b.y - a.y) / length];
-  const world = (x: number): Pt => [a.x + axis[0] * x, a.y + axis[1] * x];
-  // Right-hand side of the walk is (dy, -dx) with y up, hence (dy, dx) on the page.
+  const world = (x: number): Pt => pointOn(on, x);
+  // Right-hand side of the walk is (s, -c) with y up, hence (s, c) on the page.
   return {
     name,
-    length,
-    axis,
-    fibre: [axis[1], axis[0]],
+    length: on.length,
+    axis: [on.c, on.s],
+    fibre: [on.s, on.c],
     world,
     page: (x) => scale.page(...world(x)),
   };
 }
-
-/** Metres from the start of a member of given length. */
-export const metresOf = (place: Place, length: number): number =>
-  "metres" in place ? place.metres : place.fraction * length;
 
 export const worldPoints = (structure: Structure): Pt[] => structure.joints.map((j): Pt => [j.x, j.y]);
 
@@ -106,8 +91,14 @@ export function hinges(structure: Structure, scale: Scale): Scene {
 /** Names of joints, outside the corner they mark. */
 export function jointNames(structure: Structure, scale: Scale): Scene {
   const labels = structure.joints.map((joint): Label => {
-    const outward = outwardAt(structure, joint.name, scale);
-    return { text: joint.name, at: scale.page(joint.x, joint.y), prefer: outward, gap: 7, bold: true };
+    const isFixed = structure.supports.some((s) => s.joint === joint.name && s.kind === "fixed");
+    return {
+      text: joint.name,
+      at: scale.page(joint.x, joint.y),
+      prefer: outwardAt(structure, joint.name, scale),
+      gap: isFixed ? 12 : 7,
+      bold: true,
+    };
   });
   return scene([], labels);
 }

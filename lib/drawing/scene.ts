@@ -25,6 +25,8 @@ export interface Label {
   readonly accent?: boolean;
   /** Other places that say the same, taken where they are clearer. */
   readonly instead?: readonly { readonly at: Pt; readonly prefer: Pt }[];
+  /** How much clearer each of those must be to be taken. */
+  readonly reluctance?: number;
   /** Keeps to these places and sides, never farther out. */
   readonly fixed?: boolean;
 }

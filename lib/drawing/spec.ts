@@ -1,8 +1,8 @@
 // What a figure shows, as plain data for the record. Geometry and loads are SI (m, N, N·m); everything that is
 // printed comes as text, because units and rounding are decided where the numbers are known.
 
-import type { FreeBody, Mechanism, MemberForces, Point } from "../results/types.ts";
-import type { Load, Structure } from "../structure/types.ts";
+import type { FreeBody, Mechanism, MemberForces, Point } from "../results/index.ts";
+import type { Load, Structure } from "../structure/index.ts";
 
 interface FigureWords {
   /** Short name of the figure, read out first. */

@@ -1,6 +1,6 @@
 // Supports: what holds the structure, told apart by outline alone.
 
-import type { Structure, Support } from "../structure/types.ts";
+import type { Structure, Support } from "../structure/index.ts";
 import { along, type Pt, plus, type Segment, times } from "./geometry.ts";
 import { jointOf, outwardAt } from "./members.ts";
 import type { Scale } from "./scale.ts";

@@ -68,7 +68,8 @@ export function addForce(
   sums.Qx += across * x;
   sums.C += couple;
   sums.eF += along * x; // ∫ N dx of a bar held at its start
-  sums.r1F += (across * x * (L - x) * (2 * L - x)) / (6 * L) + (couple * (2 * L * L - 6 * L * x + 3 * x * x)) / (6 * L);
+  sums.r1F +=
+    (across * x * (L - x) * (2 * L - x)) / (6 * L) + (couple * (2 * L * L - 6 * L * x + 3 * x * x)) / (6 * L);
   sums.r2F -= (across * x * (L * L - x * x)) / (6 * L) + (couple * (L * L - 3 * x * x)) / (6 * L);
 }
 

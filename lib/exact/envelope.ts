@@ -9,7 +9,7 @@ export interface Envelope {
   /** First column kept of each row. */
   readonly first: Int32Array;
   /** Entry (i, k) is at shift[i] + k. */
-  readonly shift: Float64Array;
+  readonly shift: Int32Array;
   /** Entries in all. */
   readonly size: number;
 }
@@ -20,7 +20,7 @@ const suspect = 1e-8;
 /** The envelope of a matrix from the first column of each row. */
 export function envelopeOf(first: Int32Array): Envelope {
   const n = first.length;
-  const shift = new Float64Array(n);
+  const shift = new Int32Array(n);
   let size = 0;
   for (let i = 0; i < n; i++) {
     shift[i] = size - (first[i] as number);
@@ -38,10 +38,8 @@ export function factorize({ n, first, shift }: Envelope, a: Float64Array, from =
     const fi = first[i] as number;
     for (let j = fi + 1; j < i; j++) {
       const sj = shift[j] as number;
-      const fj = first[j] as number;
-      let sum = a[si + j] as number;
-      for (let k = fj > fi ? fj : fi; k < j; k++) sum -= (a[si + k] as number) * (a[sj + k] as number);
-      a[si + j] = sum; // g_ij = a_ij - Σ g_ik l_jk
+      const from = Math.max(first[j] as number, fi);
+      a[si + j] = (a[si + j] as number) - dot(a, si + from, sj + from, j - from); // g_ij = a_ij - Σ g_ik l_jk
     }
     const diagonal = a[si + i] as number;
     let d = diagonal;
@@ -55,6 +53,20 @@ export function factorize({ n, first, shift }: Envelope, a: Float64Array, from =
     if (!(d > suspect * diagonal)) return i;
   }
   return n;
+}
+
+/** Σ a[p + k] a[q + k] over k < count; four sums at a time, so that additions need not wait for each other. */
+function dot(a: Float64Array, p: number, q: number, count: number): number {
+  let [s0, s1, s2, s3] = [0, 0, 0, 0];
+  let k = 0;
+  for (; k + 3 < count; k += 4) {
+    s0 += (a[p + k] as number) * (a[q + k] as number);
+    s1 += (a[p + k + 1] as number) * (a[q + k + 1] as number);
+    s2 += (a[p + k + 2] as number) * (a[q + k + 2] as number);
+    s3 += (a[p + k + 3] as number) * (a[q + k + 3] as number);
+  }
+  for (; k < count; k++) s0 += (a[p + k] as number) * (a[q + k] as number);
+  return s0 + s1 + (s2 + s3);
 }
 
 /** Solves L D Lᵀ x = b in place. */
@@ -82,7 +94,7 @@ export function nullVector({ n, first, shift }: Envelope, a: Float64Array, row: 
 /** Lᵀ x = z over the first `n` rows, in place. */
 function backSubstitute(
   first: Int32Array,
-  shift: Float64Array,
+  shift: Int32Array,
   a: Float64Array,
   x: Float64Array,
   n: number,

@@ -8,7 +8,12 @@ export type ExactFault =
   | { readonly kind: "too stiff and too soft"; readonly motion: Mechanism }
   | { readonly kind: "bad stiffness"; readonly what: string; readonly value: number }
   | { readonly kind: "wrong number"; readonly what: string; readonly wanted: number; readonly got: number }
-  | { readonly kind: "too large"; readonly unknowns: number; readonly entries: number; readonly limit: number };
+  | {
+      readonly kind: "too large";
+      readonly unknowns: number;
+      readonly entries: number;
+      readonly limit: number;
+    };
 
 /** An error of the exact solution; `fault` holds the data the words were made from. */
 export class ExactError extends Error {

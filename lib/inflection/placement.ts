@@ -5,9 +5,7 @@ import {
   type Along,
   axisOf,
   type HingeAt,
-  inGlobalAxes,
   type Load,
-  type Member,
   memberNamed,
   metresAlong,
   readPlace,
@@ -16,13 +14,8 @@ import {
   snapToEnds,
 } from "../structure/index.ts";
 import { InflectionError } from "./faults.ts";
-import {
-  type End,
-  inflectionPoints,
-  inflectionRange,
-  isolatedRange,
-  type Range,
-} from "./inflection-points.ts";
+import { type End, inflectionPoints, type Range } from "./inflection-points.ts";
+import { type Judged, rangeOf } from "./member-range.ts";
 import { isLoaded } from "./span.ts";
 
 export interface PlacementChoice {
@@ -56,7 +49,7 @@ export interface Placement {
 }
 
 /** A hinge placed by a distance or by end fixity, judged by the range of the isolated span under these loads.
- *  An end held or free to turn for certain (a support with no other member) counts as such, other ends as anything between.
+ *  The end at hand counts as anything from free to turn to fixed; so does the far end, unless a support alone decides how it turns.
  *  A member without load across it, under loads that do not push the structure sideways, is judged as turned at its far end. */
 export function placement(structure: Structure, loads: readonly Load[], choice: PlacementChoice): Placement {
   const member = memberNamed(structure, choice.member, "hinge");
@@ -117,73 +110,8 @@ function distanceOf(
   return { distance: near === "left" ? point : length - point, sources: [] };
 }
 
-interface Judged {
-  readonly range?: Range;
-  readonly why: string;
-}
-
-function rangeOf(
-  structure: Structure,
-  loads: readonly Load[],
-  member: Member,
-  near: End,
-  own: MemberLoads,
-): Judged {
-  const [here, there] = near === "left" ? [member.start, member.end] : [member.end, member.start];
-  const [known, far] = [knownFixity(structure, member, here), knownFixity(structure, member, there)];
-  if (known === 0) throw new InflectionError({ kind: "pinned end", member: member.name, joint: here });
-  if (!isLoaded(own))
-    return unloadedRange(
-      loads.map((load) => inGlobalAxes(structure, load)),
-      own.length,
-      far,
-    );
-  try {
-    const range = far === undefined ? isolatedRange(own, near) : inflectionRange(own, near, far);
-    return { range, why: `isolated span, ${here} from free to turn to fixed, ${farWords(there, far)}` };
-  } catch (error) {
-    if (error instanceof InflectionError && error.fault.kind === "no inflection")
-      return { why: error.message };
-    throw error;
-  }
-}
-
-/** A member turned at its far end only: M_near = -r M_far/2, hence zero at L r / (2 + r) from the near end, L/3 at most. */
-function unloadedRange(loads: readonly Load[], length: number, far: number | undefined): Judged {
-  if (loads.some(pushesSideways))
-    return {
-      why: "no load across the member and loads that may move the structure sideways: its own loads give no range",
-    };
-  if (far !== undefined)
-    return {
-      why: "no load across the member, and its far end cannot be turned by others: its own loads give no range",
-    };
-  return {
-    range: Object.freeze({ least: 0, most: length / 3 }),
-    why: "no load across the member, far end turned by the frame, this end from free to turn to fixed",
-  };
-}
-
-function pushesSideways(load: Load): boolean {
-  return load.kind === "distributed" ? load.direction[0] !== 0 : load.fx !== 0;
-}
-
-/** 0 or 1 where nothing but a support decides how the end can turn. */
-function knownFixity(structure: Structure, member: Member, joint: string): 0 | 1 | undefined {
-  const released = joint === member.start ? member.releases.start.moment : member.releases.end.moment;
-  if (released) return 0;
-  if (structure.supports.some((s) => s.joint === joint && s.holds.rotation)) return 1;
-  const others = structure.members.some((m) => m !== member && (m.start === joint || m.end === joint));
-  return others ? undefined : 0;
-}
-
 function isInside(distance: number, { least, most }: Range, length: number): boolean {
   return distance >= least - 1e-9 * length && distance <= most + 1e-9 * length;
-}
-
-function farWords(joint: string, far: number | undefined): string {
-  if (far === undefined) return `${joint} likewise`;
-  return far === 0 ? `${joint} free to turn` : `${joint} fixed`;
 }
 
 function wordsOf(

@@ -1,7 +1,7 @@
 // The entries of a record as a reader meets them: each with its line label, its anchor, what it stands on and what
 // stands on it.
 
-import type { CalculationRecord, Entry } from "../sheet/index.ts";
+import { type CalculationRecord, type Entry, readUse } from "../sheet/index.ts";
 
 /** A thing an entry stands on, as it is now. */
 export interface Ground {
@@ -37,14 +37,6 @@ export const lineAnchor = (id: string): string => `e-${escaped(id)}`;
 export const whyAnchor = (id: string, part?: number): string =>
   `why-${escaped(id)}${part === undefined ? "" : `.${part}`}`;
 
-/** "id@3" split at its last "@". Throws on another form. */
-export function parseUse(use: string): { readonly id: string; readonly version: number } {
-  const match = /^(.+)@(\d+)$/su.exec(use);
-  if (!match)
-    throw new Error(`record: "${use}" is no reference to an entry; "id@version" is wanted, e.g. "L@1"`);
-  return { id: match[1] ?? "", version: Number(match[2]) };
-}
-
 function labels(entries: readonly Entry[]): Map<string, string> {
   const counts = { given: 0, assumption: 0, line: 0 };
   const found = new Map<string, string>();
@@ -70,7 +62,7 @@ export function usesOf(entry: Entry): readonly string[] {
 function usersOf(entries: readonly Entry[]): ReadonlyMap<string, readonly string[]> {
   const users = new Map<string, string[]>();
   for (const entry of entries) {
-    for (const id of new Set(usesOf(entry).map((use) => parseUse(use).id))) {
+    for (const id of new Set(usesOf(entry).map((use) => readUse(use).id))) {
       users.set(id, [...(users.get(id) ?? []), entry.id]);
     }
   }
@@ -82,7 +74,7 @@ function rootsOf(entry: Entry, byId: ReadonlyMap<string, Entry>): readonly strin
   const open = [entry];
   for (let next = open.pop(); next; next = open.pop()) {
     for (const use of usesOf(next)) {
-      const { id } = parseUse(use);
+      const { id } = readUse(use);
       const ground = byId.get(id);
       if (seen.has(id) || !ground) continue;
       seen.add(id);
@@ -101,7 +93,7 @@ export function bookOf(record: CalculationRecord): Book {
   const numbered = labels(record.entries);
   const users = usersOf(record.entries);
   const ground = (use: string): Ground => {
-    const { id, version } = parseUse(use);
+    const { id, version } = readUse(use);
     const now = byId.get(id);
     const state = now === undefined ? "missing" : now.version === version ? "current" : "changed";
     return { id, state };

@@ -65,7 +65,7 @@ function checks(items: readonly Of<CheckEntry>[]): Html {
       entry,
       label,
     }) => h`<li><a class="no" href="#${lineAnchor(entry.id)}" aria-label="line ${label}">${label}</a>
-<p class="value">${maths(entry.lines.symbols)}</p><p>${entry.description === "" ? "" : `${entry.description}: `}${verdict(entry)}</p></li>`,
+<p>${entry.description === "" ? maths(entry.lines.symbols) : entry.description}</p><p>${verdict(entry)}</p></li>`,
   )}</ul>`;
 }
 

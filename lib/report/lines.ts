@@ -79,8 +79,10 @@ const result = (entry: ResultEntry): Part => [
   entry.governing ? h`<p class="source">governs</p>` : "",
 ];
 
-const step = (entry: StepEntry): Part =>
-  threeLines(entry.lines, (found) => numberLink(entry.id, found, entry.value.text));
+const step = (entry: StepEntry, heading: string): Part => [
+  says(heading),
+  threeLines(entry.lines, (found) => numberLink(entry.id, found, entry.value.text)),
+];
 
 const finding = (entry: FindingEntry): Part => [
   h`<p class="says"><strong>${entry.title}</strong></p>`,
@@ -90,7 +92,7 @@ const finding = (entry: FindingEntry): Part => [
 
 function figure(entry: FigureEntry, figures: Figures): Part {
   const drawn = figures.get(entry.id);
-  return h`<figure>${raw(drawn?.svg ?? "")}<figcaption>Figure ${drawn?.number ?? ""}. ${entry.caption}</figcaption></figure>`;
+  return h`<figure class="${entry.spec.kind.replaceAll(" ", "-")}">${raw(drawn?.svg ?? "")}<figcaption>Figure ${drawn?.number ?? ""}. ${entry.caption}</figcaption></figure>`;
 }
 
 const note = (entry: NoteEntry): Part => h`<p class="note">${entry.text}</p>`;
@@ -98,7 +100,7 @@ const query = (entry: QueryEntry): Part => h`<p class="query"><strong>Open query
 const conclusion = (entry: ConclusionEntry): Part => h`<p class="conclusion">${entry.text}</p>`;
 const text = (entry: TextEntry): Part => h`<div class="prose">${markdown(entry.markdown)}</div>`;
 
-function matter(item: Item, figures: Figures): Part {
+function matter(item: Item, figures: Figures, heading: string): Part {
   const { entry } = item;
   switch (entry.kind) {
     case "given":
@@ -112,7 +114,7 @@ function matter(item: Item, figures: Figures): Part {
     case "result":
       return result(entry);
     case "step":
-      return step(entry);
+      return step(entry, heading);
     case "finding":
       return finding(entry);
     case "table":
@@ -132,8 +134,8 @@ function matter(item: Item, figures: Figures): Part {
 
 const STALE = h`<p class="stale">OUT OF DATE: something this stands on has changed since it was worked out.</p>`;
 
-/** One entry as a line of the page. */
-export function line(book: Book, item: Item, figures: Figures): Html {
+/** One entry as a line of the page; `heading` says which equation a step is. */
+export function line(book: Book, item: Item, figures: Figures, heading = ""): Html {
   const { entry, label } = item;
   const anchor = lineAnchor(entry.id);
   const number =
@@ -141,7 +143,7 @@ export function line(book: Book, item: Item, figures: Figures): Html {
   const stale = entry.outOfDate ? STALE : "";
   return h`<div class="line ${entry.kind}${entry.outOfDate ? " outdated" : ""}" id="${anchor}">
 <div class="number">${number}</div>
-<div class="matter">${stale}${matter(item, figures)}</div>
+<div class="matter">${stale}${matter(item, figures, heading)}</div>
 ${margin(book, item)}
 </div>
 `;

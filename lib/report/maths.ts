@@ -1,7 +1,7 @@
 // Formulas on the page: three lines set under one another at the equals sign.
 
 import { type FormulaLines, toMathML } from "../sheet/index.ts";
-import { type Html, h, raw } from "./html.ts";
+import { type Html, h, joined, raw } from "./html.ts";
 
 const set = new Map<string, Html>();
 const KEPT = 2000;
@@ -22,6 +22,43 @@ export function maths(tex: string, display = false): Html {
   return made;
 }
 
+/** TeX shorter than this is set in one piece. */
+const SHORT = 44;
+
+/** A long formula cut where a line may break: before + and - and relations that stand outside all brackets. */
+export function breakable(tex: string): readonly string[] {
+  if (tex.replace(/\\[a-z]+/gi, "").replace(/[{}\s]/g, "").length < SHORT) return [tex];
+  const pieces: string[] = [];
+  let depth = 0;
+  let start = 0;
+  for (let i = 0; i < tex.length; i++) {
+    const c = tex[i] ?? "";
+    if ("{([".includes(c)) depth++;
+    else if ("})]".includes(c)) depth--;
+    const before = tex.slice(start, i).trim();
+    // A sign after a relation or another operator belongs to its number.
+    const binary =
+      c === "=" || ((c === "+" || c === "-") && /[\w)}\]]$/.test(before) && !/\\[a-z]+$/i.test(before));
+    if (depth !== 0 || before === "" || !binary) continue;
+    pieces.push(before);
+    start = i;
+  }
+  return [...pieces, tex.slice(start).trim()];
+}
+
+/** A formula that may run over several lines. */
+function wrapping(tex: string): Html {
+  const pieces = breakable(tex);
+  if (pieces.length === 1) return maths(tex, true);
+  try {
+    // The empty group makes the sign at the start of a piece one between two terms.
+    const laid = pieces.map((piece, i) => raw(toMathML(i === 0 ? piece : `{}${piece}`, { display: true })));
+    return h`${joined(laid, " ")}`;
+  } catch {
+    return maths(tex, true);
+  }
+}
+
 /** Left side and the rest of "left = right", split at the first equals sign outside braces. */
 function sides(tex: string): readonly [string, string] | undefined {
   let depth = 0;
@@ -38,10 +75,10 @@ export function threeLines(lines: FormulaLines, link: (result: Html) => Html): H
   const all = [lines.symbols, lines.numbers, lines.result].map(sides);
   const left = all[0]?.[0];
   if (left !== undefined && all.every((s) => s?.[0] === left)) {
-    const [first, second, third] = all.map((s) => maths(s?.[1] ?? "", true));
+    const [first, second, third] = all.map((s) => wrapping(s?.[1] ?? ""));
     return h`<div class="formula"><span>${maths(left, true)}</span><span>${first}</span><span></span><span>${second}</span><span></span><span>${link(third ?? h``)}</span></div>`;
   }
   // With nothing to work out, numbers and result read the same: printed once.
-  const numbers = lines.numbers === lines.result ? "" : h`<span>${maths(lines.numbers, true)}</span>`;
-  return h`<div class="formula plain"><span>${maths(lines.symbols, true)}</span>${numbers}<span>${link(maths(lines.result, true))}</span></div>`;
+  const numbers = lines.numbers === lines.result ? "" : h`<span>${wrapping(lines.numbers)}</span>`;
+  return h`<div class="formula plain"><span>${wrapping(lines.symbols)}</span>${numbers}<span>${link(wrapping(lines.result))}</span></div>`;
 }

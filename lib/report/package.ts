@@ -59,9 +59,11 @@ function calculation(book: Book, figures: Figures): Part {
     .filter((i) => i.entry.kind !== "given" && i.entry.kind !== "assumption")
     .map((item): Part => {
       const own = bodyOf(item);
-      const heading = own === "" || own === body ? "" : h`<h3 class="body-name">${own}</h3>\n`;
-      body = own;
-      return [heading, line(book, item, figures)];
+      // "beam AB, moments about A" goes on about "beam AB".
+      const goesOn = body !== "" && (own === body || own.startsWith(`${body}, `));
+      if (!goesOn) body = own;
+      const title = goesOn || own === "" ? "" : h`<h3 class="body-name">${own}</h3>\n`;
+      return [title, line(book, item, figures, goesOn ? own.slice(body.length + 2) : "")];
     });
 }
 

@@ -20,51 +20,80 @@ export function nameOf(item: Item): Html {
   return tex === undefined ? h`${placeName(item)}` : maths(tex);
 }
 
-/** A link to an entry's line, named by its symbol or place. */
-export const lineLink = (item: Item): Html =>
-  h`<a class="ref" href="#${lineAnchor(item.entry.id)}" title="${placeName(item)}">${nameOf(item)}</a>`;
-
-function groundLink(book: Book, ground: Ground): Part {
-  const item = book.item(ground.id);
-  if (!item) return h`<span class="gone">${ground.id} (no longer on the sheet)</span>`;
-  const changed = ground.state === "changed" ? h` <span class="stale">(changed since)</span>` : undefined;
-  return h`${lineLink(item)}${changed}`;
+interface Reference {
+  readonly link: Html;
+  /** Lines named by number only, gathered behind the word "lines". */
+  readonly bare: boolean;
 }
 
-/** Links to everything named, with commas between; a dash where there is nothing. */
+function reference(item: Item, after: Part = ""): Reference {
+  const bare = texOf(item.entry) === undefined && /^\d+$/.test(item.label);
+  const text = bare ? h`${item.label}` : nameOf(item);
+  const place = placeName(item);
+  return {
+    bare,
+    link: h`<a class="ref" href="#${lineAnchor(item.entry.id)}" title="${place}">${text}</a>${after}`,
+  };
+}
+
+/** References with commas between; symbols first, then the lines that have none. */
+function listed(references: readonly Reference[]): Part {
+  const named = references.filter((r) => !r.bare).map((r): Part => r.link);
+  const lines = references.filter((r) => r.bare).map((r): Part => r.link);
+  const word = lines.length === 1 ? "line " : "lines ";
+  return joined(lines.length === 0 ? named : [...named, [word, joined(lines, ", ")]], ", ");
+}
+
+const CHANGED = h` <span class="stale">(changed since)</span>`;
+
+const groundReference = (book: Book, ground: Ground): Reference => {
+  const item = book.item(ground.id);
+  if (item) return reference(item, ground.state === "changed" ? CHANGED : "");
+  return { bare: false, link: h`<span class="gone">${ground.id} (no longer on the sheet)</span>` };
+};
+
+/** Links to everything an entry stands on. */
 export const groundLinks = (book: Book, grounds: readonly Ground[]): Part =>
   grounds.length === 0
     ? h`<span class="none">nothing else on this sheet</span>`
-    : joined(
-        grounds.map((g) => groundLink(book, g)),
-        ", ",
-      );
+    : listed(grounds.map((g) => groundReference(book, g)));
 
-export const itemLinks = (book: Book, ids: readonly string[]): Part =>
-  joined(
-    ids.flatMap((id) => {
-      const item = book.item(id);
-      return item ? [lineLink(item)] : [];
-    }),
-    ", ",
-  );
+const itemReferences = (book: Book, ids: readonly string[]): Reference[] =>
+  ids.flatMap((id) => {
+    const item = book.item(id);
+    return item ? [reference(item)] : [];
+  });
 
-/** A number that leads to what it stands on: a link that works without a script. `spoken` reads it out where it is
- *  set as maths. */
+/** Links to entries by id. */
+export const itemLinks = (book: Book, ids: readonly string[]): Part => listed(itemReferences(book, ids));
+
+/** A number that leads to what it stands on: a link that works without a script. `spoken` is read out in place of
+ *  what is set as maths. */
 export function numberLink(id: string, shown: Part, spoken?: string): Html {
-  const label = spoken === undefined ? "" : h` aria-label="${spoken}, what it stands on"`;
-  return h`<a class="num" href="#${whyAnchor(id)}"${label}>${shown}</a>`;
+  const inside =
+    spoken === undefined
+      ? h`${shown}`
+      : h`<span class="spoken">${spoken}</span><span aria-hidden="true">${shown}</span>`;
+  return h`<a class="num" href="#${whyAnchor(id)}">${inside}</a>`;
 }
 
 /** A number of a table, leading to the row of its group of cells. */
 export const cellLink = (id: string, group: number, shown: Part): Html =>
   h`<a class="num" href="#${whyAnchor(id, group)}">${shown}</a>`;
 
+/** More than this many in the margin are named in the list of what stands on what. */
+const MOST = 9;
+
+function used(book: Book, item: Item): Part {
+  const shown = item.by.length > MOST ? item.by.slice(0, MOST - 2) : item.by;
+  const rest = item.by.length - shown.length;
+  const more = rest === 0 ? "" : h` and <a class="ref" href="#${whyAnchor(item.entry.id)}">${rest} more</a>`;
+  return h`<p><span class="tag">used by</span> ${itemLinks(book, shown)}${more}</p>`;
+}
+
 /** The right-hand margin of a line. */
 export function margin(book: Book, item: Item): Html {
   const stands =
     item.on.length > 0 ? h`<p><span class="tag">stands on</span> ${groundLinks(book, item.on)}</p>` : "";
-  const bears =
-    item.by.length > 0 ? h`<p><span class="tag">used by</span> ${itemLinks(book, item.by)}</p>` : "";
-  return h`<div class="margin">${stands}${bears}</div>`;
+  return h`<div class="margin">${stands}${item.by.length > 0 ? used(book, item) : ""}</div>`;
 }

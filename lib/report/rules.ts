@@ -42,7 +42,7 @@ dt { font-size: .72rem; color: var(--quiet); }
 .message { font-weight: 600; margin-top: .4rem; white-space: pre-wrap; }
 .summary > :not(h2) { margin-left: var(--left); }
 .plain li { padding-left: 1rem; text-indent: -1rem; margin-bottom: .25rem; } .plain li::before { content: "– "; display: inline-block; width: 1rem; text-indent: 0; }
-.ledger li { display: grid; grid-template-columns: 2.2rem minmax(0, 2fr) minmax(0, 3fr); gap: 0 .6rem; align-items: baseline; padding: .28rem 0; border-top: 1px solid var(--rule); }
+.ledger li { display: grid; grid-template-columns: 2.2rem minmax(0, 3fr) minmax(0, 2fr); gap: 0 .6rem; align-items: baseline; padding: .28rem 0; border-top: 1px solid var(--rule); }
 .ledger .wide { grid-column: 2 / -1; }
 .contents { display: flex; flex-wrap: wrap; gap: .3rem 1.2rem; margin: 1.8rem 0 0 var(--left); padding: .55rem 0; border: 1px solid var(--rule); border-width: 1px 0; font-size: .85rem; }
 .contents a { padding: .2rem 0; }
@@ -58,12 +58,15 @@ dt { font-size: .72rem; color: var(--quiet); }
 .line.figure .margin p, .line.table .margin p { display: inline; margin-right: 1rem; }
 .body-name { margin: 0; padding: .9rem 0 .1rem 1rem; border-left: 1.5px solid var(--accent); margin-left: var(--left); }
 .value { font-size: 1.04rem; }
-.given .matter { display: grid; grid-template-columns: minmax(9rem, 2fr) minmax(0, 3fr); gap: 0 1rem; align-items: baseline; }
+.given .matter { display: grid; grid-template-columns: minmax(9rem, 2fr) minmax(0, 3fr); gap: 0 1rem; align-items: baseline; align-content: start; }
 .given .source { grid-column: 2; } .given .outside, .given .stale { grid-column: 1 / -1; }
 .num { color: var(--ink); border-bottom: 1.5px solid var(--accent); padding: 0 .08em; }
+.formula .num { display: inline-block; position: relative; }
 .num:hover { background: var(--wash); text-decoration: none; }
 .formula { display: grid; grid-template-columns: max-content minmax(0, 1fr); gap: .28rem .35rem; align-items: center; overflow-x: auto; padding: .1rem 0; }
 .formula.plain { grid-template-columns: minmax(0, 1fr); }
+.spoken { position: absolute; width: 1px; height: 1px; overflow: hidden; clip-path: inset(50%); white-space: nowrap; }
+.why .what, .ledger p { overflow-x: auto; overflow-y: hidden; }
 .formula > span { min-width: 0; padding: .12rem 0; } .formula math { display: inline math; }
 .holds { font-weight: 600; } .fails { font-weight: 700; background: var(--ink); color: var(--paper); padding: .05rem .4rem; }
 .stale { font-weight: 700; border: 2px dashed var(--ink); padding: .2rem .5rem; margin-bottom: .3rem; } .margin .stale { border: 0; padding: 0; }
@@ -71,7 +74,7 @@ dt { font-size: .72rem; color: var(--quiet); }
 .outside { font-weight: 600; border-left: 4px solid var(--ink); padding-left: .5rem; margin: .2rem 0; }
 .query > .matter { border-left-width: 5px; } .conclusion > .matter { font-weight: 600; }
 .working { margin: .2rem 0; } .working li { padding-left: 1rem; }
-figure { max-width: 33rem; margin: .3rem auto .2rem; }
+figure { max-width: 33rem; margin: .3rem auto .2rem; } figure.free-body { max-width: 28rem; }
 .figure-svg { display: block; width: 100%; height: auto; }
 figcaption { font-size: .85rem; margin-top: .3rem; }
 .scroll { overflow-x: auto; }
@@ -127,20 +130,23 @@ const PRINT = `
   html { background: none; }
   body { font-size: 10.3pt; line-height: 1.36; }
   main { max-width: none; margin: 0; padding: 0; box-shadow: none; }
-  .contents, .skip, #trace, details { display: none !important; }
+  .contents, .skip, #trace, details { display: none; }
   h2[id="notebook"] { display: none; }
   a, .num, .ref { color: inherit; text-decoration: none; border: 0; }
   h2 { margin-top: 7mm; }
   h2, h3, .body-name, caption { break-after: avoid; }
   .line, .why li, .ledger li, .title-block, .stopped, tr, .status, .colophon { break-inside: avoid; }
   .line.text, .line.table { break-inside: auto; }
-  figure { break-inside: avoid; max-width: 125mm; }
+  figure { break-inside: avoid; max-width: 120mm; } figure.free-body { max-width: 100mm; }
   .figure-svg { max-height: 215mm; }
   .scroll, .formula { overflow: visible; }
   .fails { outline: 1.5pt solid #1c1b19; background: none; color: inherit; }
   .summary { break-after: page; }
   .colophon { break-before: avoid; margin-top: 5mm; }
   .banner { position: static; border: 2pt solid #1c1b19; background: none; color: inherit; margin-bottom: 5mm; }
+  .why { columns: 2; column-gap: 7mm; font-size: 8.4pt; }
+  .why li { display: block; position: relative; padding: 1.2mm 0 1.2mm 9mm; } .why .no { position: absolute; left: 0; top: 1.2mm; min-width: 6mm; }
+  .margin { font-size: 8.6pt; } .tag { font-size: 7pt; }
   .stamp { display: block; position: fixed; top: 105mm; left: 0; right: 0; text-align: center; font: 700 58pt sans-serif; color: transparent; -webkit-text-stroke: 1pt #8a867d; transform: rotate(-32deg); opacity: .6; }
   .is-ground > .number::after, .is-user > .number::after { content: none; }
   .is-ground > .matter, .is-user > .matter, .line:target > .matter, .why li:target { background: none; box-shadow: none; }

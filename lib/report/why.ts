@@ -9,7 +9,8 @@ import { cellGroups } from "./tables.ts";
 
 function shown(entry: Entry): Part {
   if (entry.kind === "step") return h`: ${maths(entry.lines.result)}`;
-  if (entry.kind === "check") return h`: ${maths(entry.lines.symbols)}`;
+  if (entry.kind === "check")
+    return entry.description === "" ? h`: ${entry.formula}` : h`: ${entry.description}`;
   if (entry.kind === "finding") return h`: ${entry.verdict}`;
   if (entry.kind === "table" || entry.kind === "figure") return h`: ${entry.caption}`;
   if ("value" in entry && entry.value !== undefined) return h` = ${entry.value.text}`;

@@ -26,6 +26,35 @@ export interface MemberForces {
   readonly loads?: readonly number[];
 }
 
+/** A member of an elastic solution: how it moves besides. Along the member towards its end and across it towards the left
+ *  of the walk (away from the reference fibre) in m, rotation counter-clockwise in rad; `inflection` are the places inside
+ *  where the moment changes sign. */
+export interface ElasticMember extends MemberForces {
+  readonly along: Piecewise;
+  readonly deflection: Piecewise;
+  readonly rotation: Piecewise;
+  readonly inflection: readonly number[];
+}
+
+/** Displacement of a joint, m and rad; `rotation` is absent where nothing takes a moment (a pin of a truss). */
+export interface JointDisplacement {
+  readonly joint: string;
+  readonly x: number;
+  readonly y: number;
+  readonly rotation?: number;
+}
+
+/** What an elastic solution answers with. */
+export interface ElasticSolution {
+  readonly joints: readonly JointDisplacement[];
+  readonly reactions: readonly Reaction[];
+  readonly members: readonly ElasticMember[];
+  /** Largest force or moment left over at a joint, over the largest that meets there anywhere. */
+  readonly residual: number;
+  /** Estimate of the condition of the scaled stiffness matrix: about this many times the rounding error, 1e-16, can be lost. */
+  readonly condition: number;
+}
+
 /** Reaction components at a support; a component the support does not hold is absent.
  *  `steps` gives, per component, the index of the step that found it. */
 export interface Reaction {

@@ -98,9 +98,9 @@ export function usesOf(equation: Equation, terms: readonly Term[]): Step["uses"]
   const leverless = equation.entries.every(({ push }) => push.action.turn !== 0);
   const counted = moments && leverless ? [] : stands;
   return {
-    loads: unique(terms.flatMap((t) => ("load" in t.source ? [t.source.load] : []))),
+    loads: ascending(terms.flatMap((t) => ("load" in t.source ? [t.source.load] : []))),
     joints: unique(counted.flatMap((s) => s.joints)),
-    steps: unique(terms.flatMap((t) => ("force" in t.source ? [t.source.step] : []))),
+    steps: ascending(terms.flatMap((t) => ("force" in t.source ? [t.source.step] : []))),
     hinges: unique(counted.flatMap((s) => s.hinges)),
   };
 }
@@ -196,4 +196,8 @@ function coefficientOf(
 
 function unique<T>(values: readonly T[]): readonly T[] {
   return [...new Set(values)];
+}
+
+function ascending(indices: readonly number[]): readonly number[] {
+  return [...unique(indices)].sort((a, b) => a - b);
 }

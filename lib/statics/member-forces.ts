@@ -12,7 +12,7 @@ import {
   sum,
 } from "../results/index.ts";
 import { axisOf, deepFreeze, type Member } from "../structure/index.ts";
-import { type Cutting, isCutFree } from "./bodies.ts";
+import { type Cutting, isCutFree } from "./cutting.ts";
 import type { Found } from "./equations.ts";
 import { cutForce, pinForce, reactionForce } from "./force-names.ts";
 

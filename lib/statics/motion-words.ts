@@ -63,8 +63,16 @@ function partWords(
     ),
     sways ? "" : foldWords(structure, turns),
   ].filter((w) => w !== "");
-  if (words.length === 0) return "a member turns about its own axis of support";
+  if (words.length === 0) return turningWords(turns);
   return (sways ? "sway: " : "") + words.join(", ");
+}
+
+/** Last resort where no joint is seen to move: the members that turn. */
+function turningWords(turns: readonly Turn[]): string {
+  const names = [
+    ...new Set(turns.filter((t) => Math.abs(t.rotation) * (t.end - t.begin) > still).map((t) => t.member)),
+  ];
+  return names.length === 1 ? `member ${and(names)} turns` : `members ${and(names)} turn`;
 }
 
 function sideWords(points: readonly Moved[]): string {

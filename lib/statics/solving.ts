@@ -126,15 +126,16 @@ function takeStep(state: Solving, equation: Equation): void {
   const [unknown = ""] = unknownsIn(equation, state.known);
   const terms = termsOf(equation, state.known);
   const coefficient = coefficientIn(equation, unknown);
-  const sum = terms.reduce((total, t) => total + t.coefficient * t.value, 0);
-  push(state, equation, {
-    terms,
-    unknown,
-    coefficient,
-    result: -sum / coefficient + 0,
-    together: [],
-    uses: usesOf(equation, terms),
-  });
+  const result = -sumOf(terms) / coefficient + 0;
+  push(state, equation, { terms, unknown, coefficient, result, together: [], uses: usesOf(equation, terms) });
+}
+
+/** Sum of the terms; rounding left where they cancel is zero, else it would count as a load further on. */
+function sumOf(terms: readonly Term[]): number {
+  const parts = terms.map((t) => t.coefficient * t.value);
+  const sum = parts.reduce((total, part) => total + part, 0);
+  const size = parts.reduce((total, part) => total + Math.abs(part), 0);
+  return Math.abs(sum) <= 1e-13 * size ? 0 : sum;
 }
 
 /** The smallest set of equations with as many unknowns; all of them stand on what any of them stands on. */

@@ -2,6 +2,7 @@
 
 export { endsReleasedAt } from "./assemble.ts";
 export { type BeamOptions, beam } from "./beam.ts";
+export { type BuildingFrameOptions, buildingFrame } from "./building-frame.ts";
 export { checkLoads } from "./check-loads.ts";
 export { StructureError, type StructureFault } from "./faults.ts";
 export { deepFreeze } from "./freeze.ts";
@@ -28,6 +29,9 @@ export {
   uniform,
   varying,
 } from "./loads.ts";
+export { type Model, structureFromJson, structureToJson } from "./model-json.ts";
+export { modelSchema, type Schema } from "./model-schema.ts";
+export { type PanelGirderOptions, panelGirder } from "./panel-girder.ts";
 export { type Along, metresAlong, readPlace, snapToEnds } from "./place.ts";
 export { type Base, type PortalOptions, portal } from "./portal.ts";
 export { type SectionChoice, type Sections, withSections } from "./section.ts";
@@ -42,6 +46,8 @@ export {
   type SupportParts,
   support,
 } from "./support.ts";
+export { type Diagonals, type TrussOptions, truss } from "./truss.ts";
+export { type TrussPortalOptions, trussPortal } from "./truss-portal.ts";
 export type {
   DistributedLoad,
   Hinge,

@@ -22,7 +22,7 @@ export interface SectionChoice {
 export type Sections = Readonly<Record<string, SectionChoice>>;
 
 /** EA L² / EI of a member called stiff: its shortening changes results by about one part in this. */
-const stiffness = 1e7;
+const stiffness = 1e8;
 
 /** The same structure with sections: a member takes the section under its own name, else its group's, else that of "all".
  *  Throws on a key that is no member and no group, and on A, I or E that is not more than zero. */

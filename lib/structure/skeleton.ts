@@ -104,14 +104,15 @@ function inOrder(stops: readonly Stop[], length: number): readonly Stop[] {
   return kept.sort((a, b) => a.at - b.at);
 }
 
-/** What both ends of a segment transmit to their nodes, given its member: a hinge no moment, a cut everything. */
+/** What both ends of a segment do not transmit to their nodes, given its member and whether it is the member's last:
+ *  a hinge transmits no moment, a cut everything. */
 export function releasesOf(
   member: Member,
   segment: Segment,
-  length: number,
+  isLast: boolean,
 ): { readonly start: Release; readonly end: Release } {
   return {
     start: segment.begin === 0 ? member.releases.start : { moment: segment.releasedStart },
-    end: segment.end === length ? member.releases.end : { moment: segment.releasedEnd },
+    end: isLast ? member.releases.end : { moment: segment.releasedEnd },
   };
 }

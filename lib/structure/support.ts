@@ -83,7 +83,8 @@ export function resists({ holds, springs }: Support, axis: "x" | "y" | "rotation
   return holds[axis] || (springs?.[axis] ?? 0) > 0;
 }
 
-function kindOf({ x, y, rotation }: Support["holds"]): SupportKind {
+/** The nearest of the four trade names for what is held. */
+export function kindOf({ x, y, rotation }: Support["holds"]): SupportKind {
   if (rotation) return "fixed";
   if (x && y) return "pinned";
   return x || y ? "roller" : "free";

@@ -92,12 +92,12 @@ describe("drawSketch", () => {
     [
       "load on an unknown member",
       { ...portalFigure, loads: [{ ...beamFigure.loads[0], member: "XY" }] } as SketchSpec,
-      /member "XY" is not in the structure; members are AB, BC, CD/,
+      /on member "XY", which is not defined; members are AB, BC, CD/,
     ],
     [
       "load at an unknown joint",
       { ...portalFigure, loads: [{ ...eaveForce, joint: "Z" }] } as SketchSpec,
-      /joint "Z" is not in the structure; joints are A, B, C, D/,
+      /joint "Z", which is not defined; joints are A, B, C, D/,
     ],
     [
       "coordinate that is no number",

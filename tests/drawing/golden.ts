@@ -7,7 +7,7 @@ import { expect } from "vitest";
 /** Compares `text` with the file of that name in the folder `golden` beside the test at `test` (its import.meta.url). */
 export function expectGolden(test: string, name: string, text: string): void {
   const kept = new URL(`./golden/${name}`, test);
-  const changed = new URL(`./golden/${name.replace(/(\.[a-z]+)$/, "-changed$1")}`, test);
+  const changed = new URL(`./golden/${name.replace(/((?:\.golden)?\.[a-z]+)$/, "-changed$1")}`, test);
   const before = existsSync(kept) ? readFileSync(kept, "utf8") : undefined;
   if (before === text) {
     rmSync(changed, { force: true });

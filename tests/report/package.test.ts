@@ -1,8 +1,9 @@
 import { createHash } from "node:crypto";
 import { describe, expect, it } from "vitest";
-import { lineAnchor, parseUse } from "../../lib/report/book.ts";
+import { lineAnchor } from "../../lib/report/book.ts";
 import { renderPackage } from "../../lib/report/index.ts";
-import type { CalculationRecord, Entry } from "../../lib/sheet/index.ts";
+import { type CalculationRecord, type Entry, readUse } from "../../lib/sheet/index.ts";
+import { expectGolden } from "../drawing/golden.ts";
 import { incomplete, outdated, record } from "./fixtures.ts";
 
 const withoutJson = (html: string): string =>
@@ -35,6 +36,11 @@ function poisoned<T>(value: T): T {
 describe("renderPackage", () => {
   it("renderPackage is the same on every run", async () => {
     expect(await renderPackage(record)).toBe(await renderPackage(record));
+  });
+
+  it("renderPackage(record without figures) is the kept page", async () => {
+    const entries = record.entries.filter((e) => e.kind !== "figure");
+    expectGolden(import.meta.url, "package.golden.html", await renderPackage({ ...record, entries }));
   });
 
   it("renderPackage reaches for nothing outside itself", async () => {
@@ -79,7 +85,7 @@ describe("renderPackage", () => {
       const row = html.slice(html.indexOf(`<li id="why-${lineAnchor(id).slice(2)}"`)).split("</li>")[0] ?? "";
       expect(entry.uses.length).toBeGreaterThan(0);
       for (const use of entry.uses) {
-        const link = `href="#${lineAnchor(parseUse(use).id)}"`;
+        const link = `href="#${lineAnchor(readUse(use).id)}"`;
         expect(line).toContain(link);
         expect(row.split("what stands on it")[0]).toContain(link);
       }
@@ -204,7 +210,7 @@ describe("renderPackage", () => {
     [
       "a use without version",
       change("w", { uses: ["g"] }),
-      /"g" is no reference to an entry; "id@version" is wanted/,
+      /"g" is not an entry and its version, such as "L@1"/,
     ],
     [
       "an unknown figure",

@@ -1,5 +1,5 @@
 import { describe, expect, it } from "vitest";
-import { readMeasure } from "../../lib/quantity/index.ts";
+import { quantity } from "../../lib/quantity/index.ts";
 import { beam } from "../../lib/structure/index.ts";
 
 describe("beam", () => {
@@ -42,12 +42,8 @@ describe("beam", () => {
   });
 
   it("a joint carries the sources of all spans to its left", () => {
-    const L = { ...readMeasure("6 m", "length", "L"), from: ["L@2"] } as ReturnType<
-      typeof readMeasure<"length">
-    >;
-    const M = { ...readMeasure("8 m", "length", "M"), from: ["M@1"] } as ReturnType<
-      typeof readMeasure<"length">
-    >;
+    const L = quantity(6, "length", { from: ["L@2"] });
+    const M = quantity(8, "length", { from: ["M@1"] });
     const two = beam({ spans: [L, M] });
     expect(two.joints.map((j) => j.from)).toEqual([[], ["L@2"], ["L@2", "M@1"]]);
   });

@@ -1,5 +1,5 @@
 import { describe, expect, it } from "vitest";
-import { readMeasure } from "../../lib/quantity/index.ts";
+import { quantity } from "../../lib/quantity/index.ts";
 import { atJoint, coupleLoad, partial, pointLoad, uniform, varying } from "../../lib/structure/index.ts";
 
 describe("loads", () => {
@@ -46,12 +46,8 @@ describe("loads", () => {
   });
 
   it("a load carries the sources of its value and its place", () => {
-    const w = { ...readMeasure("5 kN/m", "force per length", "w"), from: ["w@1"] } as ReturnType<
-      typeof readMeasure<"force per length">
-    >;
-    const a = { ...readMeasure("2 m", "length", "a"), from: ["a@3"] } as ReturnType<
-      typeof readMeasure<"length">
-    >;
+    const w = quantity(5000, "force per length", { from: ["w@1"] });
+    const a = quantity(2, "length", { from: ["a@3"] });
     expect(uniform("BC", w, { from: a }).from).toEqual(["w@1", "a@3"]);
   });
 

@@ -1,16 +1,28 @@
 // One body cut free, with every action on it.
 
-import type { Action } from "../results/types.ts";
-import { arrow } from "./arrows.ts";
+import type { Action } from "../results/index.ts";
+import { bands, keyOf, senseOf } from "./body-loads.ts";
 import { dimensioned } from "./dimensions.ts";
-import { along, type Pt, type Segment, unit } from "./geometry.ts";
-import { arrowLength, band, bandHeight, coupleArrow, deepest, forceArrow, stretchOn } from "./loads.ts";
+import { coupleArrow, forceArrow } from "./forces.ts";
+import { along, type Pt, type Segment } from "./geometry.ts";
 import { hingeDisc, jointOf, memberLine, outwardAt } from "./members.ts";
 import { fitted, type Laid, type Scale } from "./scale.ts";
-import { ACCENT, blocksOf, disc, type Label, line, merge, PENS, type Scene, scene } from "./scene.ts";
+import {
+  ACCENT,
+  blocksOf,
+  disc,
+  type Label,
+  line,
+  merge,
+  PENS,
+  type Pen,
+  type Scene,
+  scene,
+} from "./scene.ts";
 import type { FreeBodyFigure } from "./spec.ts";
 
 const TALLEST = 190;
+const ARROW = 36;
 
 function cutPoints(spec: FreeBodyFigure, scale: Scale): Scene {
   const { structure, body } = spec;
@@ -38,65 +50,61 @@ function cutPoints(spec: FreeBodyFigure, scale: Scale): Scene {
   return merge(...names, ...joints);
 }
 
-/** Distributed loads over the pieces of the body. */
-function bands(spec: FreeBodyFigure, scale: Scale): Scene {
-  const { structure, body, loads: all, texts, resultants } = spec;
-  const greatest = deepest(all);
-  const offsets = new Map<string, number>();
-  return merge(
-    ...body.actions.map((action, i) => {
-      const load = "load" in action.source ? all[action.source.load] : undefined;
-      if (load?.kind !== "distributed") return scene([]);
-      const on = memberLine(structure, load.member, scale);
-      const stretches = body.pieces
-        .filter((p) => p.member === load.member)
-        .flatMap((p) => stretchOn(load, on.length, p.begin, p.end) ?? []);
-      const offset = offsets.get(load.member) ?? 5;
-      const drawn = stretches.map((s, j) => band(on, s, offset, greatest, j === 0 ? (texts[i] ?? "") : ""));
-      offsets.set(load.member, offset + Math.max(0, ...stretches.map((s) => bandHeight(s, greatest))));
-      return merge(...drawn, resultant(action, resultants?.[i] ?? "", scale, offsets.get(load.member) ?? 0));
+/** Radii of the turning arrows at one point; forces there begin outside the last. */
+const ringRadius = (spec: FreeBodyFigure, ring: number): number =>
+  (spec.body.pieces.length === 0 ? 24 : 15) + ring * 10;
+
+/** Couples first, then the forces around them: reactions, hinge forces, cuts, point loads. */
+function actions(spec: FreeBodyFigure, scale: Scale, drawn: Scene): Scene {
+  let scenes: Scene = scene([]);
+  const taken = (): Segment[] => [...blocksOf(drawn), ...blocksOf(scenes)];
+  const rings = new Map<string, number>();
+  const shown = spec.body.actions
+    .map((action, i) => ({ action, text: spec.texts[i] ?? "" }))
+    .filter(
+      ({ action }) => !("load" in action.source && spec.loads[action.source.load]?.kind === "distributed"),
+    );
+  for (const { action, text } of shown) {
+    if (action.turn === 0) continue;
+    const ring = rings.get(keyOf(action)) ?? 0;
+    rings.set(keyOf(action), ring + 1);
+    const turn = action.turn * senseOf(action) > 0 ? 1 : -1;
+    const radius = ringRadius(spec, ring);
+    const point = scale.page(action.at.x, action.at.y);
+    scenes = merge(scenes, coupleArrow(point, turn, text, taken(), penOf(spec, action), radius));
+  }
+  for (const { action, text } of shown) {
+    if (action.turn !== 0) continue;
+    const force: Pt = [action.direction[0] * senseOf(action), action.direction[1] * senseOf(action)];
+    const ring = rings.get(keyOf(action));
+    const gap = ring === undefined ? 5 : ringRadius(spec, ring - 1) + 6;
+    const point = scale.page(action.at.x, action.at.y);
+    scenes = merge(scenes, forceArrow(point, force, ARROW, text, taken(), penOf(spec, action), gap));
+  }
+  return scenes;
+}
+
+/** Short ends of the members cut round a joint that stands alone. */
+function stubs(spec: FreeBodyFigure, scale: Scale): Scene {
+  const { structure, body } = spec;
+  if (body.pieces.length > 0) return scene([]);
+  return scene(
+    body.joints.flatMap((name) => {
+      const joint = jointOf(structure, name);
+      const here = scale.page(joint.x, joint.y);
+      return structure.members
+        .filter((m) => m.start === name || m.end === name)
+        .map((m) => {
+          const on = memberLine(structure, m.name, { k: 1, width: 0, page: (x, y) => [x, -y] });
+          const away = m.start === name ? 1 : -1;
+          return line(here, along(here, [on.axis[0], -on.axis[1]], 15 * away), PENS.member);
+        });
     }),
   );
 }
 
-function resultant(action: Action, text: string, scale: Scale, height: number): Scene {
-  if (text === "" || action.value === undefined) return scene([]);
-  const way = unit([
-    action.direction[0] * Math.sign(action.value),
-    -action.direction[1] * Math.sign(action.value),
-  ]);
-  const foot = scale.page(action.at.x, action.at.y);
-  const tip = along(foot, way, -3);
-  const tail = along(tip, way, -(height + 14));
-  const label: Label = { text, at: tail, prefer: [-way[0], -way[1]], gap: 4 };
-  return scene(arrow(tail, tip, PENS.resultant, 7), [label]);
-}
-
-/** Forces and couples: reactions, hinge forces, cuts, point loads. */
-function actions(spec: FreeBodyFigure, scale: Scale, drawn: Scene): Scene {
-  let scenes: Scene = scene([]);
-  const rings = new Map<string, number>();
-  spec.body.actions.forEach((action, i) => {
-    const load = "load" in action.source ? spec.loads[action.source.load] : undefined;
-    if (load?.kind === "distributed") return;
-    const taken: Segment[] = [...blocksOf(drawn), ...blocksOf(scenes)];
-    const pen = isSought(spec, action) ? PENS.sought : PENS.load;
-    const sense = action.value !== undefined && action.value < 0 ? -1 : 1;
-    const point = scale.page(action.at.x, action.at.y);
-    const text = spec.texts[i] ?? "";
-    if (action.turn !== 0) {
-      const key = point.map((v) => v.toFixed(1)).join(" ");
-      const ring = rings.get(key) ?? 0;
-      rings.set(key, ring + 1);
-      const turn = action.turn * sense > 0 ? 1 : -1;
-      scenes = merge(scenes, coupleArrow(point, turn, text, taken, pen, 15 + ring * 9));
-      return;
-    }
-    const force: Pt = [action.direction[0] * sense, action.direction[1] * sense];
-    scenes = merge(scenes, forceArrow(point, force, arrowLength(1, 1) - 10, text, taken, pen));
-  });
-  return scenes;
-}
+const penOf = (spec: FreeBodyFigure, action: Action): Pen =>
+  isSought(spec, action) ? PENS.sought : PENS.load;
 
 const isSought = (spec: FreeBodyFigure, action: Action): boolean =>
   "force" in action.source && (spec.sought ?? []).includes(action.source.force);
@@ -139,7 +147,7 @@ export function freeBodyPanel(spec: FreeBodyFigure): Laid {
           return line(on.page(p.begin), on.page(p.end), PENS.member);
         }),
       );
-      const under = merge(pieces, bands(spec, scale));
+      const under = merge(pieces, stubs(spec, scale), bands(spec, scale));
       const cuts = cutPoints(spec, scale);
       const drawn = merge(
         under,
