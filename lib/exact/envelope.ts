@@ -14,7 +14,7 @@ export interface Envelope {
   readonly size: number;
 }
 
-/** Pivots below this part of their diagonal entry are looked at before they are used. */
+/** Pivots below this part of their diagonal entry are looked at. */
 const suspect = 1e-8;
 
 /** The envelope of a matrix from the first column of each row. */
@@ -29,44 +29,73 @@ export function envelopeOf(first: Int32Array): Envelope {
   return { n, first, shift, size };
 }
 
-/** Factors A = L D Lᵀ in place from row `from` on (those before are factored): L below the diagonal, D on it.
- *  Stops after the first row whose pivot is below 1e-8 of its diagonal entry or not positive, and returns that row;
- *  n when all is done. */
-export function factorize({ n, first, shift }: Envelope, a: Float64Array, from = 0): number {
-  for (let i = from; i < n; i++) {
-    const si = shift[i] as number;
-    const fi = first[i] as number;
-    for (let j = fi + 1; j < i; j++) {
-      const sj = shift[j] as number;
-      const from = Math.max(first[j] as number, fi);
-      a[si + j] = (a[si + j] as number) - dot(a, si + from, sj + from, j - from); // g_ij = a_ij - Σ g_ik l_jk
+/** Factors A = L D Lᵀ in place: L below the diagonal, D on it. `look` is called with each row whose pivot is below 1e-8
+ *  of its diagonal entry or not positive, all rows up to it being factored; it throws, or lets the pivot pass. */
+export function factorize(envelope: Envelope, a: Float64Array, look: (row: number) => void): void {
+  const { n, first } = envelope;
+  let i = 0;
+  while (i < n) {
+    // The rows of one joint begin at one column: three at a time need fewer looks at the rows before them.
+    const begin = first[i] as number;
+    const together = i + 2 < n && begin === first[i + 1] && begin === first[i + 2];
+    if (together) reduceThree(envelope, a, i);
+    const done = together ? i : begin;
+    const end = together ? i + 3 : i + 1;
+    for (let row = i; row < end; row++) {
+      reduceRow(envelope, a, row, Math.max(done, begin + 1));
+      if (!finishRow(envelope, a, row)) look(row);
     }
-    const diagonal = a[si + i] as number;
-    let d = diagonal;
-    for (let j = fi; j < i; j++) {
-      const g = a[si + j] as number;
-      const l = g / (a[(shift[j] as number) + j] as number); // l_ij = g_ij / d_j
-      d -= l * g; // d_i = a_ii - Σ l_ij g_ij
-      a[si + j] = l;
-    }
-    a[si + i] = d;
-    if (!(d > suspect * diagonal)) return i;
+    i = end;
   }
-  return n;
 }
 
-/** Σ a[p + k] a[q + k] over k < count; four sums at a time, so that additions need not wait for each other. */
-function dot(a: Float64Array, p: number, q: number, count: number): number {
-  let [s0, s1, s2, s3] = [0, 0, 0, 0];
-  let k = 0;
-  for (; k + 3 < count; k += 4) {
-    s0 += (a[p + k] as number) * (a[q + k] as number);
-    s1 += (a[p + k + 1] as number) * (a[q + k + 1] as number);
-    s2 += (a[p + k + 2] as number) * (a[q + k + 2] as number);
-    s3 += (a[p + k + 3] as number) * (a[q + k + 3] as number);
+/** g_ij = a_ij - Σ g_ik l_jk for the columns j of a row from `column` on. */
+function reduceRow({ first, shift }: Envelope, a: Float64Array, i: number, column: number): void {
+  const si = shift[i] as number;
+  const fi = first[i] as number;
+  for (let j = column; j < i; j++) {
+    const sj = shift[j] as number;
+    const begin = Math.max(first[j] as number, fi);
+    let sum = a[si + j] as number;
+    for (let k = begin; k < j; k++) sum -= (a[si + k] as number) * (a[sj + k] as number);
+    a[si + j] = sum;
   }
-  for (; k < count; k++) s0 += (a[p + k] as number) * (a[q + k] as number);
-  return s0 + s1 + (s2 + s3);
+}
+
+/** The same for the columns before row i of rows i, i + 1 and i + 2, which begin at one column. */
+function reduceThree({ first, shift }: Envelope, a: Float64Array, i: number): void {
+  const fi = first[i] as number;
+  const [s0, s1, s2] = [shift[i] as number, shift[i + 1] as number, shift[i + 2] as number];
+  for (let j = fi + 1; j < i; j++) {
+    const sj = shift[j] as number;
+    let g0 = a[s0 + j] as number;
+    let g1 = a[s1 + j] as number;
+    let g2 = a[s2 + j] as number;
+    for (let k = Math.max(first[j] as number, fi); k < j; k++) {
+      const l = a[sj + k] as number;
+      g0 -= (a[s0 + k] as number) * l;
+      g1 -= (a[s1 + k] as number) * l;
+      g2 -= (a[s2 + k] as number) * l;
+    }
+    a[s0 + j] = g0;
+    a[s1 + j] = g1;
+    a[s2 + j] = g2;
+  }
+}
+
+/** l_ij = g_ij / d_j and d_i = a_ii - Σ l_ij g_ij; whether the pivot d_i is beyond suspicion. */
+function finishRow({ first, shift }: Envelope, a: Float64Array, i: number): boolean {
+  const si = shift[i] as number;
+  const diagonal = a[si + i] as number;
+  let d = diagonal;
+  for (let j = first[i] as number; j < i; j++) {
+    const g = a[si + j] as number;
+    const l = g / (a[(shift[j] as number) + j] as number);
+    d -= l * g;
+    a[si + j] = l;
+  }
+  a[si + i] = d;
+  return d > suspect * diagonal;
 }
 
 /** Solves L D Lᵀ x = b in place. */

@@ -1,94 +1,121 @@
 // The order of nodes that keeps the matrix narrow. Three are tried, the one with the least work is taken:
 // along x, along y, and from node to neighbour (reverse Cuthill-McKee; E. Cuthill & J. McKee, Reducing the bandwidth of
 // sparse symmetric matrices, Proc. 24th ACM National Conf. (1969) 157-172).
+// Entries of typed arrays within their length are numbers; `as number` says so to the compiler without a test at run time.
 
 import type { Skeleton } from "../structure/index.ts";
 
 /** Node indices in the order their displacements are numbered. */
 export function ordering({ nodes, segments }: Skeleton): Int32Array {
-  const neighbours = neighboursOf(nodes.length, segments);
-  const index = Array.from(nodes, (_, i) => i);
-  const at = (i: number): { readonly x: number; readonly y: number } => nodes[i] ?? { x: 0, y: 0 };
-  const tried = [
-    [...index].sort((i, k) => at(i).y - at(k).y || at(i).x - at(k).x),
-    [...index].sort((i, k) => at(i).x - at(k).x || at(i).y - at(k).y),
-    reverseCuthillMcKee(neighbours),
-  ];
-  let best = tried[0] ?? index;
-  let least = work(best, neighbours);
-  for (const order of tried.slice(1)) {
-    const w = work(order, neighbours);
+  const graph = graphOf(nodes.length, segments);
+  const x = Float64Array.from(nodes, (node) => node.x);
+  const y = Float64Array.from(nodes, (node) => node.y);
+  let best = along(y, x);
+  let least = work(best, graph);
+  for (const order of [along(x, y), reverseCuthillMcKee(graph)]) {
+    const w = work(order, graph);
     if (w < least) [best, least] = [order, w];
   }
-  return Int32Array.from(best);
+  return best;
 }
 
-type Neighbours = readonly (readonly number[])[];
+/** Neighbours of node i are list[begin[i]] to list[begin[i + 1] - 1]. */
+interface Graph {
+  readonly begin: Int32Array;
+  readonly list: Int32Array;
+}
 
-function neighboursOf(
-  count: number,
-  segments: readonly { readonly from: number; readonly to: number }[],
-): Neighbours {
-  const lists = Array.from({ length: count }, (): number[] => []);
+function graphOf(count: number, segments: readonly { readonly from: number; readonly to: number }[]): Graph {
+  const begin = new Int32Array(count + 1);
   for (const { from, to } of segments) {
-    lists[from]?.push(to);
-    lists[to]?.push(from);
+    begin[from + 1] = (begin[from + 1] as number) + 1;
+    begin[to + 1] = (begin[to + 1] as number) + 1;
   }
-  return lists;
+  for (let i = 0; i < count; i++) begin[i + 1] = (begin[i + 1] as number) + (begin[i] as number);
+  const next = begin.slice();
+  const list = new Int32Array(2 * segments.length);
+  for (const { from, to } of segments) {
+    list[next[from] as number] = to;
+    list[next[to] as number] = from;
+    next[from] = (next[from] as number) + 1;
+    next[to] = (next[to] as number) + 1;
+  }
+  return { begin, list };
+}
+
+/** Sorted by one coordinate, then the other. */
+function along(first: Float64Array, second: Float64Array): Int32Array {
+  return Int32Array.from(first, (_, i) => i).sort(
+    (i, k) => (first[i] as number) - (first[k] as number) || (second[i] as number) - (second[k] as number),
+  );
 }
 
 /** Factoring costs about the sum of squared row lengths. */
-function work(order: readonly number[], neighbours: Neighbours): number {
+function work(order: Int32Array, { begin, list }: Graph): number {
   const place = new Int32Array(order.length);
-  order.forEach((node, p) => {
-    place[node] = p;
-  });
-  return order.reduce((sum, node, p) => {
-    const first = (neighbours[node] ?? []).reduce((least, other) => Math.min(least, place[other] ?? p), p);
-    return sum + (p - first) ** 2;
-  }, 0);
+  for (let p = 0; p < order.length; p++) place[order[p] as number] = p;
+  let sum = 0;
+  for (let p = 0; p < order.length; p++) {
+    const node = order[p] as number;
+    let first = p;
+    for (let k = begin[node] as number; k < (begin[node + 1] as number); k++)
+      first = Math.min(first, place[list[k] as number] as number);
+    sum += (p - first) ** 2;
+  }
+  return sum;
 }
 
-function reverseCuthillMcKee(neighbours: Neighbours): number[] {
-  const degree = (i: number): number => (neighbours[i] ?? []).length;
-  const start = remoteNode(neighbours, degree);
-  return levelsFrom(start, neighbours, degree).order.reverse();
+function degree({ begin }: Graph, i: number): number {
+  return (begin[i + 1] as number) - (begin[i] as number);
+}
+
+function reverseCuthillMcKee(graph: Graph): Int32Array {
+  return levelsFrom(remoteNode(graph), graph).order.reverse();
 }
 
 /** A node far from others: start anywhere, go to the least connected of the last level, until it gets no farther. */
-function remoteNode(neighbours: Neighbours, degree: (i: number) => number): number {
+function remoteNode(graph: Graph): number {
   let node = 0;
-  let { order, depth, lastLevel } = levelsFrom(node, neighbours, degree);
+  let { order, depth, lastLevel } = levelsFrom(node, graph);
   for (;;) {
-    const candidate = order.slice(lastLevel).reduce((a, b) => (degree(b) < degree(a) ? b : a));
-    const next = levelsFrom(candidate, neighbours, degree);
+    const candidate = order
+      .subarray(lastLevel)
+      .reduce((a, b) => (degree(graph, b) < degree(graph, a) ? b : a));
+    const next = levelsFrom(candidate, graph);
     if (next.depth <= depth) return node;
     node = candidate;
     ({ order, depth, lastLevel } = next);
   }
 }
 
-/** Nodes level by level from a start, of each level the least connected first. */
+/** Nodes level by level from a start, the neighbours of each with the least connected first. */
 function levelsFrom(
   start: number,
-  neighbours: Neighbours,
-  degree: (i: number) => number,
-): { readonly order: number[]; readonly depth: number; readonly lastLevel: number } {
-  const order = [start];
-  const seen = new Uint8Array(neighbours.length);
+  graph: Graph,
+): { readonly order: Int32Array; readonly depth: number; readonly lastLevel: number } {
+  const { begin, list } = graph;
+  const order = new Int32Array(begin.length - 1);
+  const seen = new Uint8Array(order.length);
+  order[0] = start;
   seen[start] = 1;
-  let [depth, levelBegin, levelEnd, lastLevel] = [0, 0, 1, 0];
-  while (levelBegin < levelEnd) {
+  let [depth, levelBegin, count, lastLevel] = [0, 0, 1, 0];
+  while (levelBegin < count) {
     lastLevel = levelBegin;
+    const levelEnd = count;
     for (let i = levelBegin; i < levelEnd; i++) {
-      const fresh = (neighbours[order[i] ?? 0] ?? []).filter((k) => seen[k] === 0);
-      for (const k of fresh.sort((a, b) => degree(a) - degree(b)))
-        if (seen[k] === 0) {
-          seen[k] = 1;
-          order.push(k);
-        }
+      const node = order[i] as number;
+      const fresh = count;
+      for (let k = begin[node] as number; k < (begin[node + 1] as number); k++) {
+        const other = list[k] as number;
+        if (seen[other] === 1) continue;
+        seen[other] = 1;
+        let p = count++;
+        for (; p > fresh && degree(graph, order[p - 1] as number) > degree(graph, other); p--)
+          order[p] = order[p - 1] as number;
+        order[p] = other;
+      }
     }
-    [levelBegin, levelEnd] = [levelEnd, order.length];
+    levelBegin = levelEnd;
     depth += 1;
   }
   return { order, depth, lastLevel };

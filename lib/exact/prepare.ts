@@ -8,6 +8,7 @@ import {
   checkLoads,
   type Imposed,
   type Load,
+  type Release,
   releasesOf,
   type Skeleton,
   type Structure,
@@ -89,16 +90,19 @@ export function prepare(structure: Structure, ...cases: readonly (readonly (Load
 /** End patterns of all segments; those of ends released alike are one object. */
 function patternsOf(structure: Structure, { segments }: Skeleton): readonly EndPattern[] {
   const members = byName(structure.members);
-  const kept = new Map<string, EndPattern>();
+  const kept: EndPattern[] = [];
   return segments.map((segment, i) => {
     const member = members.get(segment.member);
     if (member === undefined) throw new Error(`segment of unknown member "${segment.member}"`);
     const { start, end } = releasesOf(member, segment, segments[i + 1]?.member !== segment.member);
-    const key = [start, end].map((r) => `${r.moment} ${r.shear === true} ${r.axial === true}`).join();
-    const pattern = kept.get(key) ?? endPattern(start, end);
-    kept.set(key, pattern);
-    return pattern;
+    const key = bits(start) + 8 * bits(end);
+    kept[key] ??= endPattern(start, end);
+    return kept[key];
   });
+}
+
+function bits({ moment, shear = false, axial = false }: Release): number {
+  return Number(moment) + 2 * Number(shear) + 4 * Number(axial);
 }
 
 function segmentArrays(

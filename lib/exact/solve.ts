@@ -49,7 +49,7 @@ export function solve(
 ): Solved {
   checkStiffness(prepared, stiffness);
   assemble(prepared, stiffness, room.factors);
-  factor(prepared, stiffness, room.factors);
+  factorize(prepared.envelope, room.factors, (row) => refuseIfFree(prepared, stiffness, room.factors, row));
   prepared.loadCases.forEach((loads, i) => {
     const solved = room.cases[i];
     if (solved === undefined) return;
@@ -86,15 +86,6 @@ export function assemble(
     const at = (envelope.shift[spring.place] as number) + spring.place;
     a[at] = (a[at] as number) + (stiffness.springs[k] as number);
   });
-}
-
-function factor(prepared: Prepared, stiffness: Stiffness, a: Float64Array): void {
-  const { envelope } = prepared;
-  let row = factorize(envelope, a);
-  while (row < envelope.n) {
-    refuseIfFree(prepared, stiffness, a, row);
-    row = factorize(envelope, a, row + 1);
-  }
 }
 
 /** Displacements before the first step: the ground's at held places, else zero. */

@@ -11,6 +11,7 @@
 import { domain, type MemberLoads, memberLoads } from "../results/index.ts";
 import { type Load, type Segment, type Skeleton, type Structure, skeleton } from "../structure/index.ts";
 import { resultantsOn } from "./resultants.ts";
+import { checkWithinReach } from "./within-reach.ts";
 
 export interface Equilibrium {
   readonly structure: Structure;
@@ -36,6 +37,7 @@ export type Unknown =
 
 /** The equations of a structure; hinges as they are. */
 export function equilibriumMatrix(structure: Structure): Equilibrium {
+  checkWithinReach(structure);
   const cut = skeleton(structure);
   const rows = rowsOf(structure, cut);
   const equations = rows.reduce((n, row) => n + (row.moment === undefined ? 2 : 3), 0);

@@ -20,7 +20,7 @@ describe("exact(any structure)", () => {
         expectJointsBalance(read, solution);
         expectWholeBalances(read, solution);
         expectCompatible(read, solution);
-        expect(solution.residual).toBeLessThan(1e-12);
+        expect(solution.residual).toBeLessThan(1e-11);
         expect(solution.condition).toBeGreaterThanOrEqual(1);
         solutions += 1;
       }),

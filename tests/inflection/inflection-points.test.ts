@@ -26,6 +26,15 @@ describe("inflectionRange", () => {
     expect(isolatedRange(forces(11, 3, 0.5), "right").most).toBeCloseTo(3, 12);
   });
 
+  it("where a couple makes the far end sag when fixed, the fixed far end gives the wider range", () => {
+    const s = { ...udl(10, 1), points: [{ x: 4, across: 0, couple: 60 }] };
+    const [free, fixed] = [inflectionRange(s, "left", 0).most, inflectionRange(s, "left", 1).most];
+    expect(fixed).toBeGreaterThan(free + 0.1);
+    expect(isolatedRange(s, "left").most).toBe(fixed);
+    const other = { ...udl(10, 1), points: [{ x: 6, across: 0, couple: -60 }] };
+    expect(isolatedRange(other, "right").most).toBeCloseTo(fixed, 9);
+  });
+
   it(`no fixities give a point outside the isolated range (seed ${seed})`, () => {
     const r = fc.double({ min: 0.01, max: 1, noNaN: true });
     const c = fc.integer({ min: 1, max: 9 }).map((n) => n / 10);
