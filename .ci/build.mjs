@@ -1,6 +1,6 @@
-// Sources -> dist/: one bundle each for the library, the command line and the checker's worker (shared parts in common
-// chunks, so that the library exists once per process), and one self-contained declaration file.
-import { existsSync, readFileSync, rmSync, writeFileSync } from "node:fs";
+// Sources -> dist/: one bundle each for the library and the command line (shared parts in common chunks, so that the
+// library exists once per process), and one self-contained declaration file.
+import { existsSync, mkdirSync, readFileSync, renameSync, rmSync, writeFileSync } from "node:fs";
 import { join } from "node:path";
 import { build } from "esbuild";
 import { rollup } from "rollup";
@@ -15,14 +15,16 @@ const external = Object.keys(dependencies)
   .filter((name) => !bundled.has(name))
   .flatMap((name) => [name, `${name}/*`]);
 
-const entries = { hingebook: "lib/index.ts", cli: "kernel/cli.ts", "check-worker": "kernel/check/worker.ts" };
-const present = Object.fromEntries(Object.entries(entries).filter(([, path]) => existsSync(join(top, path))));
+const entries = { hingebook: "lib/index.ts", cli: "kernel/cli.ts" };
 
-rmSync(join(top, "dist"), { recursive: true, force: true });
+// Built aside and put in place at the end, so that a build that fails leaves the last good one.
+const aside = join(top, `out/build-${process.pid}`);
+process.on("exit", () => rmSync(aside, { recursive: true, force: true }));
+mkdirSync(aside, { recursive: true });
 await build({
   absWorkingDir: top,
-  entryPoints: present,
-  outdir: "dist",
+  entryPoints: entries,
+  outdir: aside,
   bundle: true,
   splitting: true,
   chunkNames: "parts/[name]-[hash]",
@@ -53,4 +55,10 @@ const text = output[0].code;
 const foreign = /from ['"]([^.'"][^'"]*)['"]/.exec(text);
 if (foreign)
   throw new Error(`declaration file: ${foreign[1]} shows in a public signature; only our own types may`);
-writeFileSync(join(top, "dist/hingebook.d.ts"), text);
+writeFileSync(join(aside, "hingebook.d.ts"), text);
+
+const dist = join(top, "dist");
+const before = `${aside}-before`;
+if (existsSync(dist)) renameSync(dist, before);
+renameSync(aside, dist);
+rmSync(before, { recursive: true, force: true });

@@ -5,7 +5,7 @@ import { printValue, quantity } from "../quantity/index.ts";
 import type { Action, FreeBody, Point } from "../results/types.ts";
 import type { Load, Structure } from "../structure/types.ts";
 import { forceQuantity, forceText, type Named } from "./equation.ts";
-import { loadTexts } from "./load-words.ts";
+import { loadTexts, plainLoadName } from "./load-words.ts";
 import { and } from "./words.ts";
 
 /** A body with the forces found before `firstStep` in figures and the others by name. */
@@ -63,7 +63,7 @@ function resultantText(action: Action, named: Named, loads: readonly Load[]): st
 function resultant(action: Action, { loadNames }: Named): string {
   const name = "load" in action.source ? (loadNames[action.source.load] ?? "") : "";
   const dimension = action.turn === 0 ? "force" : "moment";
-  return `${name} = ${printValue(quantity(Math.abs(action.value ?? 0), dimension))}`;
+  return `${plainLoadName(name)} = ${printValue(quantity(Math.abs(action.value ?? 0), dimension))}`;
 }
 
 function description(

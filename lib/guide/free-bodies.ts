@@ -1,19 +1,12 @@
 // The verb `freeBodies`: the structure cut free at its hinges and solved by one equation after another.
 
-import { type Quantity, quantity } from "../quantity/index.ts";
+import type { Quantity } from "../quantity/index.ts";
 import type { Closure, Step } from "../results/types.ts";
-import { type Ledger, shownValue } from "../sheet/index.ts";
+import { type EquationTerm, type Ledger, shownValue } from "../sheet/index.ts";
 import { freeBodies } from "../statics/index.ts";
 import type { Load } from "../structure/types.ts";
 import { bodyFigure } from "./body-figure.ts";
-import {
-  closureLines,
-  equationText,
-  forceQuantity,
-  type Named,
-  stepLines,
-  sumDimension,
-} from "./equation.ts";
+import { closureLines, equationText, forceQuantity, type Named, stepLines } from "./equation.ts";
 import { handOf } from "./hand.ts";
 import { loadNames } from "./load-words.ts";
 import { jointSources, loadSources } from "./sources.ts";
@@ -85,7 +78,7 @@ function recordStep(book: SetBook, step: Step, index: number): void {
     body: `${bodyNames(book, step)}, ${equationText(step)}`,
     lines: stepLines(step, named),
     value: shownValue(value),
-    terms: step.terms.map(({ coefficient, value: term }) => ({ coefficient, value: term })),
+    terms: termsOf(book, step),
     coefficient: step.coefficient,
   });
   book.entries[index] = `${entry.id}@${entry.version}`;
@@ -102,29 +95,38 @@ function recordClosure(book: SetBook, closure: Closure): void {
     lines: closureLines(closure, named),
     inputs: {},
     closure: true,
-    passed: Math.abs(closure.sum) <= 1e-9 * Math.max(closure.scale, smallest(closure)),
+    terms: termsOf(book, closure),
+    passed: Math.abs(closure.sum) <= Math.max(1e-9 * closure.scale, negligible),
     description: `${set.name}: ${bodyNames(book, closure)}: the equation left over closes by itself`,
   });
 }
 
-/** A sum below a thousandth of a newton (or N·m) is nought whatever the terms. */
-function smallest(closure: Closure): number {
-  return quantity(1e6, sumDimension(closure.equation)).si;
+/** The terms to be added again, each that comes from an earlier step with that step's entry. */
+function termsOf({ entries }: SetBook, { terms }: Pick<Closure, "terms">): readonly EquationTerm[] {
+  return terms.map(({ coefficient, value, source }) => {
+    const from = "step" in source ? entries[source.step] : undefined;
+    return from === undefined ? { coefficient, value } : { coefficient, value, from };
+  });
 }
+
+/** A sum below a thousandth of a newton (or N·m) is nought whatever the terms. */
+const negligible = 1e-3;
 
 function bodyNames({ named }: SetBook, { bodies }: Pick<Step, "bodies">): string {
   return bodies.map((index) => named.solution.bodies[index]?.name ?? "").join(" with ");
 }
 
-/** What a step stands on: the loads, joints, hinges and earlier steps its equation used. */
+/** What a step stands on: the loads, joints, hinges and earlier steps its equation used; where nothing acts, the load
+ *  cases, because it is they that put nothing there. */
 function usesOf({ set, loads, entries }: SetBook, { uses }: Step): readonly string[] {
   const hinges = set.hinged.hinges.filter(({ name }) => uses.hinges.includes(name));
-  return unique([
+  const found = unique([
     ...uses.loads.flatMap((index) => loads[index]?.from ?? []),
     ...jointSources(set.hinged, uses.joints),
     ...hinges.flatMap(({ from }) => from),
     ...uses.steps.flatMap((index) => entries[index] ?? []),
   ]);
+  return found.length > 0 ? found : set.entries;
 }
 
 function termUses(book: SetBook, closure: Closure): readonly string[] {

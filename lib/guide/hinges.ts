@@ -56,7 +56,8 @@ export function recordHinges(
     }),
   });
   recordRanges(ledger, name, hinged, loads, hinged.hinges.slice(frame.hinges.length), judged);
-  const set = { name, frame, hinged, cases: Object.freeze([...cases]), determinacy: after };
+  const entries = Object.freeze(cases.map(({ entry }) => entry));
+  const set = { name, frame, hinged, cases: Object.freeze([...cases]), determinacy: after, entries };
   return recordVerdict(ledger, set, loads, before);
 }
 

@@ -16,7 +16,7 @@ export function recordLoadCase(ledger: Ledger, key: string, title: string, loads
     );
   if (loads.length === 0)
     throw new Error(`load case ${key} has no loads; give some, such as uniform("BC", "5.2 kN/m")`);
-  ledger.put({
+  const { id, version } = ledger.put({
     kind: "table",
     id: `load case ${key}`,
     uses: loadSources(loads),
@@ -28,7 +28,9 @@ export function recordLoadCase(ledger: Ledger, key: string, title: string, loads
     row(load).map((cell) => (typeof cell === "string" ? cell : cell.value.text)),
   );
   const text = [`load case ${key}: ${title}`, ...lines.map((line) => `  ${line.join(", ")}`)].join("\n");
-  return shownAs({ key, title, loads: Object.freeze([...loads]) }, () => ({ "text/plain": text }));
+  return shownAs({ entry: `${id}@${version}`, key, title, loads: Object.freeze([...loads]) }, () => ({
+    "text/plain": text,
+  }));
 }
 
 function row(load: Load): readonly TableCell[] {

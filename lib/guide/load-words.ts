@@ -10,19 +10,31 @@ export function loadSymbol(load: Load): string | undefined {
   return id !== undefined && /^[A-Za-z][A-Za-z0-9]*(_[A-Za-z0-9]+)*$/.test(id) ? id : undefined;
 }
 
-/** The symbols by which equations call the resultants of loads: Q_g, P; numbered where two would be alike. */
+/** The symbols by which equations call the resultants of loads: Q_g, P; with the member or joint where two would be
+ *  alike (Q_w_AB), and numbered where that does not tell them apart. */
 export function loadNames(loads: readonly Load[]): readonly string[] {
-  const plain = loads.map((load, i) => {
+  const bare = loads.map((load, i) => {
     const symbol = loadSymbol(load);
-    if (load.kind === "distributed") return `Q_${(symbol ?? String(i + 1)).replaceAll("_", "")}`;
+    if (load.kind === "distributed") return `Q_${symbol ?? i + 1}`;
     return symbol ?? `P_${i + 1}`;
   });
-  return plain.map((name, i) => {
-    const alike = plain.filter((other) => other === name).length;
-    const load = loads[i];
-    if (alike === 1 || load === undefined) return name;
-    return `${name}${name.includes("_") ? "" : "_"}${load.kind === "joint" ? load.joint : load.member}${i + 1}`;
-  });
+  const placed = bare.map((name, i) => (isAlone(bare, name) ? name : `${name}_${placeName(loads[i])}`));
+  return placed.map((name, i) => (isAlone(placed, name) ? name : `${name}_${i + 1}`));
+}
+
+function isAlone(names: readonly string[], name: string): boolean {
+  return names.indexOf(name) === names.lastIndexOf(name);
+}
+
+function placeName(load: Load | undefined): string {
+  const name = load?.kind === "joint" ? load.joint : (load?.member ?? "");
+  return name.replace(/[^A-Za-z0-9]/g, "");
+}
+
+/** A load's name as plain text with one subscript, as figures print it: Q_w,AB. */
+export function plainLoadName(name: string): string {
+  const [base = "", ...subscripts] = name.split("_");
+  return subscripts.length === 0 ? base : `${base}_${subscripts.join(",")}`;
 }
 
 /** Beside figures: "g = 4.60 kN/m". */

@@ -6,6 +6,8 @@ import type { Load, Structure } from "../structure/types.ts";
 
 /** A load case: loads that come and go together, under a short key such as "G". */
 export interface LoadCase {
+  /** The ledger entry it was recorded as, "id@version". */
+  readonly entry: string;
   readonly key: string;
   readonly title: string;
   readonly loads: readonly Load[];
@@ -30,6 +32,8 @@ export interface HingeSet {
   readonly hinged: Structure;
   readonly cases: readonly LoadCase[];
   readonly determinacy: Determinacy;
+  /** The ledger entries of its load cases. */
+  readonly entries: readonly string[];
 }
 
 /** Where along a member: an end joint by name, a length from the member's start, or a part of its length. */

@@ -1,6 +1,7 @@
 // Numbers as they stand on paper. Significant figures count after the decimal point only: 3 figures print 1234.5 as
 // "1235", not "1230", because a reader takes printed integer figures at their word. From five integer figures on they
-// are grouped by narrow spaces; the minus is the real one (−). Powers of ten appear below 0.0001 and from 10^10 on.
+// are grouped by narrow spaces; the minus is the real one (−). Powers of ten appear below 0.0001 and from 10^6 on,
+// there in steps of three as the trade writes them: 28.7×10⁶ N·mm.
 
 import type { Dimension } from "./dimension.ts";
 import { type DisplayUnits, shownIn, unitFor } from "./display-units.ts";
@@ -25,7 +26,7 @@ const raisedFigures = "⁰¹²³⁴⁵⁶⁷⁸⁹";
 export function printNumber(value: number, figures = 3): string {
   if (!Number.isFinite(value)) throw new Error(`${value} cannot be printed: it is not a finite number`);
   const size = Math.abs(value);
-  if (size !== 0 && (size < 1e-4 || size >= 1e10)) return withPower(value, figures);
+  if (size !== 0 && (size < 1e-4 || size >= 1e6)) return withPower(value, figures);
   return printFixed(value, decimals(size, figures));
 }
 
@@ -63,8 +64,10 @@ function scientific(value: number): readonly [mantissa: number, exponent: number
 function withPower(value: number, figures: number): string {
   const [mantissa, exponent] = scientific(value);
   const carried = roundedAt(Math.abs(mantissa), figures - 1) >= 10 ** figures;
-  const [shown, power] = carried ? [mantissa / 10, exponent + 1] : [mantissa, exponent];
-  return `${printFixed(shown, figures - 1)}×10${raise(String(power))}`;
+  const [first, power] = carried ? [mantissa / 10, exponent + 1] : [mantissa, exponent];
+  const beyond = power > 0 ? power % 3 : 0;
+  const shown = printFixed(first * 10 ** beyond, Math.max(0, figures - 1 - beyond));
+  return `${shown}×10${raise(String(power - beyond))}`;
 }
 
 function raise(digits: string): string {
