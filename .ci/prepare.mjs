@@ -77,6 +77,8 @@ function build() {
 const debian = [
   ["/usr/bin/chromium", "chromium"],
   ["/usr/bin/pdftotext", "poppler-utils"],
+  ["/usr/lib/python3/dist-packages/sympy", "python3-sympy"],
+  ["/usr/lib/python3/dist-packages/scipy", "python3-scipy"],
 ];
 
 function fromDebian() {

@@ -1,5 +1,6 @@
 // The public names, nothing else.
 
+export { ExactError, exact } from "./exact/index.ts";
 export {
   type DiagramOptions,
   type Hand,
@@ -40,15 +41,33 @@ export {
 } from "./statics/index.ts";
 export {
   atJoint,
+  type BeamOptions,
+  type BuildingFrameOptions,
   beam,
+  buildingFrame,
   coupleLoad,
+  type PanelGirderOptions,
+  type PortalOptions,
+  panelGirder,
   partial,
   pointLoad,
   portal,
   StructureError,
+  type StructureOptions,
+  selfWeight,
+  settlement,
   structure,
+  structureFromJson,
+  structureToJson,
+  type TrussOptions,
+  type TrussPortalOptions,
+  temperature,
+  truss,
+  trussPortal,
   uniform,
   varying,
   withHinges,
+  withNames,
+  withSections,
 } from "./structure/index.ts";
 export type * from "./structure/types.ts";

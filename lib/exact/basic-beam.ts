@@ -73,22 +73,24 @@ export function addForce(
   sums.r2F -= (across * x * (L * L - x * x)) / (6 * L) + (couple * (L * L - 3 * x * x)) / (6 * L);
 }
 
-const gauss: readonly (readonly [place: number, weight: number])[] = [
-  [0.5 - Math.sqrt(0.15), 5 / 18],
-  [0.5, 8 / 18],
-  [0.5 + Math.sqrt(0.15), 5 / 18],
-];
+/** Places and weights of three Gauss points on [0, 1]. */
+const places = [0.5 - Math.sqrt(0.15), 0.5, 0.5 + Math.sqrt(0.15)] as const;
+const weights = [5 / 18, 8 / 18, 5 / 18] as const;
 
 /** Adds a line load q(x) = q1 at a, linear to q2 at b, whose direction has the components along and across. */
 export function addLine(
   sums: LoadSums,
   L: number,
-  [a, b]: readonly [number, number],
-  [q1, q2]: readonly [number, number],
-  [along, across]: readonly [number, number],
+  a: number,
+  b: number,
+  q1: number,
+  q2: number,
+  along: number,
+  across: number,
 ): void {
-  for (const [place, weight] of gauss) {
-    const q = (q1 + (q2 - q1) * place) * weight * (b - a);
+  for (let k = 0; k < 3; k++) {
+    const place = places[k] ?? 0;
+    const q = (q1 + (q2 - q1) * place) * (weights[k] ?? 0) * (b - a);
     addForce(sums, L, a + (b - a) * place, q * along, q * across, 0);
   }
 }

@@ -65,7 +65,9 @@ function reduceRow({ first, shift }: Envelope, a: Float64Array, i: number, colum
 /** The same for the columns before row i of rows i, i + 1 and i + 2, which begin at one column. */
 function reduceThree({ first, shift }: Envelope, a: Float64Array, i: number): void {
   const fi = first[i] as number;
-  const [s0, s1, s2] = [shift[i] as number, shift[i + 1] as number, shift[i + 2] as number];
+  const s0 = shift[i] as number;
+  const s1 = shift[i + 1] as number;
+  const s2 = shift[i + 2] as number;
   for (let j = fi + 1; j < i; j++) {
     const sj = shift[j] as number;
     let g0 = a[s0 + j] as number;

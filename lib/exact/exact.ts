@@ -41,6 +41,8 @@ function jointDisplacements({ structure, numbering }: Prepared, { u }: SolvedCas
   });
 }
 
+const none = Object.freeze({});
+
 /** Forces of held places and springs on the structure, in global axes; a component nothing resists is absent. */
 function reactions(
   { structure, numbering, springs }: Prepared,
@@ -64,7 +66,7 @@ function reactions(
       ...(pushes(support, c, s) ? { x: x * c - y * s + 0 } : {}),
       ...(pushes(support, s, c) ? { y: x * s + y * c + 0 } : {}),
       ...(resists(support, "rotation") ? { moment: moment + 0 } : {}),
-      steps: {},
+      steps: none,
     });
   });
 }

@@ -27,16 +27,19 @@ import {
 } from "./basic-beam.ts";
 import type { Numbering } from "./numbering.ts";
 import type { Segments } from "./prepare.ts";
+import { takeSegmentForces } from "./segment-forces.ts";
 
 export interface LoadCase {
   /** Forces at the displacements. */
   readonly f: Float64Array;
+  /** f less what the segments take from their nodes while these stay. */
+  readonly unmoved: Float64Array;
   /** n, m1, m2 of each segment while its nodes stay: three per segment. */
   readonly fixed: Float64Array;
   /** EA-fold lengthening and EI-fold end rotations of each segment as a simple beam: three per segment. */
   readonly simple: Float64Array;
-  /** N and V at the start of each segment beside those of n, m1, m2: two per segment. */
-  readonly start: Float64Array;
+  /** N and V at the start and V at the end of each segment, beside those of n, m1, m2: three per segment. */
+  readonly beside: Float64Array;
   /** Free strain and curvature of each segment from temperature, two per segment; absent when there is none. */
   readonly thermal?: Float64Array;
   /** Displacements of the ground at held places and springs; absent when there are none. */
@@ -54,7 +57,7 @@ export function loadCase(
 ): LoadCase {
   const f = new Float64Array(numbers.total + 1);
   const bySegment = segmentsByMember(cut);
-  const sums = new Map<number, LoadSums>();
+  const sums: (LoadSums | undefined)[] = new Array(segments.count).fill(undefined);
   let thermal: Float64Array | undefined;
   let ground: Float64Array | undefined;
   for (const load of loads) {
@@ -70,22 +73,26 @@ export function loadCase(
   }
   const fixed = new Float64Array(3 * segments.count);
   const simple = new Float64Array(3 * segments.count);
-  const start = new Float64Array(2 * segments.count);
-  for (const [e, sum] of sums) {
-    const pattern = patterns[e];
+  const beside = new Float64Array(3 * segments.count);
+  for (let e = 0; e < segments.count; e++) {
+    const [sum, pattern] = [sums[e], patterns[e]];
+    if (sum === undefined || pattern === undefined) continue;
     const L = segments.length[e] ?? 1;
-    if (pattern === undefined) continue;
-    fixed.set(fixedForces(pattern, L, sum), 3 * e);
-    simple.set([sum.eF, sum.r1F, sum.r2F], 3 * e);
+    put(fixed, 3 * e, fixedForces(pattern, L, sum));
+    put(simple, 3 * e, [sum.eF, sum.r1F, sum.r2F]);
     const forces = nodeForces(L, sum);
-    start.set([forces[0], -forces[1]], 2 * e);
+    put(beside, 3 * e, [forces[0], -forces[1], forces[2]]);
     addNodeForces(f, segments, e, forces);
   }
+  const unmoved = f.slice();
+  takeSegmentForces(segments, fixed, unmoved);
+  unmoved[numbers.total] = 0;
   return {
     f,
+    unmoved,
     fixed,
     simple,
-    start,
+    beside,
     ...(thermal === undefined ? {} : { thermal }),
     ...(ground === undefined ? {} : { ground }),
   };
@@ -110,7 +117,7 @@ function addJointLoad(f: Float64Array, { node, places, axes }: Numbering, load: 
 }
 
 function addMemberLoad(
-  sums: Map<number, LoadSums>,
+  sums: (LoadSums | undefined)[],
   structure: Structure,
   { segments }: Skeleton,
   own: readonly number[],
@@ -120,8 +127,8 @@ function addMemberLoad(
   const at = (place: MemberPointLoad["at"]): number => snapToEnds(metresAlong(place, length), length);
   const parts = (x: number, y: number): readonly [number, number] => [x * c + y * s, y * c - x * s];
   const sumOf = (e: number): LoadSums => {
-    const found = sums.get(e) ?? noLoad();
-    sums.set(e, found);
+    const found = sums[e] ?? noLoad();
+    sums[e] = found;
     return found;
   };
   if (load.kind === "member point") {
@@ -136,14 +143,14 @@ function addMemberLoad(
   }
   const [begin, end] = [at(load.begin), at(load.end)];
   const q = (x: number): number => load.q1 + ((load.q2 - load.q1) * (x - begin)) / (end - begin);
-  const direction = parts(load.direction[0], load.direction[1]);
+  const [along, across] = parts(load.direction[0], load.direction[1]);
   for (const e of own) {
     const segment = segments[e];
     if (segment === undefined) continue;
     const [a, b] = [Math.max(begin, segment.begin), Math.min(end, segment.end)];
     if (b - a <= 1e-9 * length) continue;
-    const stretch = [a - segment.begin, b - segment.begin] as const;
-    addLine(sumOf(e), segment.length, stretch, [q(a), q(b)], direction);
+    const from = segment.begin;
+    addLine(sumOf(e), segment.length, a - from, b - from, q(a), q(b), along, across);
   }
 }
 
@@ -172,6 +179,13 @@ function addSettlement(ground: Float64Array, { node, places }: Numbering, load: 
   add(ground, places[3 * i], load.x);
   add(ground, places[3 * i + 1], load.y);
   add(ground, places[3 * i + 2], load.rotation);
+}
+
+/** Three values from a place on; several times faster than `set`. */
+function put(array: Float64Array, place: number, values: readonly [number, number, number]): void {
+  array[place] = values[0];
+  array[place + 1] = values[1];
+  array[place + 2] = values[2];
 }
 
 function add(array: Float64Array, place: number | undefined, value: number): void {

@@ -101,7 +101,7 @@ function ownLoads(
 function segmentState(
   prepared: Prepared,
   stiffness: Stiffness,
-  { simple, thermal, start: loaded }: LoadCase,
+  { simple, thermal, beside }: LoadCase,
   { u, q }: SolvedCase,
   e: number,
 ): SegmentState {
@@ -130,8 +130,8 @@ function segmentState(
     EI,
     epsilon,
     kappa,
-    N: n + at(loaded, 2 * e),
-    V: (m1 + m2) / L + at(loaded, 2 * e + 1),
+    N: n + at(beside, 3 * e),
+    V: (m1 + m2) / L + at(beside, 3 * e + 1),
     M: -m1 + 0,
     u: start.axial === true ? u2 - lengthening : u1,
     v: start.shear === true ? v2 - chord * L : v1,

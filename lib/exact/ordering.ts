@@ -8,8 +8,12 @@ import type { Skeleton } from "../structure/index.ts";
 /** Node indices in the order their displacements are numbered. */
 export function ordering({ nodes, segments }: Skeleton): Int32Array {
   const graph = graphOf(nodes.length, segments);
-  const x = Float64Array.from(nodes, (node) => node.x);
-  const y = Float64Array.from(nodes, (node) => node.y);
+  const x = new Float64Array(nodes.length);
+  const y = new Float64Array(nodes.length);
+  nodes.forEach((node, i) => {
+    x[i] = node.x;
+    y[i] = node.y;
+  });
   let best = along(y, x);
   let least = work(best, graph);
   for (const order of [along(x, y), reverseCuthillMcKee(graph)]) {
@@ -45,7 +49,9 @@ function graphOf(count: number, segments: readonly { readonly from: number; read
 
 /** Sorted by one coordinate, then the other. */
 function along(first: Float64Array, second: Float64Array): Int32Array {
-  return Int32Array.from(first, (_, i) => i).sort(
+  const order = new Int32Array(first.length);
+  for (let i = 0; i < order.length; i++) order[i] = i;
+  return order.sort(
     (i, k) => (first[i] as number) - (first[k] as number) || (second[i] as number) - (second[k] as number),
   );
 }

@@ -140,7 +140,8 @@ function segmentArrays(
 }
 
 function firstColumns({ count, places }: Segments, free: number): Int32Array {
-  const first = Int32Array.from({ length: free }, (_, i) => i);
+  const first = new Int32Array(free);
+  for (let i = 0; i < free; i++) first[i] = i;
   for (let e = 0; e < count; e++) {
     let least = free;
     for (let k = 6 * e; k < 6 * e + 6; k++) least = Math.min(least, places[k] ?? free);

@@ -53,8 +53,9 @@ export function solve(
   prepared.loadCases.forEach((loads, i) => {
     const solved = room.cases[i];
     if (solved === undefined) return;
-    start(prepared, loads, solved.u);
-    for (let step = 0; step <= refinements; step++) {
+    start(prepared, stiffness, loads, solved);
+    correct(prepared, room.factors, solved);
+    for (let step = 0; step < refinements; step++) {
       balance(prepared, stiffness, loads, solved);
       correct(prepared, room.factors, solved);
     }
@@ -88,11 +89,14 @@ export function assemble(
   });
 }
 
-/** Displacements before the first step: the ground's at held places, else zero. */
-function start({ numbering }: Prepared, { ground }: LoadCase, u: Float64Array): void {
-  u.fill(0);
-  if (ground === undefined) return;
-  for (let i = numbering.free; i < numbering.total; i++) u[i] = ground[i] as number;
+/** Displacements before the first step, the ground's at held places, else zero; and what is left over then. */
+function start(prepared: Prepared, stiffness: Stiffness, loads: LoadCase, solved: SolvedCase): void {
+  const { free, total } = prepared.numbering;
+  const { ground, thermal, unmoved } = loads;
+  solved.u.fill(0);
+  if (ground !== undefined) for (let i = free; i < total; i++) solved.u[i] = ground[i] as number;
+  if (ground !== undefined || thermal !== undefined) balance(prepared, stiffness, loads, solved);
+  else solved.r.set(unmoved);
 }
 
 /** Forces q from displacements u, and what is left over at each displacement: r = f - internal forces. */

@@ -13,15 +13,16 @@ export interface Stiffness {
 
 /** The stiffness a structure's sections and supports give. Throws on a member without section. */
 export function stiffnessOf({ structure, springs }: Prepared): Stiffness {
-  const sections = structure.members.map(({ name, section }) => {
+  const { members } = structure;
+  const EA = new Float64Array(members.length);
+  const EI = new Float64Array(members.length);
+  members.forEach(({ name, section }, i) => {
     if (section === undefined) throw new ExactError({ kind: "no section", member: name });
-    return section;
+    EA[i] = section.E * section.A;
+    EI[i] = section.E * section.I;
   });
-  return {
-    EA: Float64Array.from(sections, (s) => s.E * s.A),
-    EI: Float64Array.from(sections, (s) => s.E * s.I),
-    springs: Float64Array.from(springs, ({ joint, axis }) => springOf(structure, joint, axis)),
-  };
+  const stiff = springs.map(({ joint, axis }) => springOf(structure, joint, axis));
+  return { EA, EI, springs: Float64Array.from(stiff) };
 }
 
 function springOf(structure: Structure, joint: string, axis: "x" | "y" | "rotation"): number {

@@ -21,6 +21,7 @@ export type {
   Action,
   Closure,
   Determinacy,
+  Direction,
   ElasticMember,
   ElasticSolution,
   ForceName,
@@ -34,6 +35,7 @@ export type {
   Piecewise,
   Point,
   Reaction,
+  SelfStress,
   Step,
   Term,
 } from "./types.ts";

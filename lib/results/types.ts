@@ -76,6 +76,15 @@ export interface Point {
   readonly name: string;
   readonly x: number;
   readonly y: number;
+  /** The two forces whose lines of action meet here, where the point is no joint and no hinge. */
+  readonly meets?: readonly [string, string];
+}
+
+/** An inclined direction forces are summed along: "along BC", "across BC". */
+export interface Direction {
+  readonly name: string;
+  readonly x: number;
+  readonly y: number;
 }
 
 /** One named unknown of the free bodies: a reaction, a force through a hinge, or an internal force at a cut. */
@@ -124,9 +133,13 @@ export interface Step {
   readonly id: string;
   /** Index into `FreeBodySolution.bodies`; several when bodies were joined. */
   readonly bodies: readonly number[];
-  readonly equation: "sum Fx" | "sum Fy" | "sum M";
+  readonly equation: "sum Fx" | "sum Fy" | "sum M" | "sum F";
   /** The point moments are taken about. */
   readonly about?: Point;
+  /** The direction of "sum F". */
+  readonly along?: Direction;
+  /** Where bodies were joined: index into `bodies` of what they are together. */
+  readonly joined?: number;
   readonly terms: readonly Term[];
   readonly unknown: string;
   readonly coefficient: number;
@@ -135,12 +148,15 @@ export interface Step {
   readonly together: readonly number[];
   /** True when nothing with a value enters the equation, so that the unknown is zero: such steps may be shown together. */
   readonly idle?: boolean;
-  /** What the equation stands on: indices of loads, names of joints whose position enters, indices of earlier steps. */
+  /** What the equation stands on: indices of loads, coordinates of joints and places of hinges that enter its coefficients
+   *  and resultants, indices of earlier steps; supports whose angle enters. `joints` are those of `coordinates`. */
   readonly uses: {
     readonly loads: readonly number[];
     readonly joints: readonly string[];
+    readonly coordinates?: readonly { readonly joint: string; readonly axis: "x" | "y" }[];
     readonly steps: readonly number[];
     readonly hinges: readonly string[];
+    readonly supports?: readonly string[];
   };
 }
 
@@ -151,7 +167,10 @@ export interface Closure {
   readonly bodies: readonly number[];
   readonly equation: Step["equation"];
   readonly about?: Point;
+  readonly along?: Direction;
   readonly terms: readonly Term[];
+  /** As a step's; absent for closures of other methods. */
+  readonly uses?: Step["uses"];
   /** Sum of terms, N or N·m; near zero where the load is balanced. */
   readonly sum: number;
   /** Largest |term|, the scale the sum is judged by. */
@@ -182,6 +201,17 @@ export interface Mechanism {
   readonly words: string;
 }
 
+/** Forces that balance with no load: the redundant part of an indeterminate structure. Scaled so that the largest force, or
+ *  moment over the structure's size, is 1. Members and supports at rest are left out. */
+export interface SelfStress {
+  readonly members: readonly MemberForces[];
+  readonly reactions: readonly Reaction[];
+  /** "line": axial force along one straight line, such as a beam pinned at both ends; "bars": axial forces that run through
+   *  several lines, as in a braced panel; "bending": with moments. */
+  readonly kind: "line" | "bars" | "bending";
+  readonly words: string;
+}
+
 /** Determinacy by the trade's count and by the rank of the equilibrium matrix (Pellegrino & Calladine 1986). */
 export interface Determinacy {
   readonly count: {
@@ -197,7 +227,11 @@ export interface Determinacy {
   readonly equations: number;
   /** Independent states of self-stress: the degree of static indeterminacy by rank. */
   readonly selfStress: number;
+  /** A basis of them, those without moments first. */
+  readonly selfStresses: readonly SelfStress[];
   readonly mechanisms: readonly Mechanism[];
+  /** What the count does not see: so many redundant restraints stand against as many free motions in it. */
+  readonly hidden: number;
   readonly verdict: "indeterminate" | "determinate" | "mechanism" | "mechanism with self-stress";
   /** One sentence in the trade's words. */
   readonly words: string;

@@ -4,7 +4,7 @@ import { StructureError } from "./faults.ts";
 import { deepFreeze } from "./freeze.ts";
 import { axisOf, jointNamed } from "./geometry.ts";
 import { checkSection } from "./section.ts";
-import { heldCount } from "./support.ts";
+import { checkSpring, heldCount } from "./support.ts";
 import type { Member, Structure, Support } from "./types.ts";
 
 /** The same structure frozen. Throws on an unknown or repeated joint or member, a member without length,
@@ -85,13 +85,7 @@ function checkNumbers({ joint, angle = 0, springs = {}, holds }: Support): void 
     if (stiffness === undefined) continue;
     const what = `${axis} spring of the support at ${joint}`;
     checkFinite(stiffness, what);
-    if (stiffness < 0)
-      throw new StructureError({
-        kind: "not positive",
-        what,
-        value: stiffness,
-        unit: axis === "rotation" ? "N·m/rad" : "N/m",
-      });
+    checkSpring(stiffness, axis, what);
     if (holds[axis]) throw new StructureError({ kind: "held spring", joint, axis });
   }
 }

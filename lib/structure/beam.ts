@@ -38,12 +38,8 @@ export function beam({ spans, supports, names, sections = {} }: BeamOptions): St
     });
   const joints = called.map((name, i): Joint => {
     const before = lengths.slice(0, i);
-    return {
-      name,
-      x: before.reduce((x, l) => x + l.si, 0),
-      y: 0,
-      from: mergeSources(...before.map((l) => l.from)),
-    };
+    const from = mergeSources(...before.map((l) => l.from));
+    return { name, x: before.reduce((x, l) => x + l.si, 0), y: 0, fromX: from, fromY: [], from };
   });
   const members = lengths.map((length, i) =>
     plainMember(called[i] ?? "", called[i + 1] ?? "", { group: "beams", from: length.from }),

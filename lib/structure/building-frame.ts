@@ -127,7 +127,8 @@ function jointsOf({ lines, levels, heightOf }: Grid): readonly Joint[] {
     lines.flatMap((line, i): Joint[] => {
       if (k > (heightOf[i] ?? 0)) return [];
       const from = mergeSources(line.at.from, level.at.from);
-      return [{ name: line.name + level.name, x: line.at.si, y: level.at.si, from }];
+      const [fromX, fromY] = [line.at.from, level.at.from];
+      return [{ name: line.name + level.name, x: line.at.si, y: level.at.si, fromX, fromY, from }];
     }),
   );
 }

@@ -39,45 +39,26 @@ function checkJointLoad(structure: Structure, load: JointLoad, what: string): vo
 }
 
 function checkPointLoad(structure: Structure, load: MemberPointLoad, what: string): void {
-  const at = placeInside(structure, load.member, metresOf(structure, load, load.at, what), what);
-  const hinge = structure.hinges.find(
-    (h) => h.member === load.member && Math.abs(h.at - at.x) <= 1e-9 * at.length,
-  );
+  const { length } = axisOf(structure, memberNamed(structure, load.member, what));
+  const x = placeInside(load.member, length, load.at, what);
+  const hinge = structure.hinges.find((h) => h.member === load.member && Math.abs(h.at - x) <= 1e-9 * length);
   if (load.couple !== 0 && hinge !== undefined)
     throw new StructureError({ kind: "couple at hinge", what, hinge: hinge.name });
 }
 
 function checkLineLoad(structure: Structure, load: DistributedLoad, what: string): void {
-  const begin = placeInside(structure, load.member, metresOf(structure, load, load.begin, what), what);
-  const end = placeInside(structure, load.member, metresOf(structure, load, load.end, what), what);
-  if (!(end.x > begin.x))
-    throw new StructureError({
-      kind: "empty stretch",
-      what,
-      member: load.member,
-      begin: begin.x,
-      end: end.x,
-    });
+  const { length } = axisOf(structure, memberNamed(structure, load.member, what));
+  const begin = placeInside(load.member, length, load.begin, what);
+  const end = placeInside(load.member, length, load.end, what);
+  if (!(end > begin))
+    throw new StructureError({ kind: "empty stretch", what, member: load.member, begin, end });
 }
 
-function metresOf(
-  structure: Structure,
-  load: { readonly member: string },
-  place: MemberPointLoad["at"],
-  what: string,
-): number {
-  return metresAlong(place, axisOf(structure, memberNamed(structure, load.member, what)).length);
-}
-
-function placeInside(
-  structure: Structure,
-  member: string,
-  metres: number,
-  what: string,
-): { readonly x: number; readonly length: number } {
-  const { length } = axisOf(structure, memberNamed(structure, member, what));
-  const x = snapToEnds(metres, length);
+/** Metres along the member, which must lie on it. */
+function placeInside(member: string, length: number, place: MemberPointLoad["at"], what: string): number {
+  const at = metresAlong(place, length);
+  const x = snapToEnds(at, length);
   if (!(x >= 0 && x <= length))
-    throw new StructureError({ kind: "outside", what, member, at: metres, length, open: false });
-  return { x, length };
+    throw new StructureError({ kind: "outside", what, member, at, length, open: false });
+  return x;
 }

@@ -55,7 +55,7 @@ export function axisOf(structure: Pick<Structure, "joints">, member: Member): Ax
   const start = jointNamed(structure, member.start, `member "${member.name}" starts at joint`);
   const end = jointNamed(structure, member.end, `member "${member.name}" ends at joint`);
   const [dx, dy] = [end.x - start.x, end.y - start.y];
-  const length = Math.hypot(dx, dy);
+  const length = Math.sqrt(dx * dx + dy * dy); // several times faster than hypot, and asked for often
   return { start, end, length, c: dx / length, s: dy / length };
 }
 

@@ -51,8 +51,18 @@ function hingeOf(structure: Structure, { member, from, at, sources = [] }: Hinge
     const other = from === found.start ? found.end : found.start;
     throw new StructureError({ kind: "hinge at end", what, member, joint: distance === 0 ? from : other });
   }
-  const x = from === found.start ? distance : length - distance;
-  return { name, member, at: x, from: mergeSources(read.from, sources) };
+  const fromStart = from === found.start;
+  return {
+    name,
+    member,
+    at: fromStart ? distance : length - distance,
+    ...("fraction" in read.place
+      ? { part: fromStart ? read.place.fraction : 1 - read.place.fraction }
+      : fromStart
+        ? {}
+        : { fromEnd: true as const }),
+    from: mergeSources(read.from, sources),
+  };
 }
 
 function nextName(structure: Structure, hinges: readonly Hinge[]): string {

@@ -90,7 +90,7 @@ function supportOf({ holds, kind, from = [], ...rest }: Written["supports"][numb
 function hinged(structure: Structure, hinges: NonNullable<Written["hinges"]>): Structure {
   if (hinges.length === 0) return structure;
   const members = byName(structure.members);
-  return withHinges(
+  const placed = withHinges(
     structure,
     hinges.map(({ name, member, at, from = [] }) => ({
       name,
@@ -100,4 +100,13 @@ function hinged(structure: Structure, hinges: NonNullable<Written["hinges"]>): S
       sources: from,
     })),
   );
+  const all = placed.hinges.map((hinge, i): Hinge => {
+    const { part, fromEnd } = hinges[i] ?? {};
+    return {
+      ...hinge,
+      ...(part === undefined ? {} : { part }),
+      ...(fromEnd === true ? { fromEnd } : {}),
+    };
+  });
+  return deepFreeze({ ...placed, hinges: all });
 }

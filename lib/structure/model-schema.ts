@@ -82,7 +82,10 @@ export const modelSchema: Schema = {
     {
       format: { const: "hingebook model" },
       version: { const: 1 },
-      joints: list(record({ name: text, x: number, y: number }, { from: sources }), 1),
+      joints: list(
+        record({ name: text, x: number, y: number }, { fromX: sources, fromY: sources, from: sources }),
+        1,
+      ),
       members: list(
         record(
           { name: text, start: text, end: text },
@@ -106,7 +109,12 @@ export const modelSchema: Schema = {
     {
       family: { enum: ["beam", "portal", "general"] },
       form: { enum: ["building frame", "truss", "panel girder", "truss portal"] },
-      hinges: list(record({ name: text, member: text, at: number }, { from: sources })),
+      hinges: list(
+        record(
+          { name: text, member: text, at: number },
+          { part: number, fromEnd: { type: "boolean" }, from: sources },
+        ),
+      ),
       loads: list({ anyOf: loads }),
     },
   ),

@@ -66,17 +66,17 @@ function jointsOf(options: PortalOptions): readonly Joint[] {
   const [a = "", b = "", ...rest] = called;
   const [d = "", c = ""] = [...rest].reverse();
   const knee = step.si + right.si;
-  const joints: Joint[] = [
-    { name: a, x: 0, y: 0, from: [] },
-    { name: b, x: 0, y: left.si, from: left.from },
-  ];
+  const joints: Joint[] = [jointAt(a, [0, []], [0, []]), jointAt(b, [0, []], [left.si, left.from])];
   if (ridge !== undefined) {
     const between = left.si + ((knee - left.si) * ridge.at) / L.si;
-    const from = mergeSources(L.from, left.from, right.from, step.from, ridge.from);
-    joints.push({ name: rest[0] ?? "", x: ridge.at, y: between + ridge.rise, from });
+    // with knees at one level the ridge's height does not depend on where it stands
+    const level = left === right && options.rightBase === undefined;
+    const along = level ? [] : [...L.from, ...ridge.fromX];
+    const fromY = mergeSources(left.from, right.from, step.from, along, ridge.fromY);
+    joints.push(jointAt(rest[0] ?? "", [ridge.at, ridge.fromX], [between + ridge.rise, fromY]));
   }
-  joints.push({ name: c, x: L.si, y: knee, from: mergeSources(L.from, right.from, step.from) });
-  joints.push({ name: d, x: L.si, y: step.si, from: mergeSources(L.from, step.from) });
+  joints.push(jointAt(c, [L.si, L.from], [knee, mergeSources(right.from, step.from)]));
+  joints.push(jointAt(d, [L.si, L.from], [step.si, step.from]));
   return joints;
 }
 
@@ -92,10 +92,20 @@ function heightsOf(height: PortalOptions["height"]): readonly [Length, Length] {
   return [both, both];
 }
 
-function ridgeOf(
-  { rise, ridgeAt }: PortalOptions,
-  L: Length,
-): { readonly at: number; readonly rise: number; readonly from: readonly string[] } | undefined {
+interface Ridge {
+  readonly at: number;
+  readonly rise: number;
+  readonly fromX: readonly string[];
+  readonly fromY: readonly string[];
+}
+
+type Coordinate = readonly [metres: number, from: readonly string[]];
+
+function jointAt(name: string, [x, fromX]: Coordinate, [y, fromY]: Coordinate): Joint {
+  return { name, x, y, fromX, fromY, from: mergeSources(fromX, fromY) };
+}
+
+function ridgeOf({ rise, ridgeAt }: PortalOptions, L: Length): Ridge | undefined {
   if (rise === undefined) return undefined;
   const height = readMeasure(rise, "length", "rise");
   const at = ridgeAt === undefined ? undefined : readMeasure(ridgeAt, "length", "place of the ridge");
@@ -109,7 +119,7 @@ function ridgeOf(
       length: L.si,
       open: true,
     });
-  return { at: x, rise: height.si, from: mergeSources(height.from, at?.from ?? []) };
+  return { at: x, rise: height.si, fromX: at?.from ?? L.from, fromY: height.from };
 }
 
 function columnSources(start: Joint | undefined, end: Joint | undefined): readonly string[] {

@@ -32,12 +32,14 @@ export function withSections(structure: Structure, sections: Sections): Structur
   const members = structure.members.map((member): Member => {
     const found = read.get(member.name) ?? read.get(member.group ?? "") ?? read.get("all");
     if (found === undefined) return member;
-    const { length } = axisOf(structure, member);
-    const A = found.stiff ? (stiffness * found.section.I) / length ** 2 : found.section.A;
-    const section = Object.freeze({ ...found.section, A });
+    const section = found.stiff ? stiffened(found.section, axisOf(structure, member).length) : found.section;
     return Object.freeze({ ...member, section, from: mergeSources(member.from, found.from) });
   });
   return Object.freeze({ ...structure, members: Object.freeze(members) });
+}
+
+function stiffened(section: Section, length: number): Section {
+  return Object.freeze({ ...section, A: (stiffness * section.I) / length ** 2 });
 }
 
 /** Throws unless A, I and E, and depth and alpha where given, are finite and A, I, E, depth more than zero. */
@@ -93,13 +95,13 @@ function readSection(
       : readMeasure(choice.alpha, "per temperature", `alpha of ${name}`);
   const depth =
     choice?.depth === undefined ? undefined : readMeasure(choice.depth, "length", `depth of ${name}`);
-  const section: Section = {
+  const section: Section = Object.freeze({
     A,
     I,
     E,
     ...(alpha === undefined ? {} : { alpha: alpha.si }),
     ...(depth === undefined ? {} : { depth: depth.si }),
-  };
+  });
   checkSection(section, name);
   return { section, stiff, from: mergeSources(...from, alpha?.from ?? [], depth?.from ?? []) };
 }

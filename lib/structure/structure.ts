@@ -54,7 +54,7 @@ export function structure({ joints, members, supports, sections }: StructureOpti
 function jointAt(name: string, [x, y]: readonly [Measure<"length">, Measure<"length">]): Joint {
   const X = readMeasure(x, "length", `x of joint ${name}`);
   const Y = readMeasure(y, "length", `y of joint ${name}`);
-  return { name, x: X.si, y: Y.si, from: mergeSources(X.from, Y.from) };
+  return { name, x: X.si, y: Y.si, fromX: X.from, fromY: Y.from, from: mergeSources(X.from, Y.from) };
 }
 
 function memberOf(name: string, choice: MemberChoice): Member {

@@ -48,7 +48,10 @@ function supportOf(joint: string, parts: SupportParts, from: Sources): Support {
     const part = parts[axis];
     if (part === undefined || typeof part === "boolean") return [];
     const dimension = axis === "rotation" ? "moment per angle" : "force per length";
-    return [readMeasure(part, dimension, `${axis} spring of the support at ${joint}`)];
+    const what = `${axis} spring of the support at ${joint}`;
+    const stiffness = readMeasure(part, dimension, what);
+    checkSpring(stiffness.si, axis, what);
+    return [stiffness];
   };
   const springs = { x: read("x"), y: read("y"), rotation: read("rotation") };
   const angle =
@@ -64,6 +67,12 @@ function supportOf(joint: string, parts: SupportParts, from: Sources): Support {
     ...(angle === undefined || angle.si === 0 ? {} : { angle: angle.si }),
     from: mergeSources(from, ...all.map((s) => s.from), angle?.from ?? []),
   };
+}
+
+/** Throws on a stiffness below zero. */
+export function checkSpring(value: number, axis: "x" | "y" | "rotation", what: string): void {
+  const unit = axis === "rotation" ? "N·m/rad" : "N/m";
+  if (value < 0) throw new StructureError({ kind: "not positive", what, value, unit });
 }
 
 function springValues(

@@ -23,9 +23,10 @@ export function trussPortal(options: TrussPortalOptions): Structure {
   const count = options.panels.length;
   const joints = chordJoints(options, h);
   const right = joints[count]?.x ?? 0;
+  const fromX = joints[count]?.fromX ?? [];
   const feet: Joint[] = [
-    { name: "A", x: 0, y: 0, from: [] },
-    { name: "B", x: right, y: 0, from: joints[count]?.from ?? [] },
+    { name: "A", x: 0, y: 0, fromX: [], fromY: [], from: [] },
+    { name: "B", x: right, y: 0, fromX, fromY: [], from: fromX },
   ];
   const columns = [
     ["A", "L0"],

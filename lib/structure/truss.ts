@@ -64,11 +64,14 @@ export function chordJoints(
     Array.from({ length: panels.length + 1 }, (_, i): Joint => {
       const before = lengths.slice(0, i);
       const y = letter === "L" ? base : upper;
+      const fromX = mergeSources(...before.map((l) => l.from));
       return {
         name: `${letter}${i}`,
         x: before.reduce((x, l) => x + l.si, 0),
         y: y.si,
-        from: mergeSources(...before.map((l) => l.from), y.from),
+        fromX,
+        fromY: y.from,
+        from: mergeSources(fromX, y.from),
       };
     }),
   );

@@ -8,19 +8,25 @@
 /** Ledger entries a value came from, each "entry@version"; carried along unread by the mechanics. */
 export type Sources = readonly string[];
 
-/** A point where members meet or are supported. Coordinates in m. */
+/** A point where members meet or are supported. Coordinates in m. `fromX` and `fromY` say what each coordinate came
+ *  from, where that is known; `from` holds both. */
 export interface Joint {
   readonly name: string;
   readonly x: number;
   readonly y: number;
+  readonly fromX?: Sources;
+  readonly fromY?: Sources;
   readonly from: Sources;
 }
 
-/** A moment hinge inside a member, `at` metres from the member's start. */
+/** A moment hinge inside a member, `at` metres from the member's start. How it was placed, where that was otherwise:
+ *  `part` of the member's length from its start, or metres `fromEnd` of the member. */
 export interface Hinge {
   readonly name: string;
   readonly member: string;
   readonly at: number;
+  readonly part?: number;
+  readonly fromEnd?: true;
   readonly from: Sources;
 }
 

@@ -26,3 +26,32 @@ export function benchFrame(
   ];
   return { structure, loads };
 }
+
+/** What the Python side assembles from: coordinates, members with EA and EI, fixed joints, loads. */
+export interface PlainFrame {
+  readonly joints: readonly (readonly [number, number])[];
+  readonly members: readonly (readonly [start: number, end: number, EA: number, EI: number])[];
+  readonly names: readonly string[];
+  readonly fixed: readonly number[];
+  readonly uniform: readonly (readonly [member: string, q: number])[];
+  readonly forces: readonly (readonly [joint: number, fx: number, fy: number])[];
+}
+
+/** A frame of `benchFrame` in plain numbers. */
+export function plainFrame(structure: Structure, loads: readonly Load[]): PlainFrame {
+  const index = new Map(structure.joints.map((j, i) => [j.name, i]));
+  const at = (joint: string): number => index.get(joint) ?? -1;
+  return {
+    joints: structure.joints.map((j) => [j.x, j.y]),
+    members: structure.members.map(({ start, end, section = { E: 0, A: 0, I: 0 } }) => [
+      at(start),
+      at(end),
+      section.E * section.A,
+      section.E * section.I,
+    ]),
+    names: structure.members.map((m) => m.name),
+    fixed: structure.supports.map((s) => at(s.joint)),
+    uniform: loads.flatMap((l) => (l.kind === "distributed" ? [[l.member, l.q1] as const] : [])),
+    forces: loads.flatMap((l) => (l.kind === "joint" ? [[at(l.joint), l.fx, l.fy] as const] : [])),
+  };
+}

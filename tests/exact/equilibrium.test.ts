@@ -20,11 +20,11 @@ describe("exact(any structure)", () => {
         expectJointsBalance(read, solution);
         expectWholeBalances(read, solution);
         expectCompatible(read, solution);
-        expect(solution.residual).toBeLessThan(1e-11);
+        expect(solution.residual).toBeLessThan(1e-9);
         expect(solution.condition).toBeGreaterThanOrEqual(1);
         solutions += 1;
       }),
-      { seed, numRuns: 1200 },
+      { seed, numRuns: 1300 },
     );
   });
 
@@ -58,12 +58,8 @@ describe("exact(any structure)", () => {
   });
 });
 
-/** The other room's verdict, where it knows the supports and releases there are. */
+/** The verdict of the other room, which knows no stiffness. */
 function expectMechanism(structure: Structure, is: boolean): void {
-  const plainSupports = structure.supports.every((s) => s.springs === undefined && s.angle === undefined);
-  const plainEnds = structure.members.every((m) =>
-    [m.releases.start, m.releases.end].every((r) => r.shear !== true && r.axial !== true),
-  );
-  if (plainSupports && plainEnds)
-    expect(determinacy(structure).verdict.startsWith("mechanism"), determinacy(structure).words).toBe(is);
+  const { verdict, words } = determinacy(structure);
+  expect(verdict.startsWith("mechanism"), words).toBe(is);
 }

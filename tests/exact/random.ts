@@ -350,3 +350,10 @@ export function loadsOn(data: Plain, imposed = true): fc.Arbitrary<Plainload[]> 
 /** A model of any kind. */
 export const anyModel = (from: fc.Arbitrary<Plain> = anyStructure, imposed = true): fc.Arbitrary<Plain> =>
   from.chain((data) => loadsOn(data, imposed).map((loads) => ({ ...data, loads })));
+
+/** Frames, girders and trees whose members are all rigidly connected and whose supports hold along global axes. */
+export const rigidFrame: fc.Arbitrary<Plain> = anyStructure.filter(
+  (data) =>
+    data.members.every((m) => !m.releases.start.moment && !m.releases.end.moment) &&
+    data.supports.every((s) => s.springs === undefined && s.angle === undefined),
+);
