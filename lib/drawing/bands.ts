@@ -4,9 +4,18 @@ import { type DistributedLoad, type Load, metresAlong } from "../structure/index
 import { arrow } from "./arrows.ts";
 import { along, distance, dot, minus, type Pt, plus, times, unit } from "./geometry.ts";
 import type { MemberLine } from "./members.ts";
-import { PENS, polyline, type Scene, type Shape, scene } from "./scene.ts";
+import { type Label, PENS, polyline, type Scene, type Shape, scene } from "./scene.ts";
 
 const DEEPEST = 30;
+const TEXT_ROOM = 24;
+
+/** How deep distributed loads are drawn. */
+export interface Depth {
+  /** Largest ordinate, N/m, the one drawn deepest. */
+  readonly greatest: number;
+  /** Its depth on the page. */
+  readonly deep: number;
+}
 
 /** The stretch of a distributed load, metres from the member's start, with its ordinates there. */
 export interface Stretch {
@@ -33,9 +42,16 @@ export function stretchOn(
   return { load, begin, end, q1: q(begin), q2: q(end) };
 }
 
-/** Largest ordinate among distributed loads, N/m, the one drawn deepest. */
-export const deepest = (loads: readonly Load[]): number =>
-  Math.max(0, ...loads.map((l) => (l.kind === "distributed" ? Math.max(Math.abs(l.q1), Math.abs(l.q2)) : 0)));
+/** Depth of the loads of one figure; `storey` is the height there is for them with their texts. */
+export function depthOf(loads: readonly Load[], storey: number = Number.POSITIVE_INFINITY): Depth {
+  const ordinates = loads.map((l) =>
+    l.kind === "distributed" ? Math.max(Math.abs(l.q1), Math.abs(l.q2)) : 0,
+  );
+  return { greatest: Math.max(0, ...ordinates), deep: Math.min(DEEPEST, Math.max(9, storey * 0.24)) };
+}
+
+const depthAt = (q: number, { greatest, deep }: Depth): number =>
+  greatest > 0 ? (deep * Math.abs(q)) / greatest : 0;
 
 interface Band {
   readonly shapes: readonly Shape[];
@@ -63,11 +79,11 @@ function axialBand(on: MemberLine, s: Stretch, offset: number): Band {
 }
 
 /** Arrows under a line, of a load across its member. */
-function crossBand(on: MemberLine, s: Stretch, offset: number, greatest: number): Band {
+function crossBand(on: MemberLine, s: Stretch, offset: number, scaled: Depth): Band {
   const direction: Pt = [s.load.direction[0], -s.load.direction[1]];
   const mean = s.q1 + s.q2 >= 0 ? 1 : -1;
   const out = times(direction, -mean);
-  const depth = (q: number): number => (greatest > 0 ? (DEEPEST * Math.abs(q)) / greatest : 0);
+  const depth = (q: number): number => depthAt(q, scaled);
   const count = Math.max(2, Math.round(distance(on.page(s.begin), on.page(s.end)) / 20));
   const shapes: Shape[] = [];
   const tops: Pt[] = [];
@@ -92,18 +108,26 @@ function crossBand(on: MemberLine, s: Stretch, offset: number, greatest: number)
 }
 
 /** One distributed load `offset` page units off its member. */
-export function band(on: MemberLine, s: Stretch, offset: number, greatest: number, text: string): Scene {
+export function band(
+  on: MemberLine,
+  s: Stretch,
+  offset: number,
+  depth: Depth,
+  text: string,
+  rank?: number,
+): Scene {
   const axial = Math.abs(dot([s.load.direction[0], s.load.direction[1]], on.axis)) > 0.999;
-  const { shapes, peak, out, ends } = axial ? axialBand(on, s, offset) : crossBand(on, s, offset, greatest);
+  const { shapes, peak, out, ends } = axial ? axialBand(on, s, offset) : crossBand(on, s, offset, depth);
   const [first, last] = ends;
   const beside = unit(minus(last, first));
   const instead = [
     { at: last, prefer: beside },
     { at: first, prefer: times(beside, -1) },
   ];
-  return scene(shapes, [{ text, at: peak, prefer: out, gap: 4, instead, reluctance: 14 }]);
+  const label: Label = { text, at: peak, prefer: out, gap: 4, instead, reluctance: 14 };
+  return scene(shapes, [rank === undefined ? label : { ...label, rank }]);
 }
 
 /** How far off the member the next band on it has to stand, with room for the text between. */
-export const bandHeight = (s: Stretch, greatest: number): number =>
-  (greatest > 0 ? (DEEPEST * Math.max(Math.abs(s.q1), Math.abs(s.q2))) / greatest : 0) + 24;
+export const bandHeight = (s: Stretch, depth: Depth): number =>
+  depthAt(Math.max(Math.abs(s.q1), Math.abs(s.q2)), depth) + Math.min(TEXT_ROOM, depth.deep * 0.8 + 8);

@@ -1,9 +1,9 @@
 // Distributed loads on a body cut free, and their resultants.
 
 import type { Action } from "../results/index.ts";
-import type { DistributedLoad } from "../structure/index.ts";
+import { type DistributedLoad, inGlobalAxes } from "../structure/index.ts";
 import { arrow } from "./arrows.ts";
-import { band, bandHeight, deepest, stretchOn } from "./bands.ts";
+import { band, bandHeight, depthOf, stretchOn } from "./bands.ts";
 import { along, type Pt, times, unit } from "./geometry.ts";
 import { memberLine } from "./members.ts";
 import type { Scale } from "./scale.ts";
@@ -23,16 +23,18 @@ interface Carried {
   readonly resultant: string;
 }
 
-const carried = ({ body, loads, texts, resultants }: FreeBodyFigure): readonly Carried[] =>
+const carried = ({ structure, body, loads, texts, resultants }: FreeBodyFigure): readonly Carried[] =>
   body.actions.flatMap((action, i) => {
     const load = "load" in action.source ? loads[action.source.load] : undefined;
     if (load?.kind !== "distributed") return [];
-    return [{ action, load, text: texts[i] ?? "", resultant: resultants?.[i] ?? "" }];
+    return [
+      { action, load: inGlobalAxes(structure, load), text: texts[i] ?? "", resultant: resultants?.[i] ?? "" },
+    ];
   });
 
 /** Distributed loads over the pieces of the body, then their resultants from above all of them. */
 export function bands(spec: FreeBodyFigure, scale: Scale): Scene {
-  const greatest = deepest(spec.loads);
+  const depth = depthOf(spec.loads.map((load) => inGlobalAxes(spec.structure, load)));
   const offsets = new Map<string, number>();
   const offsetOf = (member: string): number => offsets.get(member) ?? 5;
   const drawn = carried(spec).map(({ load, text }) => {
@@ -41,8 +43,8 @@ export function bands(spec: FreeBodyFigure, scale: Scale): Scene {
       .filter((p) => p.member === load.member)
       .flatMap((p) => stretchOn(load, on.length, p.begin, p.end) ?? []);
     const offset = offsetOf(load.member);
-    offsets.set(load.member, offset + Math.max(0, ...stretches.map((s) => bandHeight(s, greatest))));
-    return merge(...stretches.map((s, j) => band(on, s, offset, greatest, j === 0 ? text : "")));
+    offsets.set(load.member, offset + Math.max(0, ...stretches.map((s) => bandHeight(s, depth))));
+    return merge(...stretches.map((s, j) => band(on, s, offset, depth, j === 0 ? text : "")));
   });
   const inLine = new Map<string, number>();
   const resultants = carried(spec).map(({ action, load, resultant: text }) => {

@@ -1,18 +1,31 @@
 // N, V and M drawn on the members, hatched in ink: N along the member, V diagonally, M across it.
 
-import type { MemberForces } from "../results/index.ts";
-import { along, distance, type Pt, times } from "./geometry.ts";
+import { type MemberForces, valueAt } from "../results/index.ts";
+import type { Structure } from "../structure/index.ts";
+import { type DrawnForce, isTruss } from "./drawn-force.ts";
+import { extentOf, leastStorey } from "./extent.ts";
+import { along, distance, times } from "./geometry.ts";
 import { hatch } from "./hatch.ts";
-import { hinges, jointNames, type MemberLine, memberLine, memberLines, worldPoints } from "./members.ts";
-import { fitted, type Scale } from "./scale.ts";
-import { disc, type Label, line, merge, PENS, polyline, type Scene, scene, strokes } from "./scene.ts";
-import type { DiagramMark, DiagramsFigure, ForceQuantity } from "./spec.ts";
+import {
+  hinges,
+  isBar,
+  jointNames,
+  type MemberLine,
+  memberLine,
+  memberLines,
+  worldPoints,
+} from "./members.ts";
+import { fittedTogether, type Laid, type Scale } from "./scale.ts";
+import { type Label, line, merge, PENS, polyline, type Scene, scene, strokes } from "./scene.ts";
+import type { DiagramsFigure, ForceQuantity } from "./spec.ts";
 import { supports } from "./supports.ts";
 import type { Panel } from "./svg.ts";
 import { traced } from "./traced.ts";
+import { values } from "./values.ts";
 
 const TALLEST = 215;
 const ORDINATE = 42;
+const LEAST_ORDINATE = 14;
 const FIBRE_GAP = 5;
 const SLOPE: Record<ForceQuantity, number> = { N: 0, V: Math.PI / 4, M: Math.PI / 2 };
 
@@ -23,14 +36,6 @@ const greatestOf = (forces: readonly MemberForces[], quantity: ForceQuantity): n
 const sideOf = (spec: DiagramsFigure, quantity: ForceQuantity): 1 | -1 =>
   quantity === "M" && spec.moments === "tension side" ? 1 : -1;
 
-interface Drawing {
-  readonly spec: DiagramsFigure;
-  readonly quantity: ForceQuantity;
-  readonly scale: Scale;
-  /** Page units per N or N·m, signed towards the fibre; 0 where the quantity is nothing beside the others. */
-  readonly gain: number;
-}
-
 function fibre(on: MemberLine): Scene {
   const inset = Math.min(8, distance(on.page(0), on.page(on.length)) / 6);
   const [a, b] = [along(on.page(0), on.fibre, FIBRE_GAP), along(on.page(on.length), on.fibre, FIBRE_GAP)];
@@ -38,9 +43,21 @@ function fibre(on: MemberLine): Scene {
   return scene([line(along(a, way, 1), along(b, way, -1), PENS.fibre)]);
 }
 
-function ofMember(drawing: Drawing, forces: MemberForces): Scene {
+/** A bar in compression is thick, in tension thin and accented, without force dashed. */
+function barLine(on: MemberLine, force: number, gain: number): Scene {
+  const pen =
+    Math.abs(force * gain) < 1e-6
+      ? { ...PENS.bar, dash: "3 4", width: 1.4 }
+      : force < 0
+        ? { ...PENS.bar, width: 4.6 }
+        : { ...PENS.curve, name: "tension", width: 1.7 };
+  return scene([line(on.page(0), on.page(on.length), pen)]);
+}
+
+function ofMember(drawing: DrawnForce, forces: MemberForces): Scene {
   const { spec, quantity, scale, gain } = drawing;
   const on = memberLine(spec.structure, forces.member, scale);
+  if (isTruss(drawing, forces)) return barLine(on, valueAt(forces.N, on.length / 2), gain);
   const curve = traced(forces[quantity]).map(([x, v]) => along(on.page(x), on.fibre, v * gain));
   if (gain === 0 || curve.length === 0) return fibre(on);
   const outline = [on.page(0), ...curve, on.page(on.length)];
@@ -52,39 +69,6 @@ function ofMember(drawing: Drawing, forces: MemberForces): Scene {
   );
 }
 
-function marks(drawing: Drawing): Scene {
-  const { spec, quantity, scale, gain } = drawing;
-  const shown: { readonly base: Pt; readonly text: string }[] = [];
-  return merge(
-    ...spec.marks
-      .filter((mark) => mark.quantity === quantity)
-      .map((mark) => {
-        const on = memberLine(spec.structure, mark.member, scale);
-        const base = on.page(mark.at);
-        // Two members give the same moment at the corner they share: printed once.
-        if (shown.some((s) => s.text === mark.text && distance(s.base, base) < 3)) return scene([]);
-        shown.push({ base, text: mark.text });
-        return markScene(mark, on, gain);
-      }),
-  );
-}
-
-function markScene(mark: DiagramMark, on: MemberLine, gain: number): Scene {
-  const base = on.page(mark.at);
-  if (mark.kind === "zero") {
-    const label: Label = { text: mark.text, at: base, prefer: times(on.fibre, -1), gap: 5, size: 13 };
-    return scene([disc(base, 2.6, PENS.load, true)], [label]);
-  }
-  const offset = mark.value * gain;
-  const label: Label = {
-    text: mark.text,
-    at: along(base, on.fibre, offset),
-    prefer: times(on.fibre, offset < 0 ? -1 : 1),
-    gap: 5,
-  };
-  return scene([], [label]);
-}
-
 function headingOf(spec: DiagramsFigure, quantity: ForceQuantity, nothing: boolean): string {
   const words = {
     N: "N  axial force",
@@ -94,32 +78,68 @@ function headingOf(spec: DiagramsFigure, quantity: ForceQuantity, nothing: boole
   return (spec.headings?.[quantity] ?? words[quantity]) + (nothing ? ": zero throughout" : "");
 }
 
-/** Layouts of a diagrams figure, one panel per quantity. */
+/** The structure without the bars that are drawn by their force. */
+function withoutBars(drawing: DrawnForce): Structure {
+  const { structure, forces } = drawing.spec;
+  const bars = new Set(forces.filter((f) => isTruss(drawing, f)).map((f) => f.member));
+  return { ...structure, members: structure.members.filter(({ name }) => !bars.has(name)) };
+}
+
+interface Sheet {
+  readonly quantity: ForceQuantity;
+  readonly greatest: number;
+  /** Nothing beside the others; rounding leaves crumbs that would fill the panel if drawn to scale. */
+  readonly isNothing: boolean;
+}
+
+function sceneOf(spec: DiagramsFigure, { quantity, greatest, isNothing }: Sheet, scale: Scale): Scene {
+  const { structure } = spec;
+  const { size } = extentOf(structure);
+  const ordinate = Math.min(ORDINATE, Math.max(LEAST_ORDINATE, leastStorey(structure, scale) * 0.34));
+  const gain = isNothing ? 0 : (sideOf(spec, quantity) * ordinate) / greatest;
+  const drawing: DrawnForce = { spec, quantity, scale, gain };
+  const unnamed = { ...structure, hinges: structure.hinges.map((h) => ({ ...h, name: "" })) };
+  return merge(
+    supports(structure, scale),
+    ...spec.forces.map((f) => ofMember(drawing, f)),
+    memberLines(withoutBars(drawing), scale, { ...PENS.member, width: 2 }),
+    hinges(unnamed, scale),
+    isNothing ? scene([]) : values(drawing),
+    jointNames(structure, scale, size),
+  );
+}
+
+/** "12 of 30 values printed ...", where there was no room for all. */
+function printedWords({ placed, scene: drawn }: Laid): string {
+  const isValue = ({ rank, text }: Label): boolean => rank !== undefined && rank >= 1 && text !== "";
+  const all = drawn.labels.filter(isValue).length;
+  const printed = placed.filter(({ label }) => isValue(label)).length;
+  return printed === all ? "" : `${printed} of ${all} values printed, the governing ones first`;
+}
+
+/** Layouts of a diagrams figure, one panel per quantity, all at one scale. */
 export function diagramPanels(spec: DiagramsFigure): readonly Panel[] {
   const all = Math.max(...(["N", "V", "M"] as const).map((q) => greatestOf(spec.forces, q)));
-  return spec.quantities.map((quantity) => {
+  const sheets = spec.quantities.map((quantity): Sheet => {
     const greatest = greatestOf(spec.forces, quantity);
-    // Rounding leaves crumbs where a force is zero; drawn to scale they would fill the panel.
-    const nothing = !(greatest > 1e-9 * all);
-    const gain = nothing ? 0 : (sideOf(spec, quantity) * ORDINATE) / greatest;
-    const laid = fitted(
-      worldPoints(spec.structure),
-      (scale) => {
-        const drawing: Drawing = { spec, quantity, scale, gain };
-        return merge(
-          supports(spec.structure, scale),
-          ...spec.forces.map((f) => ofMember(drawing, f)),
-          memberLines(spec.structure, scale, { ...PENS.member, width: 2 }),
-          hinges(
-            { ...spec.structure, hinges: spec.structure.hinges.map((h) => ({ ...h, name: "" })) },
-            scale,
-          ),
-          nothing ? scene([]) : marks(drawing),
-          jointNames(spec.structure, scale),
-        );
-      },
-      TALLEST,
-    );
-    return { heading: headingOf(spec, quantity, nothing), laid };
+    return { quantity, greatest, isNothing: !(greatest > 1e-9 * all) };
+  });
+  const extent = extentOf(spec.structure);
+  const laid = fittedTogether(
+    worldPoints(spec.structure),
+    sheets.map((sheet) => (scale: Scale) => sceneOf(spec, sheet, scale)),
+    extent.tallest(TALLEST),
+    extent.page,
+  );
+  return laid.map((one, i): Panel => {
+    const { quantity, isNothing } = sheets[i] ?? { quantity: "M", isNothing: false };
+    const heading = headingOf(spec, quantity, isNothing);
+    // Nothing is said in words where there are other panels to see the structure in.
+    if (isNothing && sheets.some((s) => !s.isNothing)) return { heading };
+    const bars = quantity === "N" && !isNothing && spec.structure.members.some(isBar) ? BARS : "";
+    const note = [bars, printedWords(one)].filter((words) => words !== "").join("; ");
+    return note === "" ? { heading, laid: one } : { heading, note, laid: one };
   });
 }
+
+const BARS = "bars: compression thick, tension thin, without force dashed";

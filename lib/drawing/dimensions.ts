@@ -8,7 +8,7 @@ import type { DimensionLine } from "./spec.ts";
 import { textWidth } from "./text.ts";
 
 const ROW = 24;
-const FIRST = 20;
+const FIRST = 26;
 const SIZE = 13;
 
 interface Span {

@@ -1,6 +1,8 @@
 import { diagramPanels } from "./diagrams.ts";
 import { freeBodyPanel } from "./free-body.ts";
 import { mechanismPanel } from "./mechanism.ts";
+import { selfStressPanels } from "./self-stress.ts";
+import { deflectionPanel, shapePanel } from "./shape.ts";
 import type { SketchSpec } from "./spec.ts";
 import { structurePanel } from "./structure.ts";
 import { type Panel, writeSvg } from "./svg.ts";
@@ -16,10 +18,16 @@ export function panelsOf(spec: SketchSpec): readonly Panel[] {
       return [{ laid: freeBodyPanel(spec) }];
     case "diagrams":
       return diagramPanels(spec);
+    case "self-stress":
+      return selfStressPanels(spec);
+    case "shape":
+      return [shapePanel(spec)];
+    case "deflection":
+      return [deflectionPanel(spec)];
   }
 }
 
-/** A sketch as one SVG element, 480 units wide, that shows alone or inside a page. `prefix` starts every id in it, so
+/** A sketch as one SVG element, as wide as it needs up to 480 units (760 for frames of many bays), that shows alone or inside a page. `prefix` starts every id in it, so
  *  that figures of one page do not clash. Throws where the spec names what the structure has not, or a number is not
  *  finite. */
 export function drawSketch(spec: SketchSpec, prefix: string): string {

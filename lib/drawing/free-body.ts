@@ -1,12 +1,13 @@
 // One body cut free, with every action on it.
 
 import type { Action } from "../results/index.ts";
-import { bands, keyOf, senseOf } from "./body-loads.ts";
+import type { Member, Structure } from "../structure/index.ts";
+import { bands, senseOf } from "./body-loads.ts";
 import { dimensioned } from "./dimensions.ts";
 import { coupleArrow, forceArrow } from "./forces.ts";
-import { along, type Pt, type Segment } from "./geometry.ts";
-import { hingeDisc, jointOf, memberLine, outwardAt } from "./members.ts";
-import { fitted, type Laid, type Scale } from "./scale.ts";
+import { along, type Pt, type Segment, times } from "./geometry.ts";
+import { hingeDisc, isBar, jointOf, memberLine, outwardAt } from "./members.ts";
+import { BODY_WIDTH, fitted, type Laid, type Scale } from "./scale.ts";
 import {
   ACCENT,
   blocksOf,
@@ -21,7 +22,7 @@ import {
 } from "./scene.ts";
 import type { FreeBodyFigure } from "./spec.ts";
 
-const TALLEST = 190;
+const TALLEST = 150;
 const ARROW = 36;
 
 function cutPoints(spec: FreeBodyFigure, scale: Scale): Scene {
@@ -50,9 +51,36 @@ function cutPoints(spec: FreeBodyFigure, scale: Scale): Scene {
   return merge(...names, ...joints);
 }
 
+/** Length of the stub of a member cut round a joint that stands alone. */
+const STUB = 40;
+
+/** Where an action is drawn: at the joint or place it acts on; the forces of a cut member ("BC_B_N") at the end of the
+ *  stub that is left of it, so that those of different members stand apart. */
+function placeOf(spec: FreeBodyFigure, action: Action, scale: Scale): Pt {
+  const point = scale.page(action.at.x, action.at.y);
+  const { structure, body } = spec;
+  if (body.pieces.length > 0 || !("force" in action.source)) return point;
+  const { force } = action.source;
+  for (const joint of body.joints) {
+    const cut = structure.members.find(
+      (m) => (m.start === joint || m.end === joint) && force.startsWith(`${m.name}_${joint}_`),
+    );
+    if (cut) return along(point, stubDirection(structure, cut, joint), STUB);
+  }
+  return point;
+}
+
+/** Page direction of a member from its joint. */
+function stubDirection(structure: Structure, member: Member, joint: string): Pt {
+  const on = memberLine(structure, member.name, { k: 1, width: 0, page: (x, y) => [x, -y] });
+  return times([on.axis[0], -on.axis[1]], member.start === joint ? 1 : -1);
+}
+
+const pointKey = (point: Pt): string => point.map((v) => v.toFixed(1)).join(" ");
+
 /** Radii of the turning arrows at one point; forces there begin outside the last. */
 const ringRadius = (spec: FreeBodyFigure, ring: number): number =>
-  (spec.body.pieces.length === 0 ? 24 : 15) + ring * 10;
+  (spec.body.pieces.length === 0 ? 11 : 15) + ring * 10;
 
 /** Couples first, then the forces around them: reactions, hinge forces, cuts, point loads. */
 function actions(spec: FreeBodyFigure, scale: Scale, drawn: Scene): Scene {
@@ -66,20 +94,31 @@ function actions(spec: FreeBodyFigure, scale: Scale, drawn: Scene): Scene {
     );
   for (const { action, text } of shown) {
     if (action.turn === 0) continue;
-    const ring = rings.get(keyOf(action)) ?? 0;
-    rings.set(keyOf(action), ring + 1);
+    const point = placeOf(spec, action, scale);
+    const ring = rings.get(pointKey(point)) ?? 0;
+    rings.set(pointKey(point), ring + 1);
     const turn = action.turn * senseOf(action) > 0 ? 1 : -1;
     const radius = ringRadius(spec, ring);
-    const point = scale.page(action.at.x, action.at.y);
     scenes = merge(scenes, coupleArrow(point, turn, text, taken(), penOf(spec, action), radius));
   }
   for (const { action, text } of shown) {
     if (action.turn !== 0) continue;
     const force: Pt = [action.direction[0] * senseOf(action), action.direction[1] * senseOf(action)];
-    const ring = rings.get(keyOf(action));
+    const point = placeOf(spec, action, scale);
+    const ring = rings.get(pointKey(point));
     const gap = ring === undefined ? 5 : ringRadius(spec, ring - 1) + 6;
-    const point = scale.page(action.at.x, action.at.y);
-    scenes = merge(scenes, forceArrow(point, force, ARROW, text, taken(), penOf(spec, action), gap));
+    scenes = merge(
+      scenes,
+      forceArrow(
+        point,
+        force,
+        spec.body.pieces.length === 0 ? 28 : ARROW,
+        text,
+        taken(),
+        penOf(spec, action),
+        gap,
+      ),
+    );
   }
   return scenes;
 }
@@ -94,11 +133,9 @@ function stubs(spec: FreeBodyFigure, scale: Scale): Scene {
       const here = scale.page(joint.x, joint.y);
       return structure.members
         .filter((m) => m.start === name || m.end === name)
-        .map((m) => {
-          const on = memberLine(structure, m.name, { k: 1, width: 0, page: (x, y) => [x, -y] });
-          const away = m.start === name ? 1 : -1;
-          return line(here, along(here, [on.axis[0], -on.axis[1]], 15 * away), PENS.member);
-        });
+        .map((m) =>
+          line(here, along(here, stubDirection(structure, m, name), STUB), isBar(m) ? PENS.bar : PENS.member),
+        );
     }),
   );
 }
@@ -158,5 +195,6 @@ export function freeBodyPanel(spec: FreeBodyFigure): Laid {
       return dimensioned(spec.dimensions ?? [], scale, drawn);
     },
     TALLEST,
+    BODY_WIDTH,
   );
 }

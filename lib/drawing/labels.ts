@@ -134,6 +134,57 @@ export function placeLabels(labels: readonly Label[], blocks: readonly Segment[]
   return placed;
 }
 
+/** More labels than this make a figure crowded. */
+const MANY = 36;
+/** A label of this rank and more is printed farther from its place, tied to it, rather than not at all. */
+const GOVERNS = 3;
+
+const collides = (placed: PlacedLabel, others: readonly PlacedLabel[]): boolean =>
+  others.some((other) => overlap(placed.box, other.box) > 0);
+
+/** Whether a label lies over so much of the lines that it is hard to read. */
+function isCovering({ box }: PlacedLabel, blocks: readonly Segment[]): boolean {
+  const height = box.bottom - box.top;
+  const covered = blocks.reduce((sum, b) => sum + (touches(b, box) ? lengthInside(b, box) : 0), 0);
+  return covered > height * 1.2;
+}
+
+/** Labels that have no rank, then the others by rank, each where there is still room. */
+function placeByRank(labels: readonly Label[], blocks: readonly Segment[]): readonly PlacedLabel[] {
+  const placed = [
+    ...placeLabels(
+      labels.filter(({ rank }) => rank === undefined),
+      blocks,
+    ),
+  ];
+  const ranked = labels.filter(({ rank, text }) => rank !== undefined && text !== "");
+  for (const label of ranked.sort((a, b) => (b.rank ?? 0) - (a.rank ?? 0))) {
+    const one = best(taskOf(label, blocks), placed);
+    const isClear = (label.rank ?? 0) >= GOVERNS || !(one.tied || isCovering(one, blocks));
+    if (isClear && !collides(one, placed)) placed.push(one);
+  }
+  return placed;
+}
+
+/** Places for all labels that must be printed and for as many of the others as find room, those of high rank first. */
+export function placeWithin(labels: readonly Label[], blocks: readonly Segment[]): readonly PlacedLabel[] {
+  if (labels.filter(({ text }) => text !== "").length > MANY) return placeByRank(labels, blocks);
+  let kept = labels;
+  for (;;) {
+    const placed = placeLabels(kept, blocks);
+    const hit = placed.filter((one) =>
+      collides(
+        one,
+        placed.filter((other) => other !== one),
+      ),
+    );
+    const ranked = hit.filter(({ label }) => label.rank !== undefined);
+    if (ranked.length === 0) return placed;
+    const lowest = ranked.reduce((a, b) => ((b.label.rank ?? 0) < (a.label.rank ?? 0) ? b : a));
+    kept = kept.filter((label) => label !== lowest.label);
+  }
+}
+
 /** Where the tie of a far label meets its box: the nearest point of the box to the label's place. */
 export function tieOf({ at, box }: PlacedLabel): Segment {
   const near: Pt = [

@@ -1,9 +1,16 @@
 // Loads of a structure on the page: distributed ones stacked off their members, forces and couples where there is room.
 
-import { type DistributedLoad, type Load, metresAlong, type Structure } from "../structure/index.ts";
-import { band, bandHeight, deepest, stretchOn } from "./bands.ts";
+import {
+  type DistributedLoad,
+  inGlobalAxes,
+  type Load,
+  metresAlong,
+  type Structure,
+} from "../structure/index.ts";
+import { band, bandHeight, depthOf, stretchOn } from "./bands.ts";
+import { leastStorey } from "./extent.ts";
 import { coupleArrow, forceArrow } from "./forces.ts";
-import type { Pt, Segment } from "./geometry.ts";
+import { dot, type Pt, type Segment, times } from "./geometry.ts";
 import { jointOf, memberLine } from "./members.ts";
 import type { Scale } from "./scale.ts";
 import { blocksOf, merge, type Scene, scene } from "./scene.ts";
@@ -27,23 +34,34 @@ export function loads(
   scale: Scale,
   drawn: Scene,
 ): Scene {
-  const [q, P] = [deepest(list), largest(list)];
+  const P = largest(list);
+  const global = list.map((load) => inGlobalAxes(structure, load));
+  const depth = depthOf(global, leastStorey(structure, scale));
+  const said = new Map<string, number>();
+  // The same text on every beam of a frame may be printed on some of them only.
+  const rankOf = (text: string): number | undefined => {
+    const before = said.get(text) ?? 0;
+    said.set(text, before + 1);
+    return before === 0 ? undefined : 1 / (1 + before);
+  };
   const offsets = new Map<string, number>();
   let scenes: Scene = scene([]);
   const taken = (): Segment[] => [...blocksOf(drawn), ...blocksOf(scenes)];
   const add = (part: Scene): void => {
     scenes = merge(scenes, part);
   };
-  const inOrder = list.map((load, i) => ({ load, text: texts[i] ?? load.label }));
+  const inOrder = global.map((load, i) => ({ load, text: texts[i] ?? load.label }));
   for (const { load, text } of inOrder) {
     if (load.kind !== "distributed") continue;
     const on = memberLine(structure, load.member, scale);
     const s = stretchOn(load, on.length);
     if (!s) continue;
-    const side = `${load.member} ${load.direction.map((d) => d.toFixed(3)).join(" ")} ${s.q1 + s.q2 >= 0}`;
+    // Loads pushing from one side of a member stand over one another.
+    const push = times([load.direction[0], -load.direction[1]], s.q1 + s.q2 >= 0 ? 1 : -1);
+    const side = `${load.member} ${dot(push, on.fibre) > 0.01} ${dot(push, on.fibre) < -0.01}`;
     const offset = offsets.get(side) ?? 5;
-    add(band(on, s, offset, q, text));
-    offsets.set(side, offset + bandHeight(s, q));
+    add(band(on, s, offset, depth, text, rankOf(text)));
+    offsets.set(side, offset + bandHeight(s, depth));
   }
   for (const { load, text } of inOrder) {
     if (load.kind === "distributed") continue;

@@ -1,6 +1,14 @@
 // Members, joints and hinges of a structure on the page.
 
-import { axisOf, type Joint, jointNamed, memberNamed, pointOn, type Structure } from "../structure/index.ts";
+import {
+  axisOf,
+  type Joint,
+  jointNamed,
+  type Member,
+  memberNamed,
+  pointOn,
+  type Structure,
+} from "../structure/index.ts";
 import { minus, type Pt, plus, times, unit } from "./geometry.ts";
 import type { Scale } from "./scale.ts";
 import { disc, type Label, line, merge, PENS, type Pen, type Scene, scene } from "./scene.ts";
@@ -41,12 +49,17 @@ export function memberLine(structure: Structure, name: string, scale: Scale): Me
 
 export const worldPoints = (structure: Structure): Pt[] => structure.joints.map((j): Pt => [j.x, j.y]);
 
-/** All members as lines of one pen. */
+/** A member pinned to its joints at both ends. */
+export const isBar = ({ releases }: Member): boolean => releases.start.moment && releases.end.moment;
+
+/** All members as lines of one pen; bars thinner, where the pen is the members' own. */
 export function memberLines(structure: Structure, scale: Scale, pen: Pen): Scene {
   return scene(
     structure.members.map((m) => {
       const on = memberLine(structure, m.name, scale);
-      return line(on.page(0), on.page(on.length), pen);
+      const own =
+        isBar(m) && pen.width > PENS.bar.width ? { ...PENS.bar, width: Math.min(pen.width, 1.9) } : pen;
+      return line(on.page(0), on.page(on.length), own);
     }),
   );
 }
@@ -77,19 +90,65 @@ export function hinges(structure: Structure, scale: Scale): Scene {
     const label: Label = { text: hinge.name, at: on.page(hinge.at), prefer: on.fibre, gap: 8 };
     return merge(hingeDisc(on.page(hinge.at)), scene([], [label]));
   });
-  const released = structure.members.flatMap((member) => {
-    const on = memberLine(structure, member.name, scale);
-    const inset = Math.min(9 / scale.k, on.length / 4);
-    return [
-      ...(member.releases.start.moment ? [hingeDisc(on.page(inset))] : []),
-      ...(member.releases.end.moment ? [hingeDisc(on.page(on.length - inset))] : []),
-    ];
-  });
-  return merge(...inside, ...released);
+  return merge(...inside, releasedEnds(structure, scale), pins(structure, scale));
 }
 
+/** Joints at which every member is pinned, as in a truss. */
+function pinJoints({ joints, members }: Structure): ReadonlySet<string> {
+  const pinnedAt = (m: Member, joint: string): boolean =>
+    m.start === joint ? m.releases.start.moment : m.releases.end.moment;
+  const meeting = (joint: string): Member[] => members.filter((m) => m.start === joint || m.end === joint);
+  const all = joints.filter(({ name }) => {
+    const here = meeting(name);
+    return here.length > 1 && here.every((m) => pinnedAt(m, name));
+  });
+  return new Set(all.map(({ name }) => name));
+}
+
+/** Joints of bars as small discs. */
+function pins(structure: Structure, scale: Scale): Scene {
+  const pinned = pinJoints(structure);
+  const joints = structure.joints.filter(({ name }) => pinned.has(name));
+  return scene(joints.map(({ x, y }) => disc(scale.page(x, y), 3.1, { ...PENS.load, width: 1.2 }, false)));
+}
+
+/** Where a member's end passes something less on than its joint would: a ring for the moment, two strokes across the
+ *  member for shear, two along it for the axial force. */
+function releasedEnds(structure: Structure, scale: Scale): Scene {
+  const pinned = pinJoints(structure);
+  const at = (member: Member, on: MemberLine, side: "start" | "end"): Scene => {
+    const release = member.releases[side];
+    const inset = Math.min(9 / scale.k, on.length / 4);
+    const place = on.page(side === "start" ? inset : on.length - inset);
+    const axis: Pt = [on.axis[0], -on.axis[1]];
+    return merge(
+      release.moment && !pinned.has(member[side]) ? hingeDisc(place) : scene([]),
+      release.shear ? pair(place, axis, on.fibre) : scene([]),
+      release.axial ? pair(place, on.fibre, axis) : scene([]),
+    );
+  };
+  return merge(
+    ...structure.members.map((member) => {
+      const on = memberLine(structure, member.name, scale);
+      return merge(at(member, on, "start"), at(member, on, "end"));
+    }),
+  );
+}
+
+/** Two short strokes along `stroke`, side by side along `apart`. */
+const pair = (centre: Pt, apart: Pt, stroke: Pt): Scene =>
+  scene(
+    [-4, 4].map((s) => {
+      const middle = plus(centre, times(apart, s));
+      return line(plus(middle, times(stroke, -7)), plus(middle, times(stroke, 7)), {
+        ...PENS.load,
+        width: 1.7,
+      });
+    }),
+  );
+
 /** Names of joints, outside the corner they mark. */
-export function jointNames(structure: Structure, scale: Scale): Scene {
+export function jointNames(structure: Structure, scale: Scale, size?: number): Scene {
   const labels = structure.joints.map((joint): Label => {
     const isFixed = structure.supports.some((s) => s.joint === joint.name && s.kind === "fixed");
     return {
@@ -98,6 +157,7 @@ export function jointNames(structure: Structure, scale: Scale): Scene {
       prefer: outwardAt(structure, joint.name, scale),
       gap: isFixed ? 12 : 7,
       bold: true,
+      ...(size === undefined ? {} : { size }),
     };
   });
   return scene([], labels);

@@ -29,6 +29,8 @@ export interface Label {
   readonly reluctance?: number;
   /** Keeps to these places and sides, never farther out. */
   readonly fixed?: boolean;
+  /** A label with a rank is left out where it finds no room; of two that collide, the one of lower rank. */
+  readonly rank?: number;
 }
 
 export interface Scene {
@@ -57,6 +59,7 @@ export interface Pen {
 
 type PenName =
   | "member"
+  | "bar"
   | "ghost"
   | "load"
   | "sought"
@@ -71,6 +74,7 @@ type PenName =
 
 export const PENS: Readonly<Record<PenName, Pen>> = {
   member: { name: "member", width: 3.2 },
+  bar: { name: "bar", width: 1.9 },
   ghost: { name: "ghost", width: 1.2 },
   load: { name: "load", width: 1.3 },
   sought: { name: "sought", width: 2.2, colour: ACCENT },

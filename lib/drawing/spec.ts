@@ -1,8 +1,8 @@
 // What a figure shows, as plain data for the record. Geometry and loads are SI (m, N, N·m); everything that is
 // printed comes as text, because units and rounding are decided where the numbers are known.
 
-import type { FreeBody, Mechanism, MemberForces, Point } from "../results/index.ts";
-import type { Load, Structure } from "../structure/index.ts";
+import type { ElasticMember, FreeBody, Mechanism, MemberForces, Point } from "../results/index.ts";
+import type { Imposed, Load, Structure } from "../structure/index.ts";
 
 interface FigureWords {
   /** Short name of the figure, read out first. */
@@ -32,6 +32,9 @@ export interface StructureFigure extends FigureWords {
   readonly structure: Structure;
   readonly loads: readonly Load[];
   readonly loadTexts?: readonly string[];
+  /** Deformations imposed from outside, with their texts in order (default: each one's label). */
+  readonly imposed?: readonly Imposed[];
+  readonly imposedTexts?: readonly string[];
   readonly dimensions?: readonly DimensionLine[];
   readonly labels?: readonly PlacedText[];
 }
@@ -84,6 +87,44 @@ export interface DiagramsFigure extends FigureWords {
   readonly headings?: Readonly<Partial<Record<ForceQuantity, string>>>;
 }
 
+/** A state of self-stress: forces in equilibrium with no load, known up to a factor. Members left out are at rest.
+ *  Drawn as N, V and M are, the greatest force and the greatest moment taken as printed in `marks`; a quantity that is nothing throughout is left out. */
+export interface SelfStressFigure extends FigureWords {
+  readonly kind: "self-stress";
+  readonly structure: Structure;
+  readonly forces: readonly MemberForces[];
+  readonly moments?: "tension side" | "compression side";
+  readonly marks?: readonly DiagramMark[];
+}
+
+/** A stretch of a member bent one way, between fractions of its length. Sagging is tension on the reference fibre. */
+export interface Bend {
+  readonly begin: number;
+  readonly end: number;
+  readonly sense: "sagging" | "hogging" | "straight";
+}
+
+/** How a structure is expected to bend, drawn without numbers: every member bends as `bends` say, keeps its corners at
+ *  rigid joints and its place at supports; where the sense changes a point of inflection is marked. `moves` are
+ *  displacements of joints in parts of the greatest one, for a frame that sways. */
+export interface ShapeFigure extends FigureWords {
+  readonly kind: "shape";
+  readonly structure: Structure;
+  readonly members: readonly { readonly member: string; readonly bends: readonly Bend[] }[];
+  readonly moves?: readonly { readonly joint: string; readonly x: number; readonly y: number }[];
+  readonly loads?: readonly Load[];
+}
+
+/** The deflected shape of a solution, enlarged so that it can be seen; `scaleText` says how much. */
+export interface DeflectionFigure extends FigureWords {
+  readonly kind: "deflection";
+  readonly structure: Structure;
+  readonly members: readonly Pick<ElasticMember, "member" | "along" | "deflection" | "inflection">[];
+  readonly scaleText?: string;
+  /** Values printed at places of members, metres from the start. */
+  readonly marks?: readonly { readonly member: string; readonly at: number; readonly text: string }[];
+}
+
 /** One line of a chart: points in the units of the axis titles. */
 export interface ChartSeries {
   readonly name: string;
@@ -99,6 +140,13 @@ export interface LineChartFigure extends FigureWords {
 }
 
 /** Figures drawn at once, without loading anything. */
-export type SketchSpec = StructureFigure | MechanismFigure | FreeBodyFigure | DiagramsFigure;
+export type SketchSpec =
+  | StructureFigure
+  | MechanismFigure
+  | FreeBodyFigure
+  | DiagramsFigure
+  | SelfStressFigure
+  | ShapeFigure
+  | DeflectionFigure;
 
 export type FigureSpec = SketchSpec | LineChartFigure;

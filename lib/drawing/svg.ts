@@ -2,16 +2,23 @@
 
 import { between, type Pt } from "./geometry.ts";
 import { type PlacedLabel, TEXT_SIZE, tieOf } from "./labels.ts";
-import { type Laid, PAGE_WIDTH } from "./scale.ts";
+import type { Laid } from "./scale.ts";
 import { ACCENT, at, INK, line, PAPER, PENS } from "./scene.ts";
-import { escapeXml, textContent } from "./text.ts";
+import { escapeXml, textContent, textWidth } from "./text.ts";
 
 const PAD = 8;
 const HEADING = 24;
+const NOTE = 18;
+const NOTE_SIZE = 12.5;
+/** Pixels per unit of the viewBox. */
+const SHOWN = 0.94;
 
 export interface Panel {
   readonly heading?: string;
-  readonly laid: Laid;
+  /** A line of small print under the heading. */
+  readonly note?: string;
+  /** Absent where the heading says all there is. */
+  readonly laid?: Laid;
 }
 
 function writeLabel(placed: PlacedLabel): string {
@@ -28,19 +35,37 @@ function writeLabel(placed: PlacedLabel): string {
   );
 }
 
-function writePanel(panel: Panel, top: number): { readonly svg: string; readonly height: number } {
-  const { box, scene, placed } = panel.laid;
-  const head = panel.heading ? HEADING : 0;
+/** Width a panel needs, its heading included. */
+function widthOf({ heading = "", note = "", laid }: Panel): number {
+  const drawn = laid === undefined ? 0 : laid.box.right - laid.box.left;
+  return Math.max(drawn, textWidth(heading, TEXT_SIZE), textWidth(note, NOTE_SIZE) * 0.9) + 2 * PAD;
+}
+
+function headingLine(text: string, y: number, size: number, weight: string): string {
+  return (
+    `<text x="${PAD}" y="${at(y)}" font-size="${size}"${weight} fill="${INK}" ` +
+    `text-anchor="start">${textContent(text, size)}</text>`
+  );
+}
+
+function writePanel(
+  { heading, note, laid }: Panel,
+  top: number,
+  across: number,
+): { readonly svg: string; readonly height: number } {
+  const head = (heading ? HEADING : 0) + (note ? NOTE : 0);
+  const title = [
+    ...(heading ? [headingLine(heading, top + 18, TEXT_SIZE, ' font-weight="700"')] : []),
+    ...(note ? [headingLine(note, top + head - 5, NOTE_SIZE, "")] : []),
+  ].join("\n");
+  if (laid === undefined) return { svg: title, height: head };
+  const { box, scene, placed } = laid;
   const width = box.right - box.left;
-  const dx = Math.max(PAD, (PAGE_WIDTH - width) / 2) - box.left;
+  const dx = Math.max(PAD, (across - width) / 2) - box.left;
   const dy = top + head + PAD - box.top;
-  const heading = panel.heading
-    ? `<text x="${PAD}" y="${at(top + 18)}" font-size="${TEXT_SIZE}" font-weight="700" fill="${INK}" ` +
-      `text-anchor="start">${textContent(panel.heading, TEXT_SIZE)}</text>`
-    : "";
   const inner = [...scene.shapes.map((s) => s.svg), ...placed.map(writeLabel)].join("\n");
   return {
-    svg: `${heading}\n<g transform="translate(${at(dx)} ${at(dy)})">\n${inner}\n</g>`,
+    svg: `${title}\n<g transform="translate(${at(dx)} ${at(dy)})">\n${inner}\n</g>`,
     height: head + box.bottom - box.top + 2 * PAD,
   };
 }
@@ -63,10 +88,11 @@ export function openSvg(
   h: number,
 ): string {
   const id = checkedPrefix(prefix);
-  // Height as an attribute keeps a figure that stands alone from growing with a wide window; a page may override it.
+  // Given in px, so that letters have one size in every figure and a wide window does not blow it up; a page limits the
+  // width to its own.
   return (
     `<svg xmlns="http://www.w3.org/2000/svg" role="img" class="figure-svg" aria-labelledby="${id}-title ${id}-desc" ` +
-    `viewBox="0 0 ${at(w)} ${at(h)}" width="100%" height="${at(h * 1.15)}" preserveAspectRatio="xMidYMid meet" ` +
+    `viewBox="0 0 ${at(w)} ${at(h)}" width="${at(w * SHOWN)}" height="${at(h * SHOWN)}" preserveAspectRatio="xMidYMid meet" ` +
     `font-family="'Helvetica Neue', Arial, 'Liberation Sans', sans-serif" text-anchor="middle">\n` +
     `<title id="${id}-title">${escapeXml(words.title)}</title>\n` +
     `<desc id="${id}-desc">${escapeXml(words.description)}</desc>\n` +
@@ -81,13 +107,12 @@ export function writeSvg(
   prefix: string,
 ): string {
   let top = 0;
-  let width = PAGE_WIDTH;
+  const width = Math.max(...panels.map(widthOf));
   const parts: string[] = [];
   for (const panel of panels) {
-    const { svg, height } = writePanel(panel, top);
+    const { svg, height } = writePanel(panel, top, width);
     parts.push(svg);
     top += height;
-    width = Math.max(width, panel.laid.box.right - panel.laid.box.left + 2 * PAD);
   }
   return `${openSvg(words, prefix, width, top)}\n${parts.join("\n")}\n</svg>\n`;
 }

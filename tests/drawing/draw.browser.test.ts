@@ -3,6 +3,8 @@ import { afterAll, beforeAll, describe, expect, it } from "vitest";
 import { drawLineChart, drawSketch, type SketchSpec } from "../../lib/drawing/index.ts";
 import { hasBrowser, openBrowser } from "./browser.ts";
 import * as fixtures from "./fixtures.ts";
+import * as shapes from "./shapes.ts";
+import { twelve } from "./twelve.ts";
 
 const sketches: readonly (readonly [string, SketchSpec])[] = [
   ["portal", fixtures.portalFigure],
@@ -28,6 +30,11 @@ const MEASURE = `[...document.querySelectorAll("svg text")].map((t) => {
 })`;
 const FRAME = `(() => { const r = document.querySelector("svg").getBoundingClientRect(); return [r.left, r.right]; })()`;
 
+/** Letters' boxes hold air above and below; a little of that may be shared. */
+const isOver = (a: Measured, b: Measured): boolean =>
+  Math.min(a.box[2], b.box[2]) - Math.max(a.box[0], b.box[0]) > 1 &&
+  Math.min(a.box[3], b.box[3]) - Math.max(a.box[1], b.box[1]) > 2.5;
+
 /** Root element and number of errors of a text read as SVG. */
 const parsed = (page: Page, svg: string): Promise<readonly [string, number]> =>
   page.evaluate(`(() => {
@@ -37,29 +44,26 @@ const parsed = (page: Page, svg: string): Promise<readonly [string, number]> =>
 
 describe.skipIf(!hasBrowser)("figures in a browser", () => {
   let browser: Browser;
+  let phone: Page;
   beforeAll(async () => {
     browser = await openBrowser();
+    phone = await browser.newPage({ viewport: { width: 390, height: 800 } });
   });
   afterAll(() => browser?.close());
 
   it.each(sketches)(
     "drawSketch(%s) at 390 px: letters of 9 px and more, none over another, all inside",
     async (_, spec) => {
-      const page = await browser.newPage({ viewport: { width: 390, height: 800 } });
-      await page.setContent(`<style>svg{width:100%;height:auto}</style>${drawSketch(spec, "f")}`);
-      const texts = await page.evaluate<Measured[]>(MEASURE);
-      const [left, right] = await page.evaluate<[number, number]>(FRAME);
-      await page.close();
+      await phone.setContent(`<style>svg{max-width:100%;height:auto}</style>${drawSketch(spec, "f")}`);
+      const texts = await phone.evaluate<Measured[]>(MEASURE);
+      const [left, right] = await phone.evaluate<[number, number]>(FRAME);
       expect(texts.length).toBeGreaterThan(5);
       for (const [i, a] of texts.entries()) {
         expect(a.pixels, a.text).toBeGreaterThan(9);
         expect(a.box[0], a.text).toBeGreaterThanOrEqual(left);
         expect(a.box[2], a.text).toBeLessThanOrEqual(right);
         for (const b of texts.slice(i + 1)) {
-          // Letters' boxes hold air above and below; a pixel of that may be shared.
-          const width = Math.min(a.box[2], b.box[2]) - Math.max(a.box[0], b.box[0]);
-          const height = Math.min(a.box[3], b.box[3]) - Math.max(a.box[1], b.box[1]);
-          expect(width > 1 && height > 2.5, `${a.text} over ${b.text}`).toBe(false);
+          expect(isOver(a, b), `${a.text} over ${b.text}`).toBe(false);
         }
       }
     },
@@ -71,10 +75,34 @@ describe.skipIf(!hasBrowser)("figures in a browser", () => {
     await page.close();
   });
 
-  it.each(sketches)("drawSketch(%s) is well-formed XML", async (_, spec) => {
+  it("every sketch, the twelve structures' and the shapes' too, is well-formed XML", async () => {
     const page = await browser.newPage();
-    expect(await parsed(page, drawSketch(spec, "f"))).toEqual(["svg", 0]);
-    expect((await parsed(page, `${drawSketch(spec, "f")}<`))[1]).toBeGreaterThan(0);
+    const all = [
+      ...sketches.map(([, spec]) => spec),
+      ...twelve.flatMap((one) => [one.loads, one.body, one.diagrams]),
+      ...Object.values(shapes),
+    ];
+    expect(all.length).toBeGreaterThan(45);
+    for (const spec of all) expect(await parsed(page, drawSketch(spec, "f")), spec.title).toEqual(["svg", 0]);
+    expect((await parsed(page, `${drawSketch(fixtures.sway, "f")}<`))[1]).toBeGreaterThan(0);
+    await page.close();
+  });
+
+  it("the twelve structures at their own size: letters of 11 px and more, none over another", async () => {
+    const page = await browser.newPage({ viewport: { width: 1280, height: 900 } });
+    const sizes: number[] = [];
+    for (const one of twelve) {
+      for (const spec of [one.loads, one.body, one.diagrams]) {
+        await page.setContent(drawSketch(spec, "f"));
+        const texts = await page.evaluate<Measured[]>(MEASURE);
+        sizes.push(...texts.map((t) => t.pixels));
+        for (const [i, a] of texts.entries())
+          for (const b of texts.slice(i + 1))
+            expect(isOver(a, b), `${spec.title}: ${a.text} over ${b.text}`).toBe(false);
+      }
+    }
+    expect(sizes.length).toBeGreaterThan(700);
+    expect(Math.min(...sizes)).toBeGreaterThan(11);
     await page.close();
   });
 });

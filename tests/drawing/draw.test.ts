@@ -39,7 +39,9 @@ describe("drawSketch", () => {
       const ids = [...svg.matchAll(/ id="([^"]*)"/g)].map((m) => m[1]);
       expect(ids).toEqual(["own-title", "own-desc"]);
       expect(svg).not.toMatch(/ style=|<style|NaN|Infinity|undefined/);
-      expect(svg).toMatch(/viewBox="0 0 480 /);
+      const width = Number(/viewBox="0 0 ([\d.]+) /.exec(svg)?.[1]);
+      expect(width).toBeGreaterThan(100);
+      expect(width).toBeLessThanOrEqual(spec.kind === "free body" ? 350.1 : 480.1);
     },
   );
 

@@ -1,7 +1,7 @@
 // Exact comparison with a kept file. A difference leaves a "-changed" file beside it for the eye; to accept it, put it
 // in place of the kept one. A missing kept file is written once and fails the run that wrote it.
 
-import { existsSync, readFileSync, rmSync, writeFileSync } from "node:fs";
+import { existsSync, mkdirSync, readFileSync, rmSync, writeFileSync } from "node:fs";
 import { expect } from "vitest";
 
 /** Compares `text` with the file of that name in the folder `golden` beside the test at `test` (its import.meta.url). */
@@ -13,6 +13,7 @@ export function expectGolden(test: string, name: string, text: string): void {
     rmSync(changed, { force: true });
     return;
   }
+  mkdirSync(new URL(".", kept), { recursive: true });
   writeFileSync(before === undefined ? kept : changed, text);
   expect.fail(
     before === undefined

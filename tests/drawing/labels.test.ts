@@ -2,7 +2,7 @@ import fc from "fast-check";
 import { describe, expect, it } from "vitest";
 import { panelsOf } from "../../lib/drawing/draw.ts";
 import { lengthInside, overlap } from "../../lib/drawing/geometry.ts";
-import { placeLabels } from "../../lib/drawing/labels.ts";
+import { placeLabels, placeWithin } from "../../lib/drawing/labels.ts";
 import type { Label } from "../../lib/drawing/scene.ts";
 import * as fixtures from "./fixtures.ts";
 
@@ -21,6 +21,7 @@ describe("placeLabels", () => {
     const panels = panelsOf(spec);
     let pairs = 0;
     for (const { laid } of panels) {
+      if (laid === undefined) continue;
       laid.placed.forEach((a, i) => {
         for (const b of laid.placed.slice(i + 1)) {
           pairs++;
@@ -76,5 +77,29 @@ describe("placeLabels", () => {
 
   it("placeLabels(empty text) leaves it out", () => {
     expect(placeLabels([label("", 0, 0)], [])).toEqual([]);
+  });
+});
+
+describe("placeWithin", () => {
+  const ranked = (n: number): Label[] =>
+    Array.from({ length: n }, (_, i) => ({
+      ...label(`${100 + i}.0 kN`, (i % 9) * 14, Math.floor(i / 9) * 9),
+      rank: i / n,
+    }));
+
+  it("placeWithin(more labels than there is room for) keeps them apart, those without rank and the highest first", () => {
+    const name = { ...label("A", 20, 20), bold: true };
+    const placed = placeWithin([name, ...ranked(80)], []);
+    for (const [i, a] of placed.entries())
+      for (const b of placed.slice(i + 1)) expect(overlap(a.box, b.box)).toBe(0);
+    const kept = placed.map((p) => p.label);
+    expect(kept).toContain(name);
+    expect(kept.map((l) => l.text)).toContain("179.0 kN");
+    expect(kept.length).toBeGreaterThan(8);
+    expect(kept.length).toBeLessThan(81);
+  });
+
+  it("placeWithin(a few labels) leaves none out", () => {
+    expect(placeWithin(ranked(9), [])).toHaveLength(9);
   });
 });
