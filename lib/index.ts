@@ -2,6 +2,7 @@
 
 export { ExactError, exact } from "./exact/index.ts";
 export {
+  type DeterminacyOptions,
   type DiagramOptions,
   type Hand,
   type HingeChoice,

@@ -1,6 +1,6 @@
 // The verb `determinacy`: how many moments must be guessed before statics is enough.
 
-import type { StructureFigure } from "../drawing/index.ts";
+import type { MechanismFigure, SelfStressFigure, StructureFigure } from "../drawing/index.ts";
 import type { Determinacy } from "../results/types.ts";
 import type { Ledger } from "../sheet/index.ts";
 import { determinacy } from "../statics/index.ts";
@@ -11,8 +11,17 @@ import { shownAs, sketchBundle } from "./shown.ts";
 import { geometrySources } from "./sources.ts";
 import { counted, structureName } from "./words.ts";
 
+export interface DeterminacyOptions {
+  /** Draw the states of self-stress as well, three of them at most; otherwise they are only counted. */
+  readonly selfStress?: boolean;
+}
+
 /** Records the structure's figure and its determinacy by count and by rank; answers with the determinacy. */
-export function recordDeterminacy(ledger: Ledger, structure: Structure): Determinacy {
+export function recordDeterminacy(
+  ledger: Ledger,
+  structure: Structure,
+  options: DeterminacyOptions = {},
+): Determinacy {
   const name = structureName(structure);
   const found = determinacy(structure);
   const uses = geometrySources(structure);
@@ -33,8 +42,66 @@ export function recordDeterminacy(ledger: Ledger, structure: Structure): Determi
     verdict: found.words,
     lines: determinacyLines(found),
   });
+  recordMotions(ledger, structure, name, found);
+  if (options.selfStress === true) recordSelfStresses(ledger, structure, name, found);
   const text = [found.words, ...determinacyLines(found)].join("\n");
   return shownAs(found, () => sketchBundle(spec, text));
+}
+
+/** More motions than this are told in words only. */
+const mostDrawn = 3;
+
+/** A figure for each of the first motions a mechanism can make. */
+function recordMotions(
+  ledger: Ledger,
+  structure: Structure,
+  name: string,
+  { mechanisms }: Determinacy,
+): void {
+  mechanisms.slice(0, mostDrawn).forEach((mechanism, i) => {
+    const which = mechanisms.length === 1 ? "The motion" : `Motion ${i + 1} of ${mechanisms.length}`;
+    const spec: MechanismFigure = {
+      kind: "mechanism",
+      title: `${which} nothing resists, ${name}`,
+      description: `${mechanism.words}.`,
+      structure,
+      mechanism,
+    };
+    ledger.put({
+      kind: "figure",
+      id: `figure motion ${i + 1} of ${name}`,
+      uses: geometrySources(structure),
+      caption: `${which} nothing resists: ${mechanism.words}`,
+      alternative: spec.description,
+      spec,
+    });
+  });
+}
+
+/** A figure for each of the first states of self-stress: forces in equilibrium without any load. */
+function recordSelfStresses(
+  ledger: Ledger,
+  structure: Structure,
+  name: string,
+  { selfStresses }: Determinacy,
+): void {
+  selfStresses.slice(0, mostDrawn).forEach(({ members, words }, i) => {
+    const spec: SelfStressFigure = {
+      kind: "self-stress",
+      title: `State of self-stress ${i + 1} of ${selfStresses.length}, ${name}`,
+      description: `${words}.`,
+      structure,
+      forces: members,
+    };
+    ledger.put({
+      kind: "figure",
+      id: `figure self-stress ${i + 1} of ${name}`,
+      uses: geometrySources(structure),
+      caption: `State of self-stress ${i + 1} of ${selfStresses.length}, to no scale: ${words}`,
+      alternative: spec.description,
+      spec,
+    });
+  });
 }
 
 /** The count as the trade writes it, and the rank, one line each. */

@@ -1,8 +1,8 @@
 // The verb `diagrams`: N, V and M on the members, with a table of their end values and extremes.
 
-import type { DiagramMark, DiagramsFigure, ForceQuantity } from "../drawing/index.ts";
+import { type DiagramsFigure, diagramMarks, type ForceQuantity } from "../drawing/index.ts";
 import { printValue, quantity } from "../quantity/index.ts";
-import { crossings, extremes, type Side, valueAt } from "../results/index.ts";
+import { extremes, type Side, valueAt } from "../results/index.ts";
 import type { MemberForces } from "../results/types.ts";
 import { type Ledger, shownValue, type TableCell } from "../sheet/index.ts";
 import { memberNamed } from "../structure/index.ts";
@@ -46,7 +46,9 @@ export function recordDiagrams(ledger: Ledger, hand: Hand, options: DiagramOptio
 
 function diagramsFigure(hand: Hand, moments: "tension side" | "compression side"): DiagramsFigure {
   const structure = hand.solved.length === 1 ? (hand.solved[0]?.set.hinged ?? hand.frame) : hand.frame;
-  const marks = hand.members.flatMap((forces) => order.flatMap((which) => marksOf(forces, which)));
+  const marks = diagramMarks(hand.members, order, {
+    value: (si, which) => printValue(quantity(si, dimensions[which])),
+  });
   const spoken = hand.members.map((forces) => spokenForces(hand, forces)).join("; ");
   return {
     kind: "diagrams",
@@ -58,25 +60,6 @@ function diagramsFigure(hand: Hand, moments: "tension side" | "compression side"
     moments,
     marks,
   };
-}
-
-function marksOf(forces: MemberForces, which: ForceQuantity): readonly DiagramMark[] {
-  const { member, length } = forces;
-  const f = forces[which];
-  const mark = (kind: DiagramMark["kind"], at: number, value: number): DiagramMark => ({
-    quantity: which,
-    member,
-    at,
-    value,
-    kind,
-    text: kind === "zero" ? "" : printValue(quantity(value, dimensions[which])),
-  });
-  const ends = [mark("end", 0, valueAt(f, 0, "right")), mark("end", length, valueAt(f, length, "left"))];
-  return [
-    ...ends.filter(({ value }) => !isNought(value, forces, which)),
-    ...innerExtremes(forces, which).map(({ x, value }) => mark("extreme", x, value)),
-    ...(which === "M" ? crossings(f).map((x) => mark("zero", x, 0)) : []),
-  ];
 }
 
 /** Extremes strictly inside the member that say more than its ends do. */

@@ -11,16 +11,18 @@ export interface Named {
   readonly loadNames: readonly string[];
 }
 
-type Equation = Pick<Step, "equation" | "about" | "terms">;
+type Equation = Pick<Step, "equation" | "about" | "along" | "terms">;
 
 /** The dimension of what an equation adds up. */
 export function sumDimension(equation: Step["equation"]): "force" | "moment" {
   return equation === "sum M" ? "moment" : "force";
 }
 
-/** "ΣFx", "ΣM about A". */
-export function equationText({ equation, about }: Equation): string {
+/** "ΣFx", "ΣM about A", "ΣF along BC"; a point that is no joint is O, where two forces meet. */
+export function equationText({ equation, about, along }: Omit<Equation, "terms">): string {
+  if (about?.meets !== undefined) return `ΣM about O, ${about.name}`;
   if (equation === "sum M") return `ΣM about ${about?.name ?? "a point"}`;
+  if (equation === "sum F") return `ΣF ${along?.name ?? "along a member"}`;
   return equation === "sum Fx" ? "ΣFx" : "ΣFy";
 }
 
@@ -32,6 +34,15 @@ export function stepLines(step: Step, named: Named): FormulaLines {
     numbers: `${joinTerms([...termsByNumber(step), last])} = 0`,
     result: `${forceTex(step.unknown, named)} = ${valueTex(shownValue(forceQuantity(step.unknown, step.result, named)))}`,
   };
+}
+
+/** Unknowns that are zero because nothing acts in their equations, in three lines of TeX. */
+export function idleLines(steps: readonly [Step, ...Step[]], named: Named): FormulaLines {
+  const [{ equation, unknown, result }] = steps;
+  const names = steps.map((step) => forceTex(step.unknown, named)).join(" = ");
+  const zero = valueTex(shownValue(forceQuantity(unknown, result, named)));
+  const sum = equation === "sum M" ? "\\sum M" : sumTex(steps[0]);
+  return { symbols: `${sum} = 0:\\quad ${names} = 0`, numbers: "0 = 0", result: `${names} = ${zero}` };
 }
 
 /** An equation without unknowns in three lines of TeX: it closes or it does not. */
@@ -67,8 +78,10 @@ export function forceText(name: string, named: Named): string {
     .replace(/[{}]/g, "");
 }
 
-function sumTex({ equation, about }: Equation): string {
-  if (equation === "sum M") return `\\sum M_{${pointTex(about?.name ?? "")}}`;
+function sumTex({ equation, about, along }: Omit<Equation, "terms">): string {
+  if (equation === "sum M")
+    return `\\sum M_{${about?.meets === undefined ? pointTex(about?.name ?? "") : "O"}}`;
+  if (equation === "sum F") return `\\sum F_{\\mathrm{${(along?.name ?? "").replaceAll(" ", "\\ ")}}}`;
   return equation === "sum Fx" ? "\\sum F_x" : "\\sum F_y";
 }
 

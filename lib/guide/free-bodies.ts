@@ -4,13 +4,14 @@ import type { Quantity } from "../quantity/index.ts";
 import type { Closure, Step } from "../results/types.ts";
 import { type EquationTerm, type Ledger, shownValue } from "../sheet/index.ts";
 import { freeBodies } from "../statics/index.ts";
-import type { Load } from "../structure/types.ts";
+import type { Load, Sources } from "../structure/types.ts";
 import { bodyFigure } from "./body-figure.ts";
-import { closureLines, equationText, forceQuantity, type Named, stepLines } from "./equation.ts";
+import { closureLines, equationText, forceQuantity, idleLines, type Named, stepLines } from "./equation.ts";
 import { handOf } from "./hand.ts";
 import { loadNames } from "./load-words.ts";
-import { jointSources, loadSources } from "./sources.ts";
+import { coordinateSources, jointSources, loadSources } from "./sources.ts";
 import type { Hand, HingeSet, SolvedSet } from "./types.ts";
+import { and } from "./words.ts";
 
 /** Solves each hinge set under its load cases and records every body and equation; answers with the results, added. */
 export function recordFreeBodies(ledger: Ledger, sets: readonly HingeSet[]): Hand {
@@ -22,13 +23,21 @@ function recordSet(ledger: Ledger, set: HingeSet): SolvedSet {
   const loads = set.cases.flatMap((loadCase) => loadCase.loads);
   const solution = freeBodies(set.hinged, loads);
   const book: SetBook = { ledger, set, loads, named: { solution, loadNames: loadNames(loads) }, entries: [] };
-  let current = "";
-  solution.steps.forEach((step, i) => {
-    const body = step.bodies.join("+");
-    if (body !== current) recordBodies(book, step, i);
-    current = body;
+  let current = -1;
+  for (let i = 0; i < solution.steps.length; i++) {
+    const idle = idleRun(solution.steps, i);
+    if (idle !== undefined) {
+      recordIdle(book, idle, i);
+      i += idle.length - 1;
+      current = -1;
+      continue;
+    }
+    const step = solution.steps[i];
+    if (step === undefined) continue;
+    if (drawnBody(step) !== current) recordBody(book, step, i);
+    current = drawnBody(step);
     recordStep(book, step, i);
-  });
+  }
   for (const closure of solution.closures) recordClosure(book, closure);
   return { set, loads, solution, entries: book.entries };
 }
@@ -42,30 +51,65 @@ interface SetBook {
   readonly entries: string[];
 }
 
-function recordBodies(book: SetBook, first: Step, firstStep: number): void {
+/** The body a step is written for: where several were joined, what they are together. */
+function drawnBody({ joined, bodies }: Step): number {
+  return joined ?? bodies[0] ?? -1;
+}
+
+/** The steps from `first` on in which nothing acts and which sum the same way, where there are any. */
+function idleRun(steps: readonly Step[], first: number): readonly [Step, ...Step[]] | undefined {
+  const [begin, ...rest] = steps.slice(first);
+  if (begin?.idle !== true) return undefined;
+  if (begin.equation === "sum M") return [begin];
+  const end = rest.findIndex((step) => step.idle !== true || step.equation !== begin.equation);
+  return [begin, ...(end === -1 ? rest : rest.slice(0, end))];
+}
+
+function recordBody(book: SetBook, first: Step, firstStep: number): void {
   const { ledger, set, loads, named } = book;
   const run = named.solution.steps.slice(firstStep);
-  const until = run.findIndex((step) => step.bodies.join("+") !== first.bodies.join("+"));
+  const until = run.findIndex((step) => drawnBody(step) !== drawnBody(first) || step.idle === true);
   const steps = until === -1 ? run : run.slice(0, until);
   const sought = steps.map((step) => step.unknown);
-  for (const index of first.bodies) {
-    const body = named.solution.bodies[index];
-    if (body === undefined) continue;
-    const { about } = first;
-    const spec = bodyFigure(set.hinged, loads, body, named, {
-      firstStep,
-      sought,
-      ...(about === undefined ? {} : { about }),
-    });
-    ledger.put({
-      kind: "figure",
-      id: `figure ${set.name}: ${body.name}, ${sought.join(" ")}`,
-      uses: usesOf(book, steps[0] ?? first),
-      caption: `${set.name}: ${body.name}`,
-      alternative: spec.description,
-      spec,
-    });
-  }
+  const body = named.solution.bodies[drawnBody(first)];
+  if (body === undefined) return;
+  const { about } = first;
+  const spec = bodyFigure(set.hinged, loads, body, named, {
+    firstStep,
+    sought,
+    ...(about === undefined ? {} : { about }),
+  });
+  ledger.put({
+    kind: "figure",
+    id: `figure ${set.name}: ${body.name}, ${sought.join(" ")}`,
+    uses: usesOf(book, (steps[0] ?? first).uses),
+    caption: `${set.name}: ${body.name}`,
+    alternative: spec.description,
+    spec,
+  });
+}
+
+/** One line for the unknowns that are zero because nothing acts. */
+function recordIdle(book: SetBook, steps: readonly [Step, ...Step[]], first: number): void {
+  const { ledger, set, loads, named } = book;
+  const names = steps.map((step) => step.unknown).join(", ");
+  const bodies = and([...new Set(steps.map((step) => bodyName(book, step)))]);
+  const uses = unique(steps.flatMap((step) => usesOf(book, step.uses)));
+  const [one] = steps;
+  const entry = ledger.put({
+    kind: "step",
+    id: `${set.name}: nothing acts: ${names}`,
+    // that nothing acts is said of the loads
+    uses: uses.length === 0 ? loadSources(loads) : uses,
+    body: `${bodies}, ${one.equation === "sum M" ? "ΣM" : equationText(one)}, in which nothing acts`,
+    lines: idleLines(steps, named),
+    value: shownValue(forceQuantity(one.unknown, one.result, named)),
+    terms: [],
+    coefficient: 1,
+  });
+  steps.forEach((_, i) => {
+    book.entries[first + i] = `${entry.id}@${entry.version}`;
+  });
 }
 
 function recordStep(book: SetBook, step: Step, index: number): void {
@@ -74,8 +118,8 @@ function recordStep(book: SetBook, step: Step, index: number): void {
   const entry = ledger.put({
     kind: "step",
     id: `${set.name}: ${step.id}`,
-    uses: usesOf(book, step),
-    body: `${bodyNames(book, step)}, ${equationText(step)}`,
+    uses: usesOf(book, step.uses),
+    body: `${bodyName(book, step)}, ${equationText(step)}`,
     lines: stepLines(step, named),
     value: shownValue(value),
     terms: termsOf(book, step),
@@ -89,15 +133,15 @@ function recordClosure(book: SetBook, closure: Closure): void {
   const text = equationText(closure);
   ledger.put({
     kind: "check",
-    id: `${set.name}: closure ${bodyNames(book, closure)} ${text}`,
-    uses: termUses(book, closure),
+    id: `${set.name}: closure ${bodyName(book, closure)} ${text}`,
+    uses: closure.uses === undefined ? [] : usesOf(book, closure.uses),
     formula: `${text} = 0`,
     lines: closureLines(closure, named),
     inputs: {},
     closure: true,
     terms: termsOf(book, closure),
     passed: Math.abs(closure.sum) <= Math.max(1e-9 * closure.scale, negligible),
-    description: `${set.name}: ${bodyNames(book, closure)}: the equation left over closes by itself`,
+    description: `${set.name}: ${bodyName(book, closure)}: the equation left over closes by itself`,
   });
 }
 
@@ -112,30 +156,30 @@ function termsOf({ entries }: SetBook, { terms }: Pick<Closure, "terms">): reado
 /** A sum below a thousandth of a newton (or N·m) is nought whatever the terms. */
 const negligible = 1e-3;
 
-function bodyNames({ named }: SetBook, { bodies }: Pick<Step, "bodies">): string {
-  return bodies.map((index) => named.solution.bodies[index]?.name ?? "").join(" with ");
+function bodyName({ named }: SetBook, { bodies, joined }: Pick<Step, "bodies" | "joined">): string {
+  return named.solution.bodies[joined ?? bodies[0] ?? -1]?.name ?? "";
 }
 
-/** What a step stands on: the loads, joints, hinges and earlier steps its equation used; where nothing acts, the load
- *  cases, because it is they that put nothing there. */
-function usesOf({ set, loads, entries }: SetBook, { uses }: Step): readonly string[] {
-  const hinges = set.hinged.hinges.filter(({ name }) => uses.hinges.includes(name));
-  const found = unique([
-    ...uses.loads.flatMap((index) => loads[index]?.from ?? []),
-    ...jointSources(set.hinged, uses.joints),
-    ...hinges.flatMap(({ from }) => from),
+/** What an equation stands on: its loads, the coordinates and hinges in its lever arms, slopes of supports, earlier steps. */
+function usesOf({ set, loads, entries }: SetBook, uses: Step["uses"]): readonly string[] {
+  const { hinged } = set;
+  const own = <T extends { readonly from: Sources }>(list: readonly T[]): readonly string[] =>
+    list.flatMap(({ from }) => from);
+  return unique([
+    ...uses.loads.flatMap((index) => sourcesOfLoad(loads[index], uses.places?.includes(index) !== false)),
+    ...(uses.coordinates === undefined
+      ? jointSources(hinged, uses.joints)
+      : coordinateSources(hinged, uses.coordinates)),
+    ...own(hinged.hinges.filter(({ name }) => uses.hinges.includes(name))),
+    ...own(hinged.supports.filter(({ joint }) => uses.supports?.includes(joint) === true)),
     ...uses.steps.flatMap((index) => entries[index] ?? []),
   ]);
-  return found.length > 0 ? found : set.entries;
 }
 
-function termUses(book: SetBook, closure: Closure): readonly string[] {
-  const loads = closure.terms.flatMap(({ source }) => ("load" in source ? [source.load] : []));
-  const steps = closure.terms.flatMap(({ source }) => ("step" in source ? [source.step] : []));
-  return unique([
-    ...loadSources(loads.flatMap((index) => book.loads[index] ?? [])),
-    ...steps.flatMap((index) => book.entries[index] ?? []),
-  ]);
+/** What a load stands on, without what its place came from where that does not enter. */
+function sourcesOfLoad(load: Load | undefined, withPlace: boolean): Sources {
+  if (load === undefined || withPlace || load.kind === "joint") return load?.from ?? [];
+  return load.fromSize ?? load.from;
 }
 
 function unique(uses: readonly string[]): readonly string[] {

@@ -2,6 +2,7 @@
 
 import { type Placement, placement } from "../inflection/index.ts";
 import { quantity } from "../quantity/index.ts";
+import { memberLoads } from "../results/index.ts";
 import type { Determinacy } from "../results/types.ts";
 import { type Ledger, shownValue, type TableCell } from "../sheet/index.ts";
 import { balance, determinacy } from "../statics/index.ts";
@@ -10,7 +11,7 @@ import type { Hinge, Load, Structure } from "../structure/types.ts";
 import { structureFigure } from "./determinacy.ts";
 import { refuseTooFew, refuseUnbalanced } from "./hinge-faults.ts";
 import { shownAs, sketchBundle } from "./shown.ts";
-import { geometrySources, loadSources, memberSources } from "./sources.ts";
+import { geometrySources, hingeSources, loadSources, memberSources } from "./sources.ts";
 import type { HingeChoice, HingeSet, LoadCase } from "./types.ts";
 import { counted, lengthText, spanPart, structureName } from "./words.ts";
 
@@ -37,17 +38,25 @@ export function recordHinges(
   for (const { loads } of cases) checkLoads(frame, loads);
   const name = cases.map(({ key }) => key).join(" + ");
   const before = determinacy(frame);
-  const placed = withHinges(
-    frame,
-    choices.map(({ member, from, at }) => ({ member, from, at })),
-  );
+  const chosen = placedBy(frame, choices);
+  const places = setPlaces(ledger, name, chosen, choices, frame.hinges.length);
+  const placed = places === choices ? chosen : placedBy(frame, places);
   const after = determinacy(placed);
   refuseTooFew(name, frame, before, after, choices);
   refuseUnbalanced(placed, cases);
   const loads = cases.flatMap((loadCase) => loadCase.loads);
   const own = placed.hinges.slice(frame.hinges.length);
   const judged = own.map((one) => judge(frame, loads, one));
-  const uses = own.map((one, i) => recordHinge(ledger, name, placed, one, choices[i], judged[i]));
+  const uses = own.map((one, i) =>
+    recordHinge(
+      ledger,
+      name,
+      placed,
+      one,
+      { choice: choices[i], before: chosen.hinges[frame.hinges.length + i] },
+      judged[i],
+    ),
+  );
   const hinged: Structure = Object.freeze({
     ...placed,
     hinges: placed.hinges.map((one, i) => {
@@ -59,6 +68,39 @@ export function recordHinges(
   const entries = Object.freeze(cases.map(({ entry }) => entry));
   const set = { name, frame, hinged, cases: Object.freeze([...cases]), determinacy: after, entries };
   return recordVerdict(ledger, set, loads, before);
+}
+
+const placedBy = (frame: Structure, choices: readonly HingeChoice[]): Structure =>
+  withHinges(
+    frame,
+    choices.map(({ member, from, at }) => ({ member, from, at })),
+  );
+
+/** The id of a hinge's assumption; also the name its place is set by from outside. */
+const hingeId = (name: string, set: string): string => `hinge ${name} (${set})`;
+
+/** The choices with the places set from outside; the same choices where none is. */
+function setPlaces(
+  ledger: Ledger,
+  set: string,
+  placed: Structure,
+  choices: readonly HingeChoice[],
+  first: number,
+): readonly HingeChoice[] {
+  const places = choices.map((choice, i) => {
+    const own = placed.hinges[first + i];
+    if (own === undefined) return choice;
+    const written = quantity(distanceFrom(placed, own, choice.from), "length");
+    const at = ledger.setFromOutside(hingeId(own.name, set), written, String(choice.at));
+    return at === written ? choice : { ...choice, at };
+  });
+  return places.every((place, i) => place === choices[i]) ? choices : places;
+}
+
+/** Distance of a hinge from an end joint of its member, m. */
+function distanceFrom(structure: Structure, { member, at }: Hinge, from: string): number {
+  const { start, length } = ends(structure, member);
+  return from === start ? at : length - at;
 }
 
 /** A hinge judged from the nearer end of its member by the range of the isolated span. */
@@ -78,21 +120,24 @@ function recordHinge(
   ledger: Ledger,
   set: string,
   structure: Structure,
-  { name, member, at, from: sources }: Hinge,
-  choice: HingeChoice | undefined,
+  one: Hinge,
+  { choice, before }: { readonly choice: HingeChoice | undefined; readonly before: Hinge | undefined },
   judged: Placement | undefined,
 ): string {
+  const { name, member, from: sources } = one;
   const from = choice?.from ?? "";
-  const { start, length } = ends(structure, member);
-  const distance = from === start ? at : length - at;
+  const { length } = ends(structure, member);
+  const distance = distanceFrom(structure, one, from);
+  const written = before === undefined ? distance : distanceFrom(structure, before, from);
   const place = `${lengthText(distance)} from ${from} (${spanPart(distance / length)})`;
   const entry = ledger.put({
     kind: "assumption",
-    id: `hinge ${name} (${set})`,
-    uses: mergeSources(sources, memberSources(structure, member)),
+    id: hingeId(name, set),
+    uses: mergeSources(sources, hingeSources(structure, one)),
     value: shownValue(quantity(distance, "length")),
     text: `Under ${set} the moment is zero at ${name}, in ${member}, ${place}`,
     because: choice?.because ?? "",
+    ...(written === distance ? {} : { overridden: shownValue(quantity(written, "length")) }),
   });
   const use = `${entry.id}@${entry.version}`;
   if (judged?.inside === false && judged.range !== undefined)
@@ -105,6 +150,12 @@ function recordHinge(
   return use;
 }
 
+/** What the range of an isolated span stands on: the member's length and the loads on it. */
+function rangeSources(structure: Structure, loads: readonly Load[], { member }: Hinge): readonly string[] {
+  const own = memberLoads(structure, loads, member).loads.flatMap((i) => loads[i] ?? []);
+  return mergeSources(memberSources(structure, member), loadSources(own));
+}
+
 function recordRanges(
   ledger: Ledger,
   set: string,
@@ -113,8 +164,9 @@ function recordRanges(
   hinges: readonly Hinge[],
   judged: readonly Placement[],
 ): void {
-  const uses = mergeSources(geometrySources(structure), loadSources(loads));
+  const grounds = hinges.map((one) => rangeSources(structure, loads, one));
   const rows = hinges.map((one, i): readonly TableCell[] => {
+    const uses = grounds[i] ?? [];
     const { from = "", distance = 0, length = 1, range, inside } = judged[i] ?? {};
     const cell = (metres: number, on: readonly string[]): TableCell => {
       const shown = shownValue(quantity(metres, "length"));
@@ -129,7 +181,7 @@ function recordRanges(
   ledger.put({
     kind: "table",
     id: `hinge ranges ${set}`,
-    uses,
+    uses: mergeSources(...grounds, ...hinges.map(({ from }) => from)),
     caption: `Where the moment can be zero under ${set}: isolated span, ends from free to turn to fully held (end fixity as a rotational spring)`,
     columns: ["hinge", "from", "chosen", "least", "greatest", "verdict"],
     rows,

@@ -1,5 +1,6 @@
 // The verbs an engineer calls in a notebook.
 
+export type { DeterminacyOptions } from "./determinacy.ts";
 export type { DiagramOptions } from "./diagrams.ts";
 export { hinge } from "./hinges.ts";
 export type { SupportReaction } from "./reactions.ts";

@@ -2,6 +2,7 @@
 
 import { footing, type Quantity, quantity } from "../quantity/index.ts";
 import {
+  type EquationTerm,
   type FormulaLines,
   type Ledger,
   type ShownValue,
@@ -11,6 +12,7 @@ import {
 } from "../sheet/index.ts";
 import { equilibrium } from "../statics/index.ts";
 import { mergeSources } from "../structure/index.ts";
+import type { Structure } from "../structure/types.ts";
 import { shownAs } from "./shown.ts";
 import { geometrySources, loadSources } from "./sources.ts";
 import type { Hand } from "./types.ts";
@@ -129,10 +131,33 @@ function recordEquilibrium(ledger: Ledger, hand: Hand, reactions: readonly Suppo
       lines: sumLines(tex, shown(ofReactions[key]), shown(ofLoads[key]), shown(all[key])),
       inputs: {},
       closure: true,
+      terms: [
+        ...reactions.flatMap((one) => reactionTerms(hand.frame, all.about, one, key)),
+        { coefficient: 1, value: ofLoads[key] },
+      ],
       passed: Math.abs(all[key]) <= 1e-9 * Math.max(scale, negligible),
       description: `whole structure under ${hand.name}: reactions and loads, ${name.replace("sum ", "Σ")}`,
     });
   }
+}
+
+/** What one support's reactions add to a sum. Moments are taken about a joint; levers in m. */
+function reactionTerms(
+  frame: Structure,
+  about: string,
+  { joint, x, y, moment }: SupportReaction,
+  key: "sumFx" | "sumFy" | "sumM",
+): readonly EquationTerm[] {
+  const term = (coefficient: number, of: Quantity | undefined): readonly EquationTerm[] => {
+    if (of === undefined) return [];
+    const [from, ...more] = of.from;
+    return [{ coefficient, value: of.si, ...(from === undefined || more.length > 0 ? {} : { from }) }];
+  };
+  if (key === "sumFx") return term(1, x);
+  if (key === "sumFy") return term(1, y);
+  const [at, centre] = [joint, about].map((name) => frame.joints.find((one) => one.name === name));
+  const [dx, dy] = [(at?.x ?? 0) - (centre?.x ?? 0), (at?.y ?? 0) - (centre?.y ?? 0)];
+  return [...term(-dy, x), ...term(dx, y), ...term(1, moment)];
 }
 
 /** Sums are judged by the largest force or moment in them, but not finer than this, N or N·m. */

@@ -1,22 +1,27 @@
 // The sheet an engineer works on: the ledger's verbs and those of the structure, each doing one step and recording it.
 
 import type { DiagramsFigure } from "../drawing/index.ts";
+import type { ProbableShape } from "../inflection/index.ts";
 import type { Determinacy } from "../results/types.ts";
 import { type Head, type Ledger, openLedger } from "../sheet/index.ts";
 import type { Load, Structure } from "../structure/types.ts";
-import { recordDeterminacy } from "./determinacy.ts";
+import { type DeterminacyOptions, recordDeterminacy } from "./determinacy.ts";
 import { type DiagramOptions, recordDiagrams } from "./diagrams.ts";
+import { shownByEntries, shownEntry } from "./entries-shown.ts";
 import { recordFreeBodies } from "./free-bodies.ts";
 import { recordHinges } from "./hinges.ts";
 import { recordLoadCase } from "./load-case.ts";
 import { recordReactions, type SupportReaction } from "./reactions.ts";
+import { recordShape } from "./shape.ts";
 import type { Hand, HingeChoice, HingeSet, LoadCase } from "./types.ts";
 
 export interface Sheet extends Ledger {
   /** Degree of static indeterminacy by the trade's count and by the rank of the equilibrium matrix, with a figure. */
-  determinacy(structure: Structure): Determinacy;
+  determinacy(structure: Structure, options?: DeterminacyOptions): Determinacy;
   /** Loads that come and go together, under a short key: loadCase("G", "permanent", uniform("BC", g)). */
   loadCase(key: string, title: string, ...loads: readonly Load[]): LoadCase;
+  /** How the structure probably bends under these load cases, and where its points of inflection probably are: qualitative. */
+  shape(structure: Structure, cases: readonly LoadCase[]): ProbableShape;
   /** Hinges where the moment is probably zero under these load cases; each with its reason and its range. */
   hinges(structure: Structure, cases: readonly LoadCase[], hinges: readonly HingeChoice[]): HingeSet;
   /** The structure cut free at its hinges and solved step by step; the results of several hinge sets are added. */
@@ -42,6 +47,7 @@ const ledgerVerbs = [
   "entry",
   "entries",
   "endCell",
+  "setFromOutside",
   "unusedOverrides",
   "record",
 ] as const satisfies readonly (keyof Ledger)[];
@@ -52,11 +58,14 @@ const ledgerVerbs = [
 export function openSheet(head: Head, options: { readonly figures?: number } = {}): Sheet {
   const ledger = openLedger(head, options);
   const verbs: Partial<Sheet> = {
-    determinacy: (structure) => recordDeterminacy(ledger, structure),
+    determinacy: (structure, given = {}) => recordDeterminacy(ledger, structure, given),
     loadCase: (key, title, ...loads) => recordLoadCase(ledger, key, title, loads),
+    shape: (structure, cases) => recordShape(ledger, structure, cases),
     hinges: (structure, cases, choices) => recordHinges(ledger, structure, cases, choices),
-    freeBodies: (...sets) => recordFreeBodies(ledger, sets),
-    reactions: (hand) => recordReactions(ledger, hand),
+    freeBodies: (...sets) => shownByEntries(ledger, (listening) => recordFreeBodies(listening, sets)),
+    reactions: (hand) => shownByEntries(ledger, (listening) => recordReactions(listening, hand)),
+    note: (text) => shownEntry(ledger.note(text)),
+    conclude: (text) => shownEntry(ledger.conclude(text)),
     diagrams: (hand, given = {}) => recordDiagrams(ledger, hand, given),
   };
   // The ledger keeps its state to itself, so its verbs must be called on it and not on the sheet.

@@ -9,10 +9,19 @@ const displaySymbol: unique symbol = Symbol.for("Jupyter.display") as never;
 
 /** The data frozen, showing itself in a notebook by `bundle`, which is made only when asked for. */
 export function shownAs<T extends object>(data: T, bundle: () => Bundle): T {
-  return Object.freeze(Object.defineProperty({ ...data }, displaySymbol, { value: bundle }));
+  const copy = (Array.isArray(data) ? [...data] : { ...data }) as T;
+  return Object.freeze(Object.defineProperty(copy, displaySymbol, { value: bundle }));
+}
+
+/** A prefix for a figure's ids, the same for the same figure: a notebook page holds many. FNV-1a over its data. */
+export function figurePrefix(spec: object): string {
+  let hash = 0x811c9dc5;
+  for (const character of JSON.stringify(spec))
+    hash = Math.imul(hash ^ (character.codePointAt(0) ?? 0), 0x01000193) >>> 0;
+  return `f${hash.toString(36)}`;
 }
 
 /** A sketch with its words for readers and front ends without pictures. */
 export function sketchBundle(spec: SketchSpec, text: string): Bundle {
-  return { "image/svg+xml": drawSketch(spec, "f"), "text/plain": text };
+  return { "image/svg+xml": drawSketch(spec, figurePrefix(spec)), "text/plain": text };
 }

@@ -81,7 +81,7 @@ export interface Point {
 }
 
 /** An inclined direction forces are summed along: "along BC", "across BC". */
-export interface Direction {
+export interface ForceDirection {
   readonly name: string;
   readonly x: number;
   readonly y: number;
@@ -137,7 +137,7 @@ export interface Step {
   /** The point moments are taken about. */
   readonly about?: Point;
   /** The direction of "sum F". */
-  readonly along?: Direction;
+  readonly along?: ForceDirection;
   /** Where bodies were joined: index into `bodies` of what they are together. */
   readonly joined?: number;
   readonly terms: readonly Term[];
@@ -152,6 +152,8 @@ export interface Step {
    *  and resultants, indices of earlier steps; supports whose angle enters. `joints` are those of `coordinates`. */
   readonly uses: {
     readonly loads: readonly number[];
+    /** Those of the loads whose places along their members enter too. */
+    readonly places?: readonly number[];
     readonly joints: readonly string[];
     readonly coordinates?: readonly { readonly joint: string; readonly axis: "x" | "y" }[];
     readonly steps: readonly number[];
@@ -167,7 +169,7 @@ export interface Closure {
   readonly bodies: readonly number[];
   readonly equation: Step["equation"];
   readonly about?: Point;
-  readonly along?: Direction;
+  readonly along?: ForceDirection;
   readonly terms: readonly Term[];
   /** As a step's; absent for closures of other methods. */
   readonly uses?: Step["uses"];

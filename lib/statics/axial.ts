@@ -1,11 +1,11 @@
 // Straight lines held along their axis at both ends, such as a beam fixed at both: by first-order theory the redundant
 // axial reaction is zero, whatever the stiffness, as long as no load acts along the line.
 
-import { deepFreeze, type Load, type Structure } from "../structure/index.ts";
-import { isAxial } from "./determinacy.ts";
-import { eliminate } from "./elimination.ts";
+import { deepFreeze, type Load, resists, type Structure, type Support } from "../structure/index.ts";
+import { eliminate, rankOf } from "./elimination.ts";
 import { type Equilibrium, equilibriumMatrix, loadVector } from "./equilibrium-matrix.ts";
 import { StaticsError } from "./faults.ts";
+import { areLines, selfStressVectors } from "./self-stress.ts";
 
 export interface Settled {
   /** The structure with the redundant axial holds let go. */
@@ -30,11 +30,14 @@ export function settleAxial(structure: Structure, loads: readonly Load[]): Settl
   return { structure: current, zero, notes: zero.map(({ joint, component }) => noteOf(joint, component)) };
 }
 
-/** Number of states of self-stress when all of them are axial, otherwise zero. */
+/** Number of states of self-stress when all of them are axial force along straight lines, otherwise zero. */
 function axialStates(structure: Structure): number {
   const equilibrium = equilibriumMatrix(structure);
-  const { nullSpace } = eliminate(equilibrium.matrix, equilibrium.unknowns.length);
-  return nullSpace.every((state) => isAxial(equilibrium, state)) ? nullSpace.length : 0;
+  const { matrix, unknowns, equations } = equilibrium;
+  // as many unknowns as independent equations: nothing is redundant, as nearly always here
+  if (unknowns.length === equations && rankOf(matrix, unknowns.length) === equations) return 0;
+  const states = selfStressVectors(equilibrium);
+  return areLines(equilibrium, states) ? states.length : 0;
 }
 
 function nextToRelease(
@@ -43,15 +46,21 @@ function nextToRelease(
 ): { readonly structure: Structure; readonly joint: string; readonly component: "x" | "y" } | undefined {
   for (const support of [...structure.supports].reverse())
     for (const component of ["x", "y"] as const) {
-      if (!support.holds[component]) continue;
-      const supports = structure.supports.map((s) =>
-        s === support ? { ...s, holds: { ...s.holds, [component]: false } } : s,
-      );
+      if (!resists(support, component)) continue;
+      const supports = structure.supports.map((s) => (s === support ? letGo(s, component) : s));
       const released = deepFreeze({ ...structure, supports });
       if (isWeakerByOne(structure, released, redundant))
         return { structure: released, joint: support.joint, component };
     }
   return undefined;
+}
+
+function letGo(support: Support, component: "x" | "y"): Support {
+  const { springs, ...rest } = support;
+  const holds = { ...support.holds, [component]: false };
+  return springs === undefined
+    ? { ...rest, holds }
+    : { ...rest, holds, springs: { ...springs, [component]: 0 } };
 }
 
 /** One state of self-stress less and no motion more. */
@@ -74,10 +83,8 @@ function checkUnloaded(before: Structure, after: Structure, loads: readonly Load
     (u, k) => u.kind === "N" && stressed.has(u.segment) && force(k) > 1e-9 * scale,
   );
   if (!loaded && !loadedAlong(before, loads, equilibrium, stressed)) return;
-  const joints = before.supports.filter(
-    (s, i) => s.holds.x !== after.supports[i]?.holds.x || s.holds.y !== after.supports[i]?.holds.y,
-  );
-  const others = before.supports.filter((s) => !joints.includes(s) && (s.holds.x || s.holds.y));
+  const joints = before.supports.filter((s, i) => s !== after.supports[i]);
+  const others = before.supports.filter((s) => !joints.includes(s) && (resists(s, "x") || resists(s, "y")));
   throw new StaticsError({ kind: "axial", joints: [...others.slice(0, 1), ...joints].map((s) => s.joint) });
 }
 

@@ -10,7 +10,11 @@ import { and } from "./words.ts";
  *  A mechanism that balances the load is never called stable. */
 export function balance(structure: Structure, loads: readonly Load[]): LoadBalance {
   checkLoads(structure, loads);
-  const equilibrium = equilibriumMatrix(structure);
+  return balanceOf(equilibriumMatrix(structure), loads);
+}
+
+/** The same from equations already written. */
+export function balanceOf(equilibrium: Equilibrium, loads: readonly Load[]): LoadBalance {
   const motions = motionsOf(equilibrium);
   const b = loadVector(equilibrium, loads);
   const driven = motions.flatMap((motion) => {

@@ -2,8 +2,8 @@
 
 import type { Action, ForceName, FreeBody, Piece } from "../results/index.ts";
 import { deepFreeze, type Segment } from "../structure/index.ts";
-import { cutForces, hingesOn, pinsOnJoint, pinsOnSegment, pushesAtJoint } from "./acting.ts";
-import { type Cutting, endsOf, isCutFree, joinedAt } from "./cutting.ts";
+import { cutForces, hingesOn, meetingsOnJoint, meetingsOnSegment, pushesAtJoint } from "./acting.ts";
+import { type Cutting, endsOf, isBar, isCutFree, joinedAt, standsAlone } from "./cutting.ts";
 import { type Push, pushesOnSegment } from "./pushes.ts";
 
 export interface Body {
@@ -12,9 +12,19 @@ export interface Body {
   readonly pushes: readonly Push[];
 }
 
-/** Rigid parts between hinges, in the order of the members they begin with. */
+/** Rigid parts between hinges, in the order of the members they begin with, then the joints that stand alone. */
 export function partsBetweenHinges(cut: Cutting): readonly Body[] {
-  const { segments } = cut.skeleton;
+  const alone = cut.structure.joints.filter((j) => standsAlone(cut, j.name));
+  return [
+    ...rigidParts(cut),
+    ...alone.map(({ name }) =>
+      bodyOf([], [name], [...pushesAtJoint(cut, name), ...meetingsOnJoint(cut, name)]),
+    ),
+  ];
+}
+
+function rigidParts(cut: Cutting): readonly Body[] {
+  const segments = cut.skeleton.segments.filter((s) => !isBar(cut, s));
   const group = segments.map((_, i) => i);
   const find = (i: number): number => {
     const up = group[i] ?? i;
@@ -31,11 +41,11 @@ export function partsBetweenHinges(cut: Cutting): readonly Body[] {
       .filter((j) => own.some((s) => joinedAt(cut, s, j.name)))
       .map((j) => j.name);
     const pushes = [
-      ...joints.flatMap((joint) => [...pushesAtJoint(cut, joint), ...pinsOnJoint(cut, joint)]),
+      ...joints.flatMap((joint) => [...pushesAtJoint(cut, joint), ...meetingsOnJoint(cut, joint)]),
       ...own.flatMap((s) => [
         ...hingesOn(cut, s),
-        ...pinsOnSegment(cut, s),
-        ...pushesOnSegment(cut.structure, cut.loads, s),
+        ...meetingsOnSegment(cut, s),
+        ...pushesOnSegment(cut.structure, cut.loads, cut.given, s),
       ]),
     ];
     return bodyOf(own, joints, pushes);
@@ -50,9 +60,10 @@ export function membersAndJoints(cut: Cutting): readonly Body[] {
     seen.add(joint);
     const own = cut.connections.filter((c) => c.joint === joint && c.joined);
     const cuts = own.flatMap((c) => cutForces(cut, c, "joint"));
-    return [bodyOf([], [joint], [...pushesAtJoint(cut, joint), ...pinsOnJoint(cut, joint), ...cuts])];
+    return [bodyOf([], [joint], [...pushesAtJoint(cut, joint), ...meetingsOnJoint(cut, joint), ...cuts])];
   };
   return cut.skeleton.segments.flatMap((s) => {
+    if (isBar(cut, s)) return [];
     const ends = endsOf(cut, s);
     const kept = ends.filter((c) => c.joined && !isCutFree(cut, c.joint)).map((c) => c.joint);
     const cuts = ends
@@ -62,8 +73,8 @@ export function membersAndJoints(cut: Cutting): readonly Body[] {
       ...kept.flatMap((joint) => pushesAtJoint(cut, joint)),
       ...cuts,
       ...hingesOn(cut, s),
-      ...pinsOnSegment(cut, s),
-      ...pushesOnSegment(cut.structure, cut.loads, s),
+      ...meetingsOnSegment(cut, s),
+      ...pushesOnSegment(cut.structure, cut.loads, cut.given, s),
     ];
     const before = ends.filter((c) => c.end === "start").flatMap((c) => jointBody(c.joint));
     const after = ends.filter((c) => c.end === "end").flatMap((c) => jointBody(c.joint));
@@ -87,6 +98,16 @@ export function freeBody(name: string, body: Body, found: (force: string) => num
     return value === undefined ? action : { ...action, value };
   });
   return deepFreeze({ name, pieces: body.pieces, joints: body.joints, actions });
+}
+
+/** Several bodies put together: the forces between them are inner ones, and bars between their joints belong to them. */
+export function joinedBody(cut: Cutting, bodies: readonly Body[], outer: readonly Push[]): Body {
+  const joints = bodies.flatMap((body) => body.joints);
+  const bars = cut.skeleton.segments.filter(
+    (s) => isBar(cut, s) && endsOf(cut, s).every((c) => joints.includes(c.joint)),
+  );
+  const pieces = bars.map(({ member, begin, end }) => ({ member, begin, end }));
+  return { pieces: [...bodies.flatMap((body) => body.pieces), ...pieces], joints, pushes: outer };
 }
 
 function bodyOf(segments: readonly Segment[], joints: readonly string[], pushes: readonly Push[]): Body {

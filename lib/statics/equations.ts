@@ -1,13 +1,20 @@
 // Equations of equilibrium of a body, or of several joined.
 
-import type { Closure, Point, Step, Term } from "../results/index.ts";
+import type { Closure, ForceDirection, Point, Step, Term } from "../results/index.ts";
 import type { Body } from "./bodies.ts";
-import type { Push, Stands } from "./pushes.ts";
+import type { Place } from "./place.ts";
+import type { Push } from "./pushes.ts";
 
 /** A point to take moments about, with what its place stands on. */
 export interface Anchor {
   readonly point: Point;
-  readonly place: Stands;
+  readonly place: Place;
+}
+
+/** An inclined direction to sum forces along, with the member or support it goes with. */
+export interface Slope {
+  readonly direction: ForceDirection;
+  readonly line: NonNullable<Push["line"]>;
 }
 
 /** One push with its coefficient in an equation. */
@@ -21,8 +28,11 @@ export interface Equation {
   readonly bodies: readonly number[];
   readonly kind: Step["equation"];
   readonly about?: Anchor;
+  readonly along?: Slope;
   /** Only those with a coefficient; forces between joined bodies cancel and are left out. */
   readonly entries: readonly Entry[];
+  /** All that acts, with a coefficient or without. */
+  readonly pushes: readonly Push[];
 }
 
 /** A force found, and the index of the step that found it. */
@@ -38,18 +48,53 @@ export function equationsOf(
   size: number,
 ): readonly Equation[] {
   const pushes = actingOn(bodies, joined);
-  const write = (kind: Step["equation"], about?: Anchor): Equation => {
-    const entries = pushes.flatMap((push) => {
-      const coefficient = coefficientOf(push, kind, about, size);
-      return coefficient === 0 ? [] : [{ push, coefficient }];
-    });
-    return about === undefined ? { bodies: joined, kind, entries } : { bodies: joined, kind, about, entries };
-  };
   return [
-    ...anchorsOf(bodies, joined).map((about) => write("sum M", about)),
-    write("sum Fy"),
-    write("sum Fx"),
+    ...anchorsOf(pushes).map((about) => momentEquation(joined, pushes, about, size)),
+    forceEquation(joined, pushes, "sum Fy"),
+    forceEquation(joined, pushes, "sum Fx"),
   ];
+}
+
+/** ΣM about a point. */
+export function momentEquation(
+  joined: readonly number[],
+  pushes: readonly Push[],
+  about: Anchor,
+  size: number,
+): Equation {
+  const entries = entriesOf(pushes, (push) => {
+    const lever = leverOf(push, about.point);
+    return push.action.turn === 0 && Math.abs(lever) < 1e-12 * size ? 0 : lever;
+  });
+  return { bodies: joined, kind: "sum M", about, entries, pushes };
+}
+
+/** ΣFx, ΣFy, or ΣF along a slope. */
+export function forceEquation(
+  joined: readonly number[],
+  pushes: readonly Push[],
+  kind: "sum Fx" | "sum Fy" | "sum F",
+  along?: Slope,
+): Equation {
+  const { x, y } = along?.direction ?? (kind === "sum Fx" ? { x: 1, y: 0 } : { x: 0, y: 1 });
+  const entries = entriesOf(pushes, ({ action: { direction } }) => {
+    const part = direction[0] * x + direction[1] * y;
+    return Math.abs(part) < 1e-12 ? 0 : part;
+  });
+  return { bodies: joined, kind, ...(along === undefined ? {} : { along }), entries, pushes };
+}
+
+/** Coefficient of a push in the sum of moments about a point. */
+export function leverOf({ action: { at, direction, turn } }: Push, about: Point): number {
+  if (turn !== 0) return turn;
+  return (at.x - about.x) * direction[1] - (at.y - about.y) * direction[0];
+}
+
+function entriesOf(pushes: readonly Push[], coefficient: (push: Push) => number): readonly Entry[] {
+  return pushes.flatMap((push) => {
+    const found = coefficient(push);
+    return found === 0 ? [] : [{ push, coefficient: found }];
+  });
 }
 
 /** Names of the forces on the joined bodies, inner ones left out. */
@@ -86,58 +131,53 @@ export function termsOf(
   });
 }
 
-/** What an equation stands on: loads, joints and hinges whose position enters, steps that found its forces. */
-export function usesOf(equation: Equation, terms: readonly Term[]): Step["uses"] {
-  const moments = equation.kind === "sum M";
-  const stands = [
-    ...(equation.about === undefined ? [] : [equation.about.place]),
-    ...equation.entries.flatMap(({ push }) =>
-      moments && push.action.turn === 0 ? [push.place, push.size] : [push.size],
-    ),
-  ];
-  const leverless = equation.entries.every(({ push }) => push.action.turn !== 0);
-  const counted = moments && leverless ? [] : stands;
-  return {
-    loads: ascending(terms.flatMap((t) => ("load" in t.source ? [t.source.load] : []))),
-    joints: unique(counted.flatMap((s) => s.joints)),
-    steps: ascending(terms.flatMap((t) => ("force" in t.source ? [t.source.step] : []))),
-    hinges: unique(counted.flatMap((s) => s.hinges)),
-  };
+/** "beam between h1 and h2: sum M about h1". */
+export function equationId({ bodies, kind, about, along }: Equation, nameOf: NameOf): string {
+  const of = about === undefined ? "" : ` about ${about.point.name}`;
+  return `${nameOf(bodies)}: ${kind}${of}${along === undefined ? "" : ` ${along.direction.name}`}`;
 }
 
-/** "beam between h1 and h2: sum M about h1". */
-export function equationId(equation: Equation, names: readonly string[]): string {
-  const about = equation.about === undefined ? "" : ` about ${equation.about.point.name}`;
-  return `${equation.bodies.map((i) => names[i] ?? "").join(" + ")}: ${equation.kind}${about}`;
-}
+/** What bodies are called, alone or joined. */
+export type NameOf = (bodies: readonly number[]) => string;
 
 /** An equation left over, with its sum. */
 export function closureOf(
   equation: Equation,
   known: ReadonlyMap<string, Found>,
-  names: readonly string[],
+  nameOf: NameOf,
+  uses: Step["uses"],
 ): Closure {
   const terms = termsOf(equation, known);
   const parts = terms.map((t) => t.coefficient * t.value);
   return {
-    id: equationId(equation, names),
+    id: equationId(equation, nameOf),
     bodies: equation.bodies,
     equation: equation.kind,
-    ...(equation.about === undefined ? {} : { about: equation.about.point }),
+    ...writtenFor(equation),
     terms,
+    uses,
     sum: parts.reduce((sum, part) => sum + part, 0),
     scale: Math.max(0, ...parts.map(Math.abs)),
   };
 }
 
+/** The point or the direction of an equation, as answers carry it. */
+export function writtenFor({ about, along }: Equation): Pick<Step, "about" | "along"> {
+  return {
+    ...(about === undefined ? {} : { about: about.point }),
+    ...(along === undefined ? {} : { along: along.direction }),
+  };
+}
+
 /** All pushes on the joined bodies but the forces that act on two of them, equal and opposite. */
-function actingOn(bodies: readonly Body[], joined: readonly number[]): readonly Push[] {
+export function actingOn(bodies: readonly Body[], joined: readonly number[]): readonly Push[] {
   const pushes = joined.flatMap((i) => bodies[i]?.pushes ?? []);
+  if (joined.length === 1) return pushes;
   const times = new Map<string, number>();
   for (const { force } of pushes)
     if (force !== undefined) times.set(force.name, (times.get(force.name) ?? 0) + 1);
   const outer = pushes.filter(({ force }) => force === undefined || times.get(force.name) === 1);
-  return joined.length === 1 ? outer : withWholeLoads(outer);
+  return withWholeLoads(outer);
 }
 
 /** Parts of one spread load on neighbouring bodies put together again, as a person would take them on the joined body. */
@@ -158,46 +198,15 @@ function together(one: Push, other: Push): Push {
   const at = { name: a.name, x: (P * a.x + Q * b.x) / (P + Q), y: (P * a.y + Q * b.y) / (P + Q) };
   return {
     action: { ...one.action, at, value: P + Q },
-    place: outside(one.place, other.place),
-    size: outside(one.size, other.size),
+    place: one.place,
+    parts: [...(one.parts ?? [one]), ...(other.parts ?? [other])],
   };
 }
 
-/** The hinge between two parts no longer matters to the whole. */
-function outside(one: Stands, other: Stands): Stands {
-  const hinges = [...one.hinges, ...other.hinges].filter(
-    (h) => !(one.hinges.includes(h) && other.hinges.includes(h)),
-  );
-  return { joints: unique([...one.joints, ...other.joints]), hinges };
-}
-
 /** The named points of the bodies, left to right, then bottom to top. */
-function anchorsOf(bodies: readonly Body[], joined: readonly number[]): readonly Anchor[] {
+function anchorsOf(pushes: readonly Push[]): readonly Anchor[] {
   const anchors = new Map<string, Anchor>();
-  for (const { force, action, place } of actingOn(bodies, joined))
+  for (const { force, action, place } of pushes)
     if (force !== undefined) anchors.set(action.at.name, { point: action.at, place });
   return [...anchors.values()].sort((a, b) => a.point.x - b.point.x || a.point.y - b.point.y);
-}
-
-function coefficientOf(
-  { action }: Push,
-  kind: Step["equation"],
-  about: Anchor | undefined,
-  size: number,
-): number {
-  const [dx, dy] = action.direction;
-  if (kind === "sum Fx") return Math.abs(dx) < 1e-12 ? 0 : dx;
-  if (kind === "sum Fy") return Math.abs(dy) < 1e-12 ? 0 : dy;
-  if (about === undefined) return 0;
-  if (action.turn !== 0) return action.turn;
-  const lever = (action.at.x - about.point.x) * dy - (action.at.y - about.point.y) * dx;
-  return Math.abs(lever) < 1e-12 * size ? 0 : lever;
-}
-
-function unique<T>(values: readonly T[]): readonly T[] {
-  return [...new Set(values)];
-}
-
-function ascending(indices: readonly number[]): readonly number[] {
-  return [...unique(indices)].sort((a, b) => a - b);
 }

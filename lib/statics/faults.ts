@@ -13,7 +13,6 @@ export type StaticsFault =
       readonly hinges: number;
     }
   | { readonly kind: "self-stress in a mechanism"; readonly words: string }
-  | { readonly kind: "out of reach"; readonly what: string }
   | { readonly kind: "differs"; readonly what: string; readonly sequence: number; readonly whole: number };
 
 /** An error of the statics; `fault` holds the data the words were made from. */
@@ -37,8 +36,6 @@ function wordsOf(fault: StaticsFault): string {
       return `the structure with ${hingesText(fault.hinges)} does not balance this load: ${fault.words}; take a hinge out or treat the load by another method`;
     case "self-stress in a mechanism":
       return `the free bodies have no single answer: ${fault.words}`;
-    case "out of reach":
-      return `${fault.what}, which the free bodies do not know; use supports along x and y and releases of moment`;
     case "differs":
       return `internal check failed: ${fault.what} is ${fault.sequence} by free bodies and ${fault.whole} by the whole structure; please report this structure`;
   }

@@ -14,7 +14,8 @@ import {
 import { axisOf, deepFreeze, type Member } from "../structure/index.ts";
 import { type Cutting, isCutFree } from "./cutting.ts";
 import type { Found } from "./equations.ts";
-import { cutForce, pinForce, reactionForce } from "./force-names.ts";
+import { barForce, cutForce, pinForce, reactionForce } from "./force-names.ts";
+import { restraintsOf } from "./restraints.ts";
 
 /** The force functions of every member, in the structure's order. */
 export function memberForces(cut: Cutting, known: ReadonlyMap<string, Found>): readonly MemberForces[] {
@@ -68,24 +69,42 @@ function startForces(cut: Cutting, known: ReadonlyMap<string, Found>, member: Me
     if (found !== undefined) uses.add(found.step);
     return found?.value ?? 0;
   };
+  const start = unlisted(cut, member, value);
+  return { ...start, uses: [...uses].sort((a, b) => a - b) };
+}
+
+function unlisted(
+  cut: Cutting,
+  member: Member,
+  value: (force: { readonly name: string }) => number,
+): Omit<Start, "uses"> {
   const joint = member.start;
   const connection = cut.connections.find((c) => c.member === member.name && c.end === "start");
+  if (connection === undefined) throw new Error(`member ${member.name} has no start`);
   const { c, s } = axisOf(cut.structure, member);
-  const turned = (fx: number, fy: number, couple: number): Start => ({
+  const turned = (fx: number, fy: number, couple: number): Omit<Start, "uses"> => ({
     N: -(fx * c + fy * s) + 0,
     V: -fx * s + fy * c,
     M: -couple + 0,
-    uses: [...uses].sort((a, b) => a - b),
   });
-  if (connection !== undefined && !connection.joined)
+  const { joined, bar, moment, shear, axial } = connection;
+  if (bar) return { N: value(barForce(member.name)), V: 0, M: 0 };
+  if (!joined && !moment && shear && axial)
     return turned(value(pinForce(member.name, joint, "x")), value(pinForce(member.name, joint, "y")), 0);
-  if (isCutFree(cut, joint)) {
+  if (!joined || isCutFree(cut, joint)) {
     const [N, V, M] = (["N", "V", "M"] as const).map((letter) => value(cutForce(member.name, joint, letter)));
-    return { N: N ?? 0, V: V ?? 0, M: M ?? 0, uses: [...uses].sort((a, b) => a - b) };
+    return { N: N ?? 0, V: V ?? 0, M: M ?? 0 };
   }
-  const atJoint = cut.loads.filter((load) => load.kind === "joint").filter((load) => load.joint === joint);
-  const x = atJoint.reduce((total, load) => total + load.fx, value(reactionForce(joint, "x")));
-  const y = atJoint.reduce((total, load) => total + load.fy, value(reactionForce(joint, "y")));
-  const couple = atJoint.reduce((total, load) => total + load.couple, value(reactionForce(joint, "M")));
+  let [x, y, couple] = [0, 0, 0];
+  for (const load of cut.loads) {
+    if (load.kind !== "joint" || load.joint !== joint) continue;
+    [x, y, couple] = [x + load.fx, y + load.fy, couple + load.couple];
+  }
+  for (const { joint: at, component, direction } of restraintsOf(cut.structure)) {
+    if (at !== joint) continue;
+    const force = value(reactionForce(joint, component));
+    if (direction === undefined) couple += force;
+    else [x, y] = [x + force * direction[0], y + force * direction[1]];
+  }
   return turned(x, y, couple);
 }

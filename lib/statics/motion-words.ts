@@ -61,7 +61,7 @@ function partWords(
     hingeSideWords(
       points.filter((p) => !isJoint(p) && Math.abs(p.ux) > still && isInColumn(structure, p.name)),
     ),
-    sways ? "" : foldWords(structure, turns),
+    sways ? "" : foldWords(structure, points, turns),
   ].filter((w) => w !== "");
   if (words.length === 0) return turningWords(turns);
   return (sways ? "sway: " : "") + words.join(", ");
@@ -130,7 +130,7 @@ function hingeSideWords(points: readonly Moved[]): string {
   return `${and(points.map((p) => p.name))} ${points.length === 1 ? "moves" : "move"} sideways`;
 }
 
-function foldWords(structure: Structure, turns: readonly Turn[]): string {
+function foldWords(structure: Structure, points: readonly Moved[], turns: readonly Turn[]): string {
   const folds = structure.hinges.filter((hinge) => {
     const before = turns.find((t) => t.member === hinge.member && t.end === hinge.at);
     const after = turns.find((t) => t.member === hinge.member && t.begin === hinge.at);
@@ -139,7 +139,10 @@ function foldWords(structure: Structure, turns: readonly Turn[]): string {
   });
   if (folds.length === 0) return "";
   const nouns = [...new Set(folds.map((h) => nounOf(structure, h.member)))];
-  return nouns.length === 1 ? `the ${nouns[0]} folds there` : "the members fold there";
+  const moves = (name: string): boolean =>
+    points.some((p) => p.name === name && Math.hypot(p.ux, p.uy) > still);
+  const where = folds.every((h) => moves(h.name)) ? "there" : `at ${and(folds.map((h) => h.name))}`;
+  return nouns.length === 1 ? `the ${nouns[0]} folds ${where}` : `the members fold ${where}`;
 }
 
 function isInColumn(structure: Structure, hinge: string): boolean {

@@ -1,10 +1,11 @@
-// What acts on a body: an action, with the joints and hinges its place and its size stand on.
+// What acts on a body: an action, with what its place, its size and its direction stand on.
 
 import type { Action, ForceName, Point } from "../results/index.ts";
 import {
   axisOf,
   type DistributedLoad,
   type Load,
+  type Place as LoadPlace,
   type MemberPointLoad,
   memberNamed,
   metresAlong,
@@ -14,36 +15,40 @@ import {
   snapToEnds,
 } from "../structure/index.ts";
 import { isWithin } from "./equilibrium-matrix.ts";
-
-export interface Stands {
-  readonly joints: readonly string[];
-  readonly hinges: readonly string[];
-}
+import type { Place, Stop } from "./place.ts";
 
 export interface Push {
   readonly action: Action;
   /** Absent for a load. */
   readonly force?: ForceName;
-  /** What the point of action stands on. */
-  readonly place: Stands;
-  /** What the size (of a load's resultant) or the direction (of an inclined force) stands on. */
-  readonly size: Stands;
+  readonly place: Place;
+  /** The stretch a spread load's resultant stands on, and the projection its intensity is per metre of. */
+  readonly stretch?: Stretch;
+  /** The member, or the support, a force's direction goes with. */
+  readonly line?: { readonly member: string } | { readonly support: string };
+  /** The parts of a spread load put together again on joined bodies. */
+  readonly parts?: readonly Push[];
 }
 
-export const nothing: Stands = Object.freeze({ joints: Object.freeze([]), hinges: Object.freeze([]) });
+export interface Stretch {
+  readonly member: string;
+  readonly from: Stop;
+  readonly to: Stop;
+  readonly per?: "horizontal" | "vertical";
+}
 
 /** A force or couple known by name; `sense` is its direction, or its turn. */
 export function forcePush(
   force: ForceName,
   at: Point,
   sense: Action["direction"] | 1 | -1,
-  place: Stands,
-  size: Stands = nothing,
+  place: Place,
+  line?: Push["line"],
 ): Push {
   const couple = typeof sense === "number";
   const source = { force: force.name };
   const action: Action = { at, direction: couple ? [0, 0] : sense, turn: couple ? sense : 0, source };
-  return { action, force, place, size };
+  return line === undefined ? { action, force, place } : { action, force, place, line };
 }
 
 /** Force components and couple of one load at a point; those that are zero are left out, senses are true. */
@@ -52,12 +57,11 @@ export function loadPushes(
   at: Point,
   force: readonly [number, number],
   couple: number,
-  place: Stands,
+  place: Place,
 ): Push[] {
   const put = (direction: readonly [number, number], turn: 0 | 1 | -1, value: number): Push => ({
     action: { at, direction, turn, source: { load }, value },
     place,
-    size: nothing,
   });
   const [fx, fy] = force;
   return [
@@ -67,17 +71,20 @@ export function loadPushes(
   ];
 }
 
-/** The loads between the ends of a segment, those spread along it by their resultants on this segment. */
+/** The loads between the ends of a segment, those spread along it by their resultants on this segment. `given` are the
+ *  same loads before they were brought to global axes. */
 export function pushesOnSegment(
   structure: Structure,
   loads: readonly Load[],
+  given: readonly Load[],
   segment: Segment,
 ): readonly Push[] {
   return loads.flatMap((load, i) => {
     if (load.kind === "joint" || load.member !== segment.member) return [];
-    return load.kind === "distributed"
-      ? spreadPushes(structure, load, i, segment)
-      : pointPushes(structure, load, i, segment);
+    if (load.kind === "member point") return pointPushes(structure, load, i, segment);
+    const before = given[i];
+    const per = before?.kind === "distributed" ? before.per : undefined;
+    return spreadPushes(structure, load, i, segment, per);
   });
 }
 
@@ -91,7 +98,8 @@ function pointPushes(
   const x = snapToEnds(metresAlong(load.at, axis.length), axis.length);
   if (!isWithin(x, segment.begin, segment.end, axis.length)) return [];
   const at = loadPoint(axis, x, i, load.member);
-  return loadPushes(i, at, [load.fx, load.fy], load.couple, memberEnds(structure, load.member));
+  const place = { member: load.member, at: [{ stop: stopOf(load.at, `${i}`), weight: 1 }] };
+  return loadPushes(i, at, [load.fx, load.fy], load.couple, place);
 }
 
 /** A trapezoid of load, cut by the segment; where it changes sign, the two triangles are taken apart. */
@@ -100,6 +108,7 @@ function spreadPushes(
   load: DistributedLoad,
   i: number,
   segment: Segment,
+  per: Stretch["per"],
 ): readonly Push[] {
   const axis = axisOf(structure, memberNamed(structure, load.member, "load"));
   const begin = snapToEnds(metresAlong(load.begin, axis.length), axis.length);
@@ -108,42 +117,38 @@ function spreadPushes(
   if (b - a <= 1e-9 * axis.length) return [];
   const q = (x: number): number => load.q1 + ((load.q2 - load.q1) * (x - begin)) / (end - begin);
   const [qa, qb] = [q(a), q(b)];
-  const middle = qa * qb < 0 ? [a + ((b - a) * qa) / (qa - qb)] : [];
-  const ends = memberEnds(structure, load.member);
-  const hinges = hingesBounding(structure, segment, begin, end);
-  const place = { joints: ends.joints, hinges };
-  const measured = "metres" in load.begin && "metres" in load.end && hinges.length === 0;
-  const stops = [a, ...middle, b];
-  return stops.slice(0, -1).flatMap((from, k) => {
-    const to = stops[k + 1] ?? from;
+  const from = a > begin ? hingeStop(structure, segment, a) : stopOf(load.begin, `${i} begin`);
+  const to = b < end ? hingeStop(structure, segment, b) : stopOf(load.end, `${i} end`);
+  const stops = qa * qb < 0 ? [a, a + ((b - a) * qa) / (qa - qb), b] : [a, b];
+  return stops.slice(0, -1).flatMap((left, k) => {
+    const right = stops[k + 1] ?? left;
     const [q1, q2] = [k === 0 ? qa : 0, k === stops.length - 2 ? qb : 0];
-    const resultant = ((q1 + q2) / 2) * (to - from);
+    const resultant = ((q1 + q2) / 2) * (right - left);
     if (resultant === 0) return [];
-    const x = from + ((to - from) * (q1 + 2 * q2)) / (3 * (q1 + q2));
+    const x = left + ((right - left) * (q1 + 2 * q2)) / (3 * (q1 + q2));
+    const weight = (x - a) / (b - a);
     const sense = Math.sign(resultant);
     const direction = [load.direction[0] * sense + 0, load.direction[1] * sense + 0] as const;
     const at = loadPoint(axis, x, i, load.member);
     const action: Action = { at, direction, turn: 0, source: { load: i }, value: Math.abs(resultant) };
-    return [{ action, place, size: measured ? nothing : place }];
+    const places = [
+      { stop: from, weight: 1 - weight },
+      { stop: to, weight },
+    ];
+    const stretch = { member: load.member, from, to, ...(per === undefined ? {} : { per }) };
+    return [{ action, place: { member: load.member, at: places }, stretch }];
   });
 }
 
-function hingesBounding(
-  structure: Structure,
-  segment: Segment,
-  begin: number,
-  end: number,
-): readonly string[] {
-  return structure.hinges
-    .filter((h) => h.member === segment.member)
-    .filter((h) => (h.at === segment.begin && h.at > begin) || (h.at === segment.end && h.at < end))
-    .map((h) => h.name);
+function stopOf(place: LoadPlace, load: string): Stop {
+  return "fraction" in place ? { part: place.fraction } : { from: "start", metres: place.metres, load };
 }
 
-/** What a place along a member stands on: both its joints. */
-export function memberEnds(structure: Structure, member: string): Stands {
-  const { start, end } = memberNamed(structure, member, "load");
-  return { joints: [start, end], hinges: [] };
+function hingeStop({ hinges }: Structure, { member, begin, end }: Segment, at: number): Stop {
+  const found = hinges.find((h) => h.member === member && h.at === at);
+  if (found === undefined)
+    throw new Error(`no hinge at ${at} m of ${member}, which is cut from ${begin} to ${end} m`);
+  return { hinge: found.name };
 }
 
 function loadPoint(axis: Parameters<typeof pointOn>[0], x: number, load: number, member: string): Point {

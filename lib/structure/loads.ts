@@ -7,7 +7,7 @@ import { StructureError } from "./faults.ts";
 import { deepFreeze } from "./freeze.ts";
 import { type Along, readPlace } from "./place.ts";
 import { mergeSources } from "./sources.ts";
-import type { DistributedLoad, JointLoad, MemberPointLoad } from "./types.ts";
+import type { DistributedLoad, JointLoad, MemberPointLoad, Sources } from "./types.ts";
 
 export type Direction = "down" | "up" | "left" | "right";
 
@@ -88,7 +88,7 @@ function lineLoad(
     ...directed(direction, member),
     ...(per === undefined ? {} : { per }),
     label,
-    from: mergeSources(q1.from, q2.from, begin.from, end.from),
+    ...sourcesOf(mergeSources(q1.from, q2.from), mergeSources(begin.from, end.from)),
   });
 }
 
@@ -114,7 +114,6 @@ export function pointLoad(
     direction: [x, y],
     ...axes
   } = directed(direction, member);
-  const from = mergeSources(force.from, place.from);
   return deepFreeze({
     kind: "member point",
     member,
@@ -124,7 +123,7 @@ export function pointLoad(
     ...axes,
     couple: 0,
     label,
-    from,
+    ...sourcesOf(force.from, place.from),
   });
 }
 
@@ -136,7 +135,6 @@ export function coupleLoad(
 ): MemberPointLoad {
   const couple = readMeasure(C, "moment", `couple on ${member}`);
   const place = readPlace(at, `couple on ${member}`);
-  const from = mergeSources(couple.from, place.from);
   return deepFreeze({
     kind: "member point",
     member,
@@ -145,7 +143,7 @@ export function coupleLoad(
     fy: 0,
     couple: couple.si,
     label,
-    from,
+    ...sourcesOf(couple.from, place.from),
   });
 }
 
@@ -190,6 +188,11 @@ export function atJoint(joint: string, forces: JointForces): JointLoad {
     label: forces.label ?? texts.join(", "),
     from: mergeSources(...given.map((g) => g.force.from), couple?.from ?? []),
   });
+}
+
+/** Sources of a load, with those of its size apart where its place has some of its own. */
+function sourcesOf(size: Sources, place: Sources): { readonly fromSize?: Sources; readonly from: Sources } {
+  return place.length === 0 ? { from: size } : { fromSize: size, from: mergeSources(size, place) };
 }
 
 function directed(

@@ -49,6 +49,7 @@ const release = record({ moment: flag }, { shear: flag, axial: flag });
 const section = record({ A: positive, I: positive, E: positive }, { alpha: number, depth: positive });
 const direction: Schema = { type: "array", items: number, minItems: 2, maxItems: 2 };
 const words = { label: text, from: sources };
+const sized = { ...words, fromSize: sources };
 
 const loads: readonly Schema[] = [
   record(
@@ -61,11 +62,11 @@ const loads: readonly Schema[] = [
       q2: number,
       direction,
     },
-    { axes: { const: "member" }, per: { enum: ["horizontal", "vertical"] }, ...words },
+    { axes: { const: "member" }, per: { enum: ["horizontal", "vertical"] }, ...sized },
   ),
   record(
     { kind: { const: "member point" }, member: text, at: place, fx: number, fy: number, couple: number },
-    { axes: { const: "member" }, ...words },
+    { axes: { const: "member" }, ...sized },
   ),
   record({ kind: { const: "joint" }, joint: text, fx: number, fy: number, couple: number }, words),
   record({ kind: { const: "temperature" }, member: text, uniform: number, difference: number }, words),

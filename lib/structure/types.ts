@@ -86,6 +86,7 @@ export type Place = { readonly metres: number } | { readonly fraction: number };
 
 /** Load spread over part of a member, N per metre of member, varying linearly from `q1` at `begin` to `q2` at `end`;
  *  `direction` is a unit vector in global axes along which q is positive (gravity: [0, -1]).
+ *  `fromSize` is the part of `from` that the intensity came from, where it is known apart from the places.
  *  With `axes: "member"` the direction is given as [along, towards the left of the walk]; with `per` q is per metre of
  *  the member's projection on the horizontal or the vertical (see `inGlobalAxes`). */
 export interface DistributedLoad {
@@ -99,10 +100,11 @@ export interface DistributedLoad {
   readonly axes?: "member";
   readonly per?: "horizontal" | "vertical";
   readonly label: string;
+  readonly fromSize?: Sources;
   readonly from: Sources;
 }
 
-/** Force (fx, fy) in N and couple in N·m at one place of a member; with `axes: "member"` fx acts along the member
+/** Force (fx, fy) in N and couple in N·m at one place of a member, `fromSize` as for a line load; with `axes: "member"` fx acts along the member
  *  and fy towards the left of the walk. */
 export interface MemberPointLoad {
   readonly kind: "member point";
@@ -113,6 +115,7 @@ export interface MemberPointLoad {
   readonly axes?: "member";
   readonly couple: number;
   readonly label: string;
+  readonly fromSize?: Sources;
   readonly from: Sources;
 }
 

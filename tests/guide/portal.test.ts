@@ -1,5 +1,7 @@
 // The whole chain on a pinned portal, in the library alone.
+
 import { afterEach, beforeEach, describe, expect, test } from "vitest";
+import { drawSketch, type SelfStressFigure } from "../../lib/drawing/index.ts";
 import { type Hand, type HingeSet, hinge, openSheet, type Sheet } from "../../lib/guide/index.ts";
 import { attachHost, forgetLedger } from "../../lib/sheet/index.ts";
 import type { Entry } from "../../lib/sheet/record.ts";
@@ -64,6 +66,33 @@ describe("sheet.determinacy(pinned portal)", () => {
       "3m + r − 3j − c = 9 + 4 − 12 − 0 = 1",
     ]);
     expect(ofKind(sheet, "figure").map(({ uses }) => uses)).toEqual([["h@1", "L@1"]]);
+  });
+});
+
+describe("sheet.shape and states of self-stress", () => {
+  test("the pinned portal under gravity: two points of inflection in the beam, none in the columns, labelled qualitative", () => {
+    const { sheet, frame } = started();
+    const G = sheet.loadCase("G", "gravity", uniform("BC", "12 kN/m"));
+    const found = sheet.shape(frame, [G]);
+    expect(found.label).toBe("qualitative");
+    expect(found.members.map(({ member, inflections }) => [member, inflections.length])).toEqual([
+      ["AB", 0],
+      ["BC", 2],
+      ["CD", 0],
+    ]);
+    const [figure] = ofKind(sheet, "figure");
+    expect(figure?.caption).toContain("qualitative");
+    const table = ofKind(sheet, "table").find(({ id }) => id === "probable points of inflection G");
+    expect(table?.rows.map(([member]) => member)).toEqual(["BC", "BC"]);
+    expect(() => sheet.shape(frame, [])).toThrow(/no load case/);
+  });
+
+  test("determinacy draws the state of self-stress when asked", () => {
+    const { sheet, frame } = started();
+    sheet.determinacy(frame, { selfStress: true });
+    const drawn = ofKind(sheet, "figure").filter(({ spec }) => spec.kind === "self-stress");
+    expect(drawn.map(({ id }) => id)).toEqual(["figure self-stress 1 of frame ABCD"]);
+    expect(drawSketch(drawn[0]?.spec as SelfStressFigure, "f")).toContain("<svg");
   });
 });
 

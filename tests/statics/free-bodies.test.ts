@@ -138,15 +138,42 @@ describe("freeBodies: what a step stands on", () => {
   const uses = (unknown: string): unknown => solution.steps.find((s) => s.unknown === unknown)?.uses;
 
   it("the suspended part stands on its load, its ends and nothing else", () => {
-    expect(uses("h2_y")).toEqual({ loads: [0], joints: ["B", "C"], hinges: ["h1", "h2"], steps: [] });
+    expect(uses("h2_y")).toEqual({
+      loads: [0],
+      places: [],
+      joints: ["B", "C"],
+      coordinates: [
+        { joint: "B", axis: "x" },
+        { joint: "C", axis: "x" },
+      ],
+      hinges: ["h1", "h2"],
+      steps: [],
+    });
   });
 
   it("a column stands on the joint load above it, the load on its arm and the step before", () => {
-    expect(uses("A_y")).toEqual({ loads: [0, 1], joints: ["B", "C"], hinges: ["h1"], steps: [1] });
+    expect(uses("A_y")).toEqual({
+      loads: [0, 1],
+      places: [],
+      joints: ["B", "C"],
+      coordinates: [
+        { joint: "B", axis: "x" },
+        { joint: "C", axis: "x" },
+      ],
+      hinges: ["h1"],
+      steps: [1],
+    });
   });
 
   it("a sum of forces without spread load stands on no geometry", () => {
-    expect(uses("A_x")).toEqual({ loads: [], joints: [], hinges: [], steps: [2] });
+    expect(uses("A_x")).toEqual({
+      loads: [],
+      places: [],
+      joints: [],
+      coordinates: [],
+      hinges: [],
+      steps: [2],
+    });
   });
 
   it("ids are unique", () => {

@@ -8,7 +8,7 @@ import { balance, equilibrium, freeBodies } from "../../lib/statics/index.ts";
 import type { Load, Structure } from "../../lib/structure/index.ts";
 import { forceScale, loadsOf, type Recipe, recipes, seed, structureOf, sumsOf } from "./frames.ts";
 
-const options = { seed, numRuns: 150 };
+const options = { seed, numRuns: 80 };
 const places = [0, 0.1313, 0.3737, 0.7171, 0.9991];
 
 /** Values of N, V and M of every member at some places, in order. */
@@ -147,7 +147,7 @@ describe(`free bodies of random structures (seed ${seed})`, () => {
         const tolerance = 1e-9 * Math.max(1, ...parts.map(forceScale)) * 20;
         expectSame(sampled(all), sums, tolerance);
       }),
-      { ...options, numRuns: 60 },
+      { ...options, numRuns: 40 },
     );
   });
 
@@ -173,7 +173,7 @@ describe(`free bodies of random structures (seed ${seed})`, () => {
         const structure = structureOf(recipe);
         expect(balance(structure, loadsOf(recipe, structure)).balanced).toBe(true);
       }),
-      { ...options, numRuns: 60 },
+      { ...options, numRuns: 40 },
     );
   });
 
@@ -195,7 +195,7 @@ describe(`free bodies of random structures (seed ${seed})`, () => {
           1e-9 * forceScale(once) * 20,
         );
       }),
-      { ...options, numRuns: 60 },
+      { ...options, numRuns: 40 },
     );
   });
 });
