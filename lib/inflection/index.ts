@@ -1,5 +1,6 @@
 // Where the moment is zero: single spans under any load, end restraint, ranges, placement of hinges.
 
+export { columnSinking, withShortening } from "./column-shortening.ts";
 export { momentDistribution } from "./distribution.ts";
 export {
   type EndMoments,
@@ -12,6 +13,7 @@ export {
 export { exteriorRestraint } from "./exterior-restraint.ts";
 export { InflectionError, type InflectionFault } from "./faults.ts";
 export { endMomentsFromHinges, hingesFromEndMoments, momentsWithEnds } from "./hinged-spans.ts";
+export { hingesByStiffness, type MemberHinges } from "./hinges-by-stiffness.ts";
 export {
   type End,
   inflectionPoints,

@@ -2,9 +2,9 @@
 
 export type NetFault =
   | { readonly kind: "no stiffness"; readonly member: string }
+  | { readonly kind: "not carried"; readonly joint: string }
   | { readonly kind: "inclined"; readonly member: string }
   | { readonly kind: "hinged"; readonly hinges: readonly string[] }
-  | { readonly kind: "unknown rule"; readonly rule: string; readonly known: readonly string[] }
   | { readonly kind: "ratio"; readonly what: string; readonly value: number }
   | { readonly kind: "not uniform"; readonly member: string }
   | { readonly kind: "places"; readonly first: number; readonly second: number; readonly length: number };
@@ -26,10 +26,10 @@ function wordsOf(fault: NetFault): string {
       return `member "${fault.member}" has no section; placing by relative stiffness needs its E and I, or ratios of them, by withSections`;
     case "inclined":
       return `member "${fault.member}" is neither level nor upright; these formulas are for beams and columns`;
+    case "not carried":
+      return `joint "${fault.joint}" stands on no column and no support, so its sinking does not follow from column loads`;
     case "hinged":
       return `relative stiffness is asked for in a structure with hinges (${fault.hinges.join(", ")}); ask for it before hinges are placed`;
-    case "unknown rule":
-      return `"${fault.rule}" is no rule; there are ${fault.known.join(", ")}`;
     case "ratio":
       return `${fault.what} is ${fault.value}; a finite number more than zero is wanted`;
     case "not uniform":

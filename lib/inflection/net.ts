@@ -2,7 +2,7 @@
 // End moments here act on the members, counter-clockwise positive, two per member (start, end); `asBending` turns them into
 // bending moments with the signs of results.
 
-import { memberLoads } from "../results/index.ts";
+import { integralOver, memberLoads, piecewise, product } from "../results/index.ts";
 import { axisOf, calledBy, type Load, type Structure } from "../structure/index.ts";
 import { fixedEndMoments } from "./end-moments.ts";
 import { NetError } from "./net-faults.ts";
@@ -17,6 +17,12 @@ export interface NetMember {
   readonly length: number;
   /** EI/L, N·m or a ratio. */
   readonly k: number;
+  /** EA/L, N/m, in the unit of k over that of lengths squared. */
+  readonly stretch: number;
+  /** 1 when it runs to the right (a beam) or up (a column), else -1. */
+  readonly sense: 1 | -1;
+  /** Forces down on its joints as a simple beam; none from columns. */
+  readonly down: readonly [start: number, end: number];
   /** Whether that end passes no moment on: released, or alone at a support that lets it turn. */
   readonly freeStart: boolean;
   readonly freeEnd: boolean;
@@ -39,6 +45,10 @@ export interface NetJoint {
   readonly name: string;
   /** Held against turning by its support. */
   readonly held: boolean;
+  /** Held against sinking by its support. */
+  readonly carried: boolean;
+  /** Force down at the joint itself, N. */
+  readonly down: number;
   /** Members that pass moment on to it. */
   readonly ends: readonly NetEnd[];
 }
@@ -74,6 +84,7 @@ export function netOf(structure: Structure, loads: readonly Load[]): Net {
     if (called === "member") throw new NetError({ kind: "inclined", member: m.name });
     if (m.section === undefined) throw new NetError({ kind: "no stiffness", member: m.name });
     const span = memberLoads(structure, loads, m.name);
+    const sense = (called === "column" ? axis.s : axis.c) > 0 ? 1 : -1;
     const ends = [loose(m.start, m.releases.start.moment), loose(m.end, m.releases.end.moment)] as const;
     return Object.freeze({
       name: m.name,
@@ -82,14 +93,24 @@ export function netOf(structure: Structure, loads: readonly Load[]): Net {
       column: called === "column",
       length: axis.length,
       k: (m.section.E * m.section.I) / axis.length,
+      stretch: (m.section.E * m.section.A) / axis.length,
+      sense,
+      down: called === "column" ? ([0, 0] as const) : simpleReactions(span, sense),
       freeStart: ends[0],
       freeEnd: ends[1],
       span,
       fixed: fixedMoments(span, ends[0], ends[1]),
     });
   });
+  const carried = new Set(structure.supports.filter((s) => s.holds.y).map((s) => s.joint));
   const joints = structure.joints.map(({ name }, j) =>
-    Object.freeze({ name, held: held.has(name), ends: Object.freeze(endsAt(members, j)) }),
+    Object.freeze({
+      name,
+      held: held.has(name),
+      carried: carried.has(name),
+      down: loads.reduce((sum, l) => (l.kind === "joint" && l.joint === name ? sum - l.fy : sum), 0),
+      ends: Object.freeze(endsAt(members, j)),
+    }),
   );
   return Object.freeze({ joints: Object.freeze(joints), members: Object.freeze(members) });
 }
@@ -99,6 +120,17 @@ function endsAt(members: readonly NetMember[], joint: number): NetEnd[] {
     ...(m.start === joint && !m.freeStart ? [{ member, end: 0 as const, far: m.end }] : []),
     ...(m.end === joint && !m.freeEnd ? [{ member, end: 1 as const, far: m.start }] : []),
   ]);
+}
+
+/** What a simple beam gives its joints, down positive; one drawn to the left has its loads turned round. */
+function simpleReactions({ length: L, across, points }: Span, sense: 1 | -1): readonly [number, number] {
+  const total = integralOver(across) + points.reduce((sum, p) => sum + p.across, 0);
+  const arm = piecewise([0, L], [[L, -1]]);
+  const about = points.reduce(
+    (sum, p) => sum + p.across * (L - p.x) + p.couple,
+    integralOver(product(across, arm)),
+  );
+  return [(sense * about) / L, sense * (total - about / L)];
 }
 
 /** A free end has no moment, and half of what it would have had goes to the other with the sign turned. */
