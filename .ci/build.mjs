@@ -15,7 +15,15 @@ const external = Object.keys(dependencies)
   .filter((name) => !bundled.has(name))
   .flatMap((name) => [name, `${name}/*`]);
 
-const entries = { hingebook: "lib/index.ts", cli: "kernel/cli.ts" };
+/** Threads are files of their own, beside the parts that start them. */
+const entries = {
+  hingebook: "lib/index.ts",
+  cli: "kernel/cli.ts",
+  "parts/lifeline-thread": "kernel/jupyter/lifeline-thread.ts",
+  "parts/language-thread": "kernel/jupyter/language-thread.ts",
+};
+/** Where the build goes, from the top folder. */
+const folder = process.argv[2] ?? "dist";
 
 // Built aside and put in place at the end, so that a build that fails leaves the last good one.
 const aside = join(top, `out/build-${process.pid}`);
@@ -57,7 +65,7 @@ if (foreign)
   throw new Error(`declaration file: ${foreign[1]} shows in a public signature; only our own types may`);
 writeFileSync(join(aside, "hingebook.d.ts"), text);
 
-const dist = join(top, "dist");
+const dist = join(top, folder);
 const before = `${aside}-before`;
 if (existsSync(dist)) renameSync(dist, before);
 renameSync(aside, dist);

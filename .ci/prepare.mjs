@@ -77,6 +77,11 @@ function build() {
 const debian = [
   ["/usr/bin/chromium", "chromium"],
   ["/usr/bin/pdftotext", "poppler-utils"],
+  ["/usr/lib/python3/dist-packages/jupyter_client", "jupyter-client"],
+  ["/usr/lib/python3/dist-packages/nbclient", "python3-nbclient"],
+  ["/usr/lib/python3/dist-packages/nbconvert", "jupyter-nbconvert"],
+  ["/usr/lib/python3/dist-packages/notebook", "jupyter-notebook"],
+  ["/usr/lib/python3/dist-packages/jupyter_kernel_test", "python3-jupyter-kernel-test"],
   ["/usr/lib/python3/dist-packages/sympy", "python3-sympy"],
   ["/usr/lib/python3/dist-packages/scipy", "python3-scipy"],
 ];

@@ -34,7 +34,10 @@ if (existsSync(report)) {
     readFileSync(report, "utf8"),
   );
   const skipped = numPendingTests + numTodoTests;
-  if (skipped > 0) console.log(`hingebook: ${skipped} TESTS SKIPPED (they need Chromium, poppler, Jupyter or Python packages from Debian)`);
+  if (skipped > 0)
+    console.log(
+      `hingebook: ${skipped} TESTS SKIPPED (they need Chromium, poppler, Jupyter or Python packages from Debian)`,
+    );
   console.log(`tests: ${numPassedTests} passed, ${numFailedTests} failed, ${skipped} skipped`);
 }
 process.exit(checks.every(Boolean) ? 0 : 1);

@@ -1,5 +1,5 @@
 // What a value looks like in a notebook: a bundle of one or more forms by MIME type, plain text always among them.
-import { inspect } from "node:util";
+import { inspect, types } from "node:util";
 
 export type MimeBundle = Readonly<Record<string, unknown>>;
 
@@ -39,23 +39,63 @@ function companionText(value: object, bundle: MimeBundle): string {
   return plainText(value);
 }
 
-/** The forms a value is shown in; nothing for `undefined`. `Symbol.for("Jupyter.display")` (which may answer a promise)
- *  comes first, then `toHtml()`, then the value's structure as text. Errors thrown by either are thrown on. */
-export async function display(value: unknown): Promise<MimeBundle | undefined> {
+/** Go on with an answer, at once when it is one and later when it is a promise of one. */
+function then<T>(answer: unknown, next: (answer: unknown) => T): T | Promise<T> {
+  return types.isPromise(answer) ? answer.then(next) : next(answer);
+}
+
+const VEGA_LITE = /vega\.github\.io\/schema\/vega-lite\/v(\d+)/;
+
+/** A Vega-Lite chart: its specification for front ends that draw it, and the drawing for those that do not. */
+async function chartBundle(spec: object, version: string): Promise<MimeBundle> {
+  const { drawChart } = await import("./chart.ts");
+  const { svg, text } = await drawChart(spec);
+  return Object.freeze({
+    [`application/vnd.vegalite.v${version}+json`]: spec,
+    "image/svg+xml": svg,
+    "text/plain": text,
+  });
+}
+
+/** The forms a value is shown in, now or soon; nothing for `undefined`. `Symbol.for("Jupyter.display")` comes first,
+ *  then `toHtml()` (either may answer a promise), then a Vega-Lite specification, then the value's structure as text.
+ *  Errors thrown by either are thrown on. */
+export function displayForms(value: unknown): MimeBundle | undefined | Promise<MimeBundle | undefined> {
   if (value === undefined) return undefined;
   if (value === null || (typeof value !== "object" && typeof value !== "function")) {
     return Object.freeze({ "text/plain": plainText(value) });
   }
   const show = method(value, DISPLAY);
-  const html = method(value, "toHtml");
   if (show) {
-    const bundle = checkBundle(await show.call(value));
-    return Object.freeze({ "text/plain": companionText(value, bundle), ...bundle });
+    return then(show.call(value), (answer) => {
+      const bundle = checkBundle(answer);
+      return Object.freeze({ "text/plain": companionText(value, bundle), ...bundle });
+    });
   }
+  const html = method(value, "toHtml");
   if (html) {
-    const text = await html.call(value);
-    if (typeof text === "string")
-      return Object.freeze({ "text/plain": companionText(value, {}), "text/html": text });
+    return then(html.call(value), (text) =>
+      Object.freeze({
+        "text/plain": companionText(value, {}),
+        ...(typeof text === "string" ? { "text/html": text } : {}),
+      }),
+    );
   }
-  return Object.freeze({ "text/plain": plainText(value) });
+  const { $schema } = value as { $schema?: unknown };
+  const version = typeof $schema === "string" ? VEGA_LITE.exec($schema)?.[1] : undefined;
+  return version === undefined
+    ? Object.freeze({ "text/plain": plainText(value) })
+    : chartBundle(value, version);
+}
+
+/** Whether a value shows itself by a function from outside the cells, such as the library's. */
+export function isLibraryShown(value: unknown): boolean {
+  if (typeof value !== "object" || value === null) return false;
+  const show = method(value, DISPLAY);
+  return show !== undefined && Object.getPrototypeOf(show) === Function.prototype;
+}
+
+/** The forms a value is shown in; nothing for `undefined`. */
+export async function display(value: unknown): Promise<MimeBundle | undefined> {
+  return await displayForms(value);
 }

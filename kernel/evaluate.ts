@@ -8,7 +8,10 @@
 //   - `awaitPromise` waits for the end of a text with a top-level `await`, and reports its rejection;
 //   - `//# sourceURL=` names the text in stack traces;
 //   - `Runtime.callFunctionOn` hands over the very object that was thrown;
-//   - `exceptionDetails` of a text that does not compile carries a script id, line and column (from 0).
+//   - `exceptionDetails` of a text that does not compile carries a script id, line and column (from 0);
+//   - `Runtime.terminateExecution`, sent by another thread, ends a loop below `Runtime.evaluate`, which then fails with
+//     "Execution was terminated"; a loop after an `await` or in a timer ends too, but `evaluate` is never answered;
+//     names keep their values (held by tests/kernel/jupyter/protocol_suite.py).
 import { Session as Inspector } from "node:inspector";
 import { createContext } from "node:vm";
 import type { Position } from "./position.ts";
@@ -16,7 +19,7 @@ import type { Position } from "./position.ts";
 /** What became of a text. A thrown value is the very object, whatever it is; `at` is where a text does not compile. */
 export type Outcome =
   | { readonly ok: true }
-  | { readonly ok: false; readonly thrown: unknown; readonly at?: Position };
+  | { readonly ok: false; readonly thrown: unknown; readonly at?: Position; readonly terminated?: true };
 
 interface RemoteObject {
   readonly type: string;
@@ -40,9 +43,10 @@ interface Evaluated {
   readonly exceptionDetails?: ExceptionDetails;
 }
 
-const GROUP = "hingebook";
+const TERMINATED = "Execution was terminated";
 
 let made = 0;
+let runs = 0;
 
 /** A V8 context with REPL mode. `globals` becomes its global object. Close it when done. */
 export class Evaluator {
@@ -98,13 +102,20 @@ export class Evaluator {
 
   /** Run a text to its end. `name` stands for it in stack traces. */
   async run(code: string, name: string): Promise<Outcome> {
-    const reply = await this.#post<Evaluated>("Runtime.evaluate", {
-      expression: `${code}\n//# sourceURL=${name}`,
-      contextId: this.#contextId,
-      objectGroup: GROUP,
-      replMode: true,
-      awaitPromise: true,
-    });
+    const objectGroup = `hingebook ${++runs}`;
+    let reply: Evaluated;
+    try {
+      reply = await this.#post<Evaluated>("Runtime.evaluate", {
+        expression: `${code}\n//# sourceURL=${name}`,
+        contextId: this.#contextId,
+        objectGroup,
+        replMode: true,
+        awaitPromise: true,
+      });
+    } catch (error) {
+      if (!(error as Error).message.includes(TERMINATED)) throw error;
+      return { ok: false, thrown: error, terminated: true };
+    }
     const details = reply.exceptionDetails;
     try {
       if (!details) return { ok: true };
@@ -113,7 +124,7 @@ export class Evaluator {
       if (!compiling) return { ok: false, thrown };
       return { ok: false, thrown, at: { line: details.lineNumber + 1, column: details.columnNumber + 1 } };
     } finally {
-      await this.#post("Runtime.releaseObjectGroup", { objectGroup: GROUP });
+      await this.#post("Runtime.releaseObjectGroup", { objectGroup });
     }
   }
 

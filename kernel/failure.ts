@@ -7,8 +7,9 @@ import type { Frame, Scripts } from "./scripts.ts";
 
 /** A failed cell. Line and column (from 1) and the excerpt are absent where nothing tells them. */
 export interface CellFailure {
-  /** "refused" before it ran (not TypeScript, or the types do not fit), "thrown" while it ran. */
-  readonly kind: "refused" | "thrown";
+  /** "refused" before it ran (not TypeScript, or the types do not fit), "thrown" while it ran, "interrupted" from
+   *  outside. */
+  readonly kind: "refused" | "thrown" | "interrupted";
   readonly name: string;
   readonly message: string;
   readonly cell: number;
@@ -134,5 +135,18 @@ export function checkFailure(
     cell,
     ...atPlace(source, own ? first : undefined, first.length),
     traceback: Object.freeze(lines),
+  });
+}
+
+/** A failure of a cell that was cut off from outside. */
+export function interruptedFailure(cell: number): CellFailure {
+  const message = "the cell was interrupted; the names it had set by then keep their values";
+  return Object.freeze({
+    kind: "interrupted",
+    name: "Interrupted",
+    message,
+    cell,
+    excerpt: "",
+    traceback: Object.freeze([`Interrupted: ${message}`]),
   });
 }

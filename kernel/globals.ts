@@ -4,18 +4,23 @@
 import { Console } from "node:console";
 import { Writable } from "node:stream";
 import { runInContext } from "node:vm";
+import type { CellDisplay } from "./cell-display.ts";
+import type { Activity } from "./interruption.ts";
 import { RUNNER } from "./rewrite/index.ts";
 
 export interface CellGlobals {
   readonly globals: Record<string, unknown>;
-  /** Stop every timer a cell has started. */
-  readonly clearTimers: () => void;
+  /** Stop every timer a cell has started, or those started in a run up to a number. */
+  readonly clearTimers: (upTo?: number) => void;
 }
 
 export interface CellHooks {
   readonly write: (stream: "stdout" | "stderr", text: string) => void;
   /** Something thrown by a timer's callback, outside any cell. */
   readonly stray: (thrown: unknown) => void;
+  /** Told when a timer's callback is at work. */
+  readonly activity: Activity;
+  readonly shows: CellDisplay["globals"];
 }
 
 function sink(write: (text: string) => void): Writable {
@@ -43,17 +48,28 @@ function cellConsole({ write }: CellHooks): object {
 type Callback = (...values: unknown[]) => void;
 type Handle = ReturnType<typeof setTimeout> | ReturnType<typeof setImmediate>;
 
-function cellTimers({ stray }: CellHooks): { timers: Record<string, unknown>; clearTimers: () => void } {
-  const running = new Set<Handle>();
+function cellTimers({ stray, activity }: CellHooks): {
+  timers: Record<string, unknown>;
+  clearTimers: CellGlobals["clearTimers"];
+} {
+  /** Each with the number of the run it was started in. */
+  const running = new Map<Handle, number>();
+  const add = (handle: Handle): Handle => {
+    running.set(handle, Math.abs(activity.run));
+    return handle;
+  };
   const guarded =
     (callback: unknown, name: string): Callback =>
     (...values) => {
       try {
         if (typeof callback !== "function")
           throw new TypeError(`${name}: the first argument must be a function`);
+        activity.enter();
         callback(...values);
       } catch (thrown) {
         stray(thrown);
+      } finally {
+        activity.leave();
       }
     };
   const once = (callback: unknown, delay?: number, ...values: unknown[]): Handle => {
@@ -61,21 +77,18 @@ function cellTimers({ stray }: CellHooks): { timers: Record<string, unknown>; cl
       running.delete(handle);
       guarded(callback, "setTimeout")(...values);
     }, delay);
-    running.add(handle);
-    return handle;
+    return add(handle);
   };
   const repeated = (callback: unknown, delay?: number, ...values: unknown[]): Handle => {
     const handle = setInterval(guarded(callback, "setInterval"), delay, ...values);
-    running.add(handle);
-    return handle;
+    return add(handle);
   };
   const soon = (callback: unknown, ...values: unknown[]): Handle => {
     const handle = setImmediate(() => {
       running.delete(handle);
       guarded(callback, "setImmediate")(...values);
     });
-    running.add(handle);
-    return handle;
+    return add(handle);
   };
   const stop = (handle?: Handle): void => {
     if (handle === undefined) return;
@@ -93,8 +106,8 @@ function cellTimers({ stray }: CellHooks): { timers: Record<string, unknown>; cl
       clearImmediate: stop,
       queueMicrotask: (callback: unknown) => queueMicrotask(() => guarded(callback, "queueMicrotask")()),
     },
-    clearTimers: () => {
-      for (const handle of [...running]) stop(handle);
+    clearTimers: (upTo = Number.POSITIVE_INFINITY) => {
+      for (const [handle, run] of [...running]) if (run <= upTo) stop(handle);
     },
   };
 }
@@ -114,10 +127,18 @@ const standard = {
   btoa,
 };
 
+/** A calculation is run again by others, who are not there to answer. */
+function input(): never {
+  throw new Error(
+    'a cell cannot ask for input; write the value in the notebook, for example sheet.given("g", "5 kN/m"), and set another from outside with hingebook run --set g="6 kN/m"',
+  );
+}
+
 /** The globals of one session's cells. */
 export function cellGlobals(hooks: CellHooks): CellGlobals {
   const { timers, clearTimers } = cellTimers(hooks);
-  return { globals: { ...standard, ...timers, console: cellConsole(hooks) }, clearTimers };
+  const { shows } = hooks;
+  return { globals: { ...standard, ...timers, ...shows, input, console: cellConsole(hooks) }, clearTimers };
 }
 
 /** Built-ins that cells compare with `instanceof`: values made outside the context must pass too. */

@@ -23,6 +23,9 @@ export function completedPart(source: string, failedAt: Position | undefined): s
   return source.slice(0, done.at(-1)?.end ?? 0);
 }
 
+/** From so many cells on, those that declare nothing are dropped: no other can see anything of them. */
+const MANY = 100;
+
 export class History {
   #entries: readonly Entry[] = [];
 
@@ -35,8 +38,11 @@ export class History {
   add(id: string, source: string): void {
     const added = entry(id, source);
     const later = [...this.#entries, added];
+    const many = later.length > MANY;
     this.#entries = later.filter((old, index) => {
-      if (old.id !== id || index === later.length - 1) return true;
+      if (index === later.length - 1) return true;
+      if (many && old.names.size === 0 && !old.imports) return false;
+      if (old.id !== id) return true;
       const shadowed = (name: string): boolean => later.slice(index + 1).some(({ names }) => names.has(name));
       return old.imports || ![...old.names].every(shadowed);
     });

@@ -9,6 +9,7 @@ import { ownFolder } from "./folders.ts";
 export interface OpenLedger {
   text(cell: CellRef, markdown: string): unknown;
   endCell(cellId: string): void;
+  entry(id: string): { readonly version: number; readonly outOfDate: boolean } | undefined;
   unusedOverrides(): readonly string[];
   record(about: {
     readonly complete: boolean;
@@ -28,6 +29,7 @@ export interface Library {
   /** Opens a ledger for a notebook that has not come to do so. */
   openLedger(head: Head): OpenLedger;
   forgetLedger(): void;
+  /** A record as a package, sealed. */
   renderPackage(record: CalculationRecord): Promise<string>;
 }
 
@@ -48,7 +50,7 @@ export async function loadLibrary(): Promise<Library> {
     currentLedger,
     openLedger,
     forgetLedger,
-    renderPackage: report.renderPackage,
+    renderPackage: async (record: CalculationRecord) => report.sealed(await report.renderPackage(record)),
   });
 }
 

@@ -13,16 +13,26 @@ function version(): string {
   return text;
 }
 
+const versions = (): Readonly<Record<string, string>> => ({
+  hingebook: version(),
+  node: process.versions.node,
+});
+
 async function loaded(): Promise<Library> {
   const { loadLibrary } = await import("./library.ts");
   return loadLibrary();
 }
 
 async function run(asked: Extract<Asked, { command: "run" }>, terminal: Terminal): Promise<number> {
-  const { runNotebooks } = await import("./run.ts");
-  const { files, out, overrides } = asked;
-  const versions = { hingebook: version(), node: process.versions.node };
-  const states = await runNotebooks({ files, out, overrides, terminal, versions, library: loaded });
+  const { files, out, overrides, watch, sensitivity } = asked;
+  if (watch) {
+    const { watchNotebook } = await import("./watch/index.ts");
+    const [file = ""] = files;
+    return watchNotebook({ file, out, overrides, terminal, versions: versions(), library: loaded });
+  }
+  const { runJob } = await import("./record/job.ts");
+  const options = { files, out, overrides, terminal, sensitivity };
+  const states = await runJob({ ...options, versions: versions(), library: loaded });
   return states.every((state) => state === "complete") ? 0 : 1;
 }
 
@@ -31,8 +41,16 @@ export async function main(words: readonly string[], terminal: Terminal): Promis
   try {
     const asked = readArguments(words);
     if (asked.command === "run") return await run(asked, terminal);
-    terminal.out(asked.command === "help" ? HELP : `${version()}\n`);
-    return 0;
+    if (asked.command === "issue" || asked.command === "changes" || asked.command === "verify") {
+      const { recordCommand } = await import("./record/index.ts");
+      return await recordCommand(asked, { library: loaded, versions: versions() }, terminal);
+    }
+    if (asked.command === "help" || asked.command === "version") {
+      terminal.out(asked.command === "help" ? HELP : `${version()}\n`);
+      return 0;
+    }
+    const { kernelCommand } = await import("./jupyter/command.ts");
+    return await kernelCommand(asked, { version: version(), library: loaded }, terminal);
   } catch (error) {
     if (error instanceof UsageError) {
       terminal.err(`hingebook: ${error.message}\nhingebook --help tells more\n`);

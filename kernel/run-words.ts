@@ -3,8 +3,15 @@ import { relative } from "node:path";
 import type { CalculationRecord, Entry } from "../lib/sheet/index.ts";
 import type { CellFailure } from "./failure.ts";
 import type { Notebook } from "./notebook.ts";
+import type { OutputEvent } from "./session.ts";
 
 const line = (text: string): string => `${text}\n`;
+
+/** What a cell prints or shows before it ends, as text. */
+export function outputText(event: Exclude<OutputEvent, { readonly kind: "stray" }>): string {
+  if (event.kind === "stream") return event.text;
+  return event.kind === "display" ? line(String(event.data["text/plain"] ?? "")) : "";
+}
 
 /** A path as short as it can be said from the current folder. */
 export function shownPath(path: string): string {

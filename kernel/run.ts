@@ -1,15 +1,18 @@
 // Runs notebooks from start to end without Jupyter and leaves a calculation package for each.
-import { mkdir, rm } from "node:fs/promises";
+import { rm } from "node:fs/promises";
 import { join } from "node:path";
 import { setImmediate as nextTurn } from "node:timers/promises";
-import writeFileAtomic from "write-file-atomic";
 import type { CalculationRecord, Head } from "../lib/sheet/index.ts";
+import type { Checker } from "./check/index.ts";
 import type { CellFailure } from "./failure.ts";
-import { type Library, libraryTypes, type OpenLedger } from "./library.ts";
+import type { Library, OpenLedger } from "./library.ts";
+import { librarySession } from "./library-session.ts";
 import { type Notebook, type NotebookCell, readNotebook } from "./notebook.ts";
 import { outline } from "./outline.ts";
-import { failureText, shownPath, summaryText, unusedText } from "./run-words.ts";
-import { Session } from "./session.ts";
+import { localFiles } from "./record/local-files.ts";
+import { writeWhole } from "./record/write.ts";
+import { failureText, outputText, shownPath, summaryText, unusedText } from "./run-words.ts";
+import type { Session } from "./session.ts";
 
 /** Where the runner's lines go; each text ends with a line break. */
 export interface Terminal {
@@ -29,6 +32,12 @@ export interface RunOptions {
   /** Absolute declaration file of the library, when it is not where it is usually found. */
   readonly types?: string;
   readonly versions: Readonly<Record<string, string>>;
+  /** Takes each record, complete or not, in place of a package being written to `out`. */
+  readonly deliver?: (record: CalculationRecord) => void;
+  /** Adds to a complete record before it is written. */
+  readonly enrich?: (record: CalculationRecord, path: string) => Promise<CalculationRecord>;
+  /** A checker kept by the caller for runs of one notebook. */
+  readonly checker?: Checker;
 }
 
 /** How a notebook came out. */
@@ -73,29 +82,22 @@ class NotebookRun {
   constructor(options: RunOptions, notebook: Notebook, library: () => Promise<Library>) {
     this.#options = options;
     this.#notebook = notebook;
-    let loaded: Library | undefined;
-    // The compiler's process is started before the library is loaded, so that they start side by side.
-    this.#library = nextTurn().then(library);
-    const ready = this.#library.then((it) => {
-      loaded = it;
-      return it;
-    });
-    const module = ready.then((it) => it.module);
-    const unitsOf = ready.then((it) => it.unitsOf);
-    for (const later of [module, unitsOf]) later.catch(() => undefined); // `run` reports what keeps it from loading
-    const { overrides, types = libraryTypes(), terminal } = options;
-    this.#session = new Session({
+    const { overrides, types, terminal, checker } = options;
+    const { session, library: loading } = librarySession({
       folder: notebook.folder,
-      modules: { hingebook: module },
-      libraryTypes: types,
-      unitsOf,
-      beforeCell: (cell) => loaded?.attachHost({ cell, overrides, notebook: notebook.fileName }),
-      afterCell: (cell) => loaded?.currentLedger()?.endCell(cell.id),
+      notebook: notebook.fileName,
+      overrides,
+      library,
+      ...(types === undefined ? {} : { types }),
+      ...(checker ? { checker } : {}),
+      unseen: true,
       onOutput: (event) => {
         if (event.kind === "stray") this.#stray ??= event.failure;
-        else terminal.out(event.text.replace(/^(?=.)/gm, "      | "));
+        else terminal.out(outputText(event).replace(/^(?=.)/gm, "      | "));
       },
     });
+    this.#session = session;
+    this.#library = loading;
     this.#session.foresee(this.#codeCells().map(({ source }) => source));
   }
 
@@ -154,7 +156,8 @@ class NotebookRun {
     const reached = failure?.cell ?? Number.POSITIVE_INFINITY;
     for (const { kind, number, id, source: markdown } of cells)
       if (kind === "markdown" && number <= reached) ledger.text({ number, id }, markdown);
-    return ledger.record({
+    const files = localFiles(this.#notebook);
+    const record = ledger.record({
       complete: failure === undefined,
       notebook: { name: fileName, source },
       versions: this.#options.versions,
@@ -169,11 +172,11 @@ class NotebookRun {
           }
         : {}),
     });
+    return files.length === 0 ? record : Object.freeze({ ...record, files });
   }
 
   async #write(library: Library, file: string, record: CalculationRecord): Promise<void> {
-    await mkdir(this.#options.out, { recursive: true });
-    await writeFileAtomic(file, await library.renderPackage(record));
+    await writeWhole(file, await library.renderPackage(record));
   }
 
   async #incomplete(library: Library, failure: CellFailure): Promise<RunState> {
@@ -181,7 +184,12 @@ class NotebookRun {
     const { incomplete } = packageFiles(out, this.#notebook.name);
     terminal.err(failureText(this.#notebook, failure));
     const ledger = library.currentLedger() ?? library.openLedger(unopenedHead(this.#notebook.name));
-    await this.#write(library, incomplete, this.#record(ledger, failure));
+    const record = this.#record(ledger, failure);
+    if (this.#options.deliver) {
+      this.#options.deliver(record);
+      return "incomplete";
+    }
+    await this.#write(library, incomplete, record);
     terminal.err(line(`INCOMPLETE: what was calculated before is in ${shownPath(incomplete)}`));
     return "incomplete";
   }
@@ -200,9 +208,14 @@ class NotebookRun {
       terminal.err(line(unusedText(this.#notebook.fileName, unused, record.entries)));
       return "failed";
     }
-    await this.#write(library, good, record);
+    if (this.#options.deliver) {
+      this.#options.deliver(record);
+      return "complete";
+    }
+    const full = (await this.#options.enrich?.(record, this.#notebook.path)) ?? record;
+    await this.#write(library, good, full);
     await rm(incomplete, { force: true });
-    terminal.out(summaryText(record, good));
+    terminal.out(summaryText(full, good));
     return "complete";
   }
 }

@@ -29,11 +29,16 @@ export const nextCellScript = (): string => `hingebook:cell-${++texts}`;
 /** A new name for one loading of a local module. */
 export const nextFileScript = (): string => `hingebook:file-${++texts}`;
 
+/** Texts whose places are kept: functions of a cell run longer ago are traced no more. */
+const MOST = 1000;
+
 export class Scripts {
   readonly #scripts = new Map<string, Script>();
 
   add(name: string, script: Script): void {
     this.#scripts.set(name, script);
+    const [oldest] = this.#scripts.keys();
+    if (this.#scripts.size > MOST && oldest !== undefined) this.#scripts.delete(oldest);
   }
 
   /** Where a place in a running text was written. */

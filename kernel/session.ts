@@ -2,15 +2,24 @@
 // drive the same class, so that their outputs are the same.
 import { setImmediate as nextTurn } from "node:timers/promises";
 import { types } from "node:util";
-import { createChecker, type UnitsOf } from "./check/index.ts";
-import { display, type MimeBundle } from "./display.ts";
+import { type CellDisplay, cellDisplay, type DisplayEvent } from "./cell-display.ts";
+import { type Checker, type CheckerOptions, createChecker, type UnitsOf } from "./check/index.ts";
+import { display, isLibraryShown, type MimeBundle } from "./display.ts";
 import { startEngine } from "./engine.ts";
 import type { Evaluator, Outcome } from "./evaluate.ts";
-import { type CellFailure, checkFailure, syntaxFailure, thrownFailure } from "./failure.ts";
+import {
+  type CellFailure,
+  checkFailure,
+  interruptedFailure,
+  syntaxFailure,
+  thrownFailure,
+} from "./failure.ts";
 import { ownFolder as hingebookFolder } from "./folders.ts";
 import { Foresight } from "./foresight.ts";
 import { cellGlobals } from "./globals.ts";
 import { completedPart } from "./history.ts";
+import { Activity, Interruption } from "./interruption.ts";
+import { marked } from "./out-of-date.ts";
 import type { Position } from "./position.ts";
 import { type Rewritten, rewriteCell, SyntaxRefusal } from "./rewrite/index.ts";
 import { nextCellScript, Scripts } from "./scripts.ts";
@@ -21,8 +30,10 @@ export interface CellName {
   readonly id: string;
 }
 
-/** What a cell prints while it runs, and what is thrown outside any cell (in a timer, in a promise nobody awaits). */
+/** What a cell prints and shows while it runs, and what is thrown outside any cell (in a timer, in a promise nobody
+ *  awaits). */
 export type OutputEvent =
+  | DisplayEvent
   | { readonly kind: "stream"; readonly name: "stdout" | "stderr"; readonly text: string }
   | { readonly kind: "stray"; readonly failure: CellFailure };
 
@@ -43,38 +54,70 @@ export interface SessionOptions {
   /** Called before a cell's code runs, after its check, and once it has ended, well or not. */
   readonly beforeCell?: (cell: CellName) => void;
   readonly afterCell?: (cell: CellName) => void;
+  /** What a value stands on that has changed since it was worked out: it is then shown as out of date. */
+  readonly changedBelow?: (value: unknown) => readonly string[];
+  /** Nobody sees what cells show: what the library would draw for a display is left undrawn. A cell's own display is made
+   *  all the same, since it may fail. */
+  readonly unseen?: boolean;
   /** Whether cells are type-checked before they run; true unless said otherwise. */
   readonly check?: boolean;
+  /** A checker kept by the caller, which outlives the session; otherwise the session makes its own. */
+  readonly checker?: Checker;
+  /** Told what is going on, for a thread that is to end loops. */
+  readonly activity?: Activity;
   /** Folder whose packages serve notebooks that have none of their own; hingebook's folder unless said otherwise. */
   readonly ownFolder?: string;
+}
+
+/** What is known of the cell that is running. */
+interface Running {
+  readonly cell: CellName;
+  readonly code: string;
+  readonly script: string;
+  shown?: unknown;
+  thrown?: { readonly value: unknown; readonly stack: string | undefined };
+  readonly strays: unknown[];
+}
+
+export interface ExecuteOptions {
+  readonly cell: CellName;
+  /** Whether later cells are checked as following this one; true unless said otherwise. */
+  readonly keep?: boolean;
 }
 
 export class Session {
   readonly #options: SessionOptions;
   readonly #scripts = new Scripts();
   readonly #foresight: Foresight;
-  readonly #strays: unknown[] = [];
-  readonly #clearTimers: () => void;
+  readonly #clearTimers: (upTo?: number) => void;
   readonly #globals: Record<string, unknown>;
+  readonly #activity: Activity;
+  readonly #shows: CellDisplay;
   #engine: Promise<Evaluator> | undefined;
   #queue: Promise<unknown> = Promise.resolve();
-  #shown: unknown;
-  #running: CellName = { number: 0, id: "" };
-  #busy = false;
-  #thrown: { readonly value: unknown; readonly stack: string | undefined } | undefined;
+  #running: Running | undefined;
+  #interruption: Interruption | undefined;
+  #lastCell = 0;
 
   constructor(options: SessionOptions) {
     this.#options = options;
-    const { folder, libraryTypes, unitsOf, ownFolder = hingebookFolder(), check = true } = options;
-    const paths = libraryTypes === undefined ? {} : { hingebook: libraryTypes };
-    const about = { folder, ownFolder, paths, ...(unitsOf ? { unitsOf } : {}) };
-    this.#foresight = new Foresight(check ? createChecker(about) : undefined);
+    const { checker, check = true, activity = new Activity() } = options;
+    this.#activity = activity;
+    this.#foresight = new Foresight(check ? (checker ?? createChecker(checkerOptions(options))) : undefined);
+    this.#shows = cellDisplay((event) => this.#emit(event));
     const hooks = {
       write: (name: "stdout" | "stderr", text: string) => this.#emit({ kind: "stream", name, text }),
-      stray: (thrown: unknown) => this.#stray(thrown),
+      stray: (thrown: unknown) => this.stray(thrown),
+      activity,
+      shows: this.#shows.globals,
     };
     ({ globals: this.#globals, clearTimers: this.#clearTimers } = cellGlobals(hooks));
     process.on("unhandledRejection", this.#rejected);
+  }
+
+  /** Sources of the cells that have run and can still be seen, in order. */
+  get sources(): readonly string[] {
+    return this.#foresight.history.sources;
   }
 
   #emit(event: OutputEvent): void {
@@ -83,19 +126,23 @@ export class Session {
 
   readonly #rejected = (reason: unknown): void => {
     const stack = (reason as { stack?: unknown } | null)?.stack;
-    const ours = this.#busy || (typeof stack === "string" && this.#scripts.frames(stack).length > 0);
+    const ours = this.#running || (typeof stack === "string" && this.#scripts.frames(stack).length > 0);
     if (!ours) throw reason;
-    this.#stray(reason);
+    this.stray(reason);
   };
 
   /** Something thrown where no cell waits for it: it fails the cell that is running, or is reported by itself. */
-  #stray(thrown: unknown): void {
-    if (this.#busy) {
-      this.#strays.push(thrown);
+  stray(thrown: unknown): void {
+    if (this.#running) {
+      this.#running.strays.push(thrown);
       return;
     }
-    const { number } = this.#running;
-    const failure = thrownFailure(thrown, { cell: number, source: "", script: "", scripts: this.#scripts });
+    const failure = thrownFailure(thrown, {
+      cell: this.#lastCell,
+      source: "",
+      script: "",
+      scripts: this.#scripts,
+    });
     this.#emit({ kind: "stray", failure });
   }
 
@@ -113,13 +160,22 @@ export class Session {
       globals: this.#globals,
       scripts: this.#scripts,
       show: (value) => {
-        this.#shown = value;
+        // A cell that was interrupted may come to its end later: what it shows then belongs to no other cell.
+        const running = this.#running;
+        if (running && new Error("shown here").stack?.includes(`${running.script}:`)) running.shown = value;
       },
       onThrow: (value) => {
         const stackless = typeof value !== "object" || value === null || !("stack" in value);
-        this.#thrown = stackless ? { value, stack: new Error("thrown here").stack } : undefined;
+        if (!this.#running) return;
+        if (stackless) this.#running.thrown = { value, stack: new Error("thrown here").stack };
+        else delete this.#running.thrown;
       },
     });
+  }
+
+  /** Start what the first cell will need, so that it need not wait. */
+  warm(): void {
+    this.#open().catch(() => undefined); // the first cell reports it
   }
 
   /** Say which cells are going to be run, in order: they are checked together, while the rest is still starting. */
@@ -128,13 +184,47 @@ export class Session {
   }
 
   /** Run one cell, after those asked for before it. Never throws for what the cell does: that is its result. */
-  execute(code: string, { cell }: { readonly cell: CellName }): Promise<CellResult> {
-    const result = this.#queue.then(() => this.#execute(code, cell));
+  execute(code: string, options: ExecuteOptions): Promise<CellResult> {
+    const result = this.#queue.then(() => this.#interruptible(code, options));
     this.#queue = result.catch(() => undefined);
     return result;
   }
 
-  async #execute(code: string, cell: CellName): Promise<CellResult> {
+  /** Cut off the cell that is running, if one is, and stop the timers cells have started. What the cell waits for is
+   *  abandoned, not undone. `run` is the run that was meant, as `Activity.run` told it then: a later one is left alone.
+   *  A loop that never lets go is ended from another thread; see kernel/jupyter/lifeline.ts. */
+  interrupt(run: number = this.#activity.run): void {
+    this.#clearTimers(Math.abs(run));
+    if (run > 0 && run === this.#activity.run) this.#interruption?.ask();
+  }
+
+  async #interruptible(code: string, options: ExecuteOptions): Promise<CellResult> {
+    const interruption = new Interruption();
+    this.#interruption = interruption;
+    this.#activity.begin();
+    try {
+      const cut = interruption.asked.then(() => this.#cutOff(options.cell));
+      return await Promise.race([this.#execute(code, options, interruption), cut]);
+    } finally {
+      this.#interruption = undefined;
+      this.#activity.end();
+    }
+  }
+
+  #cutOff(cell: CellName): CellResult {
+    if (this.#running) {
+      // The checker is to know the names the cell may have set.
+      this.#foresight.history.add(cell.id, this.#running.code);
+      this.#ended(this.#running);
+    }
+    return Object.freeze({ status: "error" as const, error: interruptedFailure(cell.number) });
+  }
+
+  async #execute(
+    code: string,
+    { cell, keep = true }: ExecuteOptions,
+    interruption: Interruption,
+  ): Promise<CellResult> {
     const refused = await this.#refused(code, cell);
     if (refused) return { status: "error", error: refused };
     let rewritten: Rewritten;
@@ -145,48 +235,55 @@ export class Session {
       return { status: "error", error: syntaxFailure(error, cell.number, code) };
     }
     const evaluator = await this.#open();
-    return this.#run(evaluator, code, rewritten, cell);
+    if (interruption.isAsked) return this.#cutOff(cell);
+    const script = nextCellScript();
+    this.#scripts.add(script, { source: code, cell: cell.number, locate: rewritten.locate });
+    const running: Running = { cell, code, script, strays: [] };
+    return this.#run(evaluator, rewritten.code, running, keep);
   }
 
-  async #run(
-    evaluator: Evaluator,
-    code: string,
-    { code: text, locate }: Rewritten,
-    cell: CellName,
-  ): Promise<CellResult> {
-    const script = nextCellScript();
-    this.#scripts.add(script, { source: code, cell: cell.number, locate });
-    this.#running = cell;
-    this.#shown = undefined;
-    this.#thrown = undefined;
-    this.#busy = true;
+  async #run(evaluator: Evaluator, text: string, running: Running, keep: boolean): Promise<CellResult> {
+    const { cell, code, script } = running;
+    this.#running = running;
+    this.#lastCell = cell.number;
     try {
       this.#options.beforeCell?.(cell);
-      const outcome = await this.#settled(await evaluator.run(text, script));
+      this.#activity.enter();
+      const outcome = await this.#settled(await evaluator.run(text, script), running);
       if (outcome.ok) {
-        const value = this.#shown;
-        const shown = await display(value);
-        this.#foresight.history.add(cell.id, code);
-        return Object.freeze({ status: "ok" as const, value, ...(shown ? { display: shown } : {}) });
+        const forms = await this.#forms(running.shown);
+        const shown = forms && marked(forms, this.#options.changedBelow?.(running.shown) ?? []);
+        await this.#shows.settled();
+        if (keep) this.#foresight.history.add(cell.id, code);
+        return Object.freeze({
+          status: "ok" as const,
+          value: running.shown,
+          ...(shown ? { display: shown } : {}),
+        });
       }
-      return this.#failed(outcome.thrown, code, cell, script, outcome.at);
+      if (outcome.terminated) return this.#cutOff(cell);
+      return this.#failed(outcome.thrown, running, outcome.at);
     } catch (thrown) {
-      return this.#failed(thrown, code, cell, script, undefined);
+      return this.#failed(thrown, running, undefined);
     } finally {
-      this.#busy = false;
-      this.#strays.length = 0;
-      this.#options.afterCell?.(cell);
+      this.#ended(running);
     }
   }
 
-  #failed(
-    thrown: unknown,
-    code: string,
-    cell: CellName,
-    script: string,
-    at: Position | undefined,
-  ): CellResult {
-    const stack = this.#thrown?.value === thrown ? this.#thrown?.stack : undefined;
+  async #forms(value: unknown): Promise<MimeBundle | undefined> {
+    return this.#options.unseen && isLibraryShown(value) ? undefined : display(value);
+  }
+
+  /** Let go of a cell that has ended or been cut off; a second time does nothing. */
+  #ended(running: Running): void {
+    if (this.#running !== running) return;
+    this.#running = undefined;
+    this.#options.afterCell?.(running.cell);
+  }
+
+  #failed(thrown: unknown, running: Running, at: Position | undefined): CellResult {
+    const { cell, code, script } = running;
+    const stack = running.thrown?.value === thrown ? running.thrown?.stack : undefined;
     const error = thrownFailure(thrown, {
       cell: cell.number,
       source: code,
@@ -198,22 +295,22 @@ export class Session {
     const { line, column } = error;
     const place = line !== undefined && column !== undefined ? { line, column } : undefined;
     const done = completedPart(code, place);
-    if (done !== "") this.#foresight.history.add(cell.id, done);
+    if (done !== "" && this.#running === running) this.#foresight.history.add(cell.id, done);
     return Object.freeze({ status: "error" as const, error });
   }
 
   /** The outcome once a promise shown last has settled and what the cell left behind had its turn to fail. */
-  async #settled(outcome: Outcome): Promise<Outcome> {
+  async #settled(outcome: Outcome, running: Running): Promise<Outcome> {
     let result = outcome;
-    if (result.ok && types.isPromise(this.#shown)) {
+    if (result.ok && types.isPromise(running.shown)) {
       try {
-        this.#shown = await this.#shown;
+        running.shown = await running.shown;
       } catch (thrown) {
         result = { ok: false, thrown };
       }
     }
     await nextTurn();
-    if (result.ok && this.#strays.length > 0) result = { ok: false, thrown: this.#strays[0] };
+    if (result.ok && running.strays.length > 0) result = { ok: false, thrown: running.strays[0] };
     return result;
   }
 
@@ -227,8 +324,15 @@ export class Session {
   async close(): Promise<void> {
     process.off("unhandledRejection", this.#rejected);
     this.#clearTimers();
-    await this.#foresight.close();
+    if (!this.#options.checker) await this.#foresight.close();
     const engine = await this.#engine;
     engine?.close();
   }
+}
+
+/** What a checker is to know of a session's notebook. */
+export function checkerOptions(options: SessionOptions): CheckerOptions {
+  const { folder, libraryTypes, unitsOf, ownFolder = hingebookFolder() } = options;
+  const paths = libraryTypes === undefined ? {} : { hingebook: libraryTypes };
+  return { folder, ownFolder, paths, ...(unitsOf ? { unitsOf } : {}) };
 }

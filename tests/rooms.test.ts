@@ -66,20 +66,26 @@ describe("rooms of lib/", () => {
     expect([...new Set(library.map(room))].filter((name) => !(name in table))).toEqual([]);
   });
 
-  test.each(library.map((file) => [relative(top, file), file]))("%s imports only what its row allows", (_, file) => {
-    const own = room(file);
-    const wrong = local(file)
-      .filter((target) => room(target) !== own && !(table[own] ?? []).includes(room(target)))
-      .map((target) => relative(top, target));
-    expect(wrong).toEqual([]);
-  });
+  test.each(library.map((file) => [relative(top, file), file]))(
+    "%s imports only what its row allows",
+    (_, file) => {
+      const own = room(file);
+      const wrong = local(file)
+        .filter((target) => room(target) !== own && !(table[own] ?? []).includes(room(target)))
+        .map((target) => relative(top, target));
+      expect(wrong).toEqual([]);
+    },
+  );
 
-  test.each(library.map((file) => [relative(top, file), file]))("%s uses another room by its index or types", (_, file) => {
-    const deep = local(file)
-      .filter((target) => room(target) !== room(file) && !/\/(index|types|record|host)\.ts$/.test(target))
-      .map((target) => relative(top, target));
-    expect(deep).toEqual([]);
-  });
+  test.each(library.map((file) => [relative(top, file), file]))(
+    "%s uses another room by its index or types",
+    (_, file) => {
+      const deep = local(file)
+        .filter((target) => room(target) !== room(file) && !/\/(index|types|record|host)\.ts$/.test(target))
+        .map((target) => relative(top, target));
+      expect(deep).toEqual([]);
+    },
+  );
 
   test("lib/ knows nothing of files, processes or kernels", () => {
     const wrong = library.flatMap((file) =>
@@ -99,7 +105,9 @@ describe("the hand side is independent of the computer side", () => {
   }
   test.each(handSide)("%s never reaches exact", (name) => {
     const start = library.filter((file) => room(file) === name);
-    expect([...reached(start)].filter((file) => room(file) === "exact").map((file) => relative(top, file))).toEqual([]);
+    expect(
+      [...reached(start)].filter((file) => room(file) === "exact").map((file) => relative(top, file)),
+    ).toEqual([]);
   });
   test("the reachability test itself finds a path that is there", () => {
     const start = library.filter((file) => room(file) === "statics");

@@ -12,7 +12,7 @@
 import { existsSync, readFileSync, realpathSync, statSync } from "node:fs";
 import { join, parse } from "node:path";
 import { API } from "typescript-native/unstable/async";
-import { GLOBALS_DECLARATION } from "./globals-declaration.ts";
+import { GLOBALS_DECLARATION, OWN_GLOBALS } from "./globals-declaration.ts";
 
 /** What the compiler says of a place in a text; offsets in UTF-16 units. `file` is absent for the module asked about. */
 export interface Finding {
@@ -81,7 +81,7 @@ export class Compiler {
   readonly #read = (file: string): string | undefined => {
     if (file === this.#module) return this.#text;
     if (file === this.#config) return this.#configuration();
-    if (file === this.#globals) return GLOBALS_DECLARATION;
+    if (file === this.#globals) return this.#needs.node ? OWN_GLOBALS : GLOBALS_DECLARATION;
     return undefined;
   };
 
@@ -94,7 +94,7 @@ export class Compiler {
         types: node ? ["node"] : [],
         paths: Object.fromEntries(Object.entries(paths).map(([name, file]) => [name, [file]])),
       },
-      files: node ? [this.#module] : [this.#globals, this.#module],
+      files: [this.#globals, this.#module],
     });
   }
 

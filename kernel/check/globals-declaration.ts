@@ -1,6 +1,16 @@
 // The declarations of what kernel/globals.ts gives a cell, for the type checker. Used when the cells import nothing of
 // Node's own; when they do, Node's declarations, which hold all of these, take their place.
 
+/** Those that Node does not have: they are declared beside Node's own declarations too. */
+export const OWN_GLOBALS: string = `
+/** Shows a value now, before the cell has ended; \`update\` of the answer fills the same place anew. */
+declare function display(value: unknown): { update(value: unknown): void };
+/** Clears what the cell has shown so far; with \`wait\` when the next output comes. */
+declare function clearOutput(options?: { readonly wait?: boolean }): void;
+/** Not available in a calculation: throws. */
+declare function input(question?: string): never;
+`;
+
 export const GLOBALS_DECLARATION: string = `
 interface Console {
   assert(condition?: unknown, ...values: unknown[]): void;
@@ -23,8 +33,11 @@ interface Console {
 }
 declare var console: Console;
 interface Timer { ref(): this; unref(): this; hasRef(): boolean; }
+declare function setTimeout(callback: (_: void) => void, delay?: number): Timer;
 declare function setTimeout<A extends unknown[]>(callback: (...values: A) => void, delay?: number, ...values: A): Timer;
+declare function setInterval(callback: (_: void) => void, delay?: number): Timer;
 declare function setInterval<A extends unknown[]>(callback: (...values: A) => void, delay?: number, ...values: A): Timer;
+declare function setImmediate(callback: (_: void) => void): Timer;
 declare function setImmediate<A extends unknown[]>(callback: (...values: A) => void, ...values: A): Timer;
 declare function clearTimeout(timer?: Timer): void;
 declare function clearInterval(timer?: Timer): void;
@@ -33,6 +46,7 @@ declare function queueMicrotask(callback: () => void): void;
 declare function structuredClone<T>(value: T): T;
 declare function atob(text: string): string;
 declare function btoa(text: string): string;
+${OWN_GLOBALS}
 declare var performance: { now(): number; readonly timeOrigin: number };
 interface URLSearchParams extends Iterable<[string, string]> {
   append(name: string, value: string): void;

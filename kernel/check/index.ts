@@ -78,10 +78,14 @@ function diagnostic(finding: Finding, { joined, trees, files, unitsOf }: Checked
   });
 }
 
+/** Results kept for texts that may be asked about again. */
+const MOST_KNOWN = 50;
+
 class NotebookChecker implements Checker {
   readonly #options: CheckerOptions;
   readonly #compilers = new Map<string, Compiler>();
   readonly #known = new Map<string, readonly CellDiagnostic[]>();
+  #trees: ReadonlyMap<string, Tree> = new Map();
   #last: Promise<unknown> = Promise.resolve();
 
   constructor(options: CheckerOptions) {
@@ -95,13 +99,20 @@ class NotebookChecker implements Checker {
   }
 
   async #check(cells: readonly string[]): Promise<readonly CellDiagnostic[]> {
-    const trees = cells.map((cell) => parse(cell));
+    const trees = this.#parsed(cells);
     const broken = trees.findIndex(({ faults }) => faults.length > 0);
     const whole = broken < 0 ? trees : trees.slice(0, broken);
     const joined = join(whole);
     const found = await this.#typed(joined, whole);
     const tree = trees[broken];
     return Object.freeze(tree ? [...found, ...syntaxDiagnostic(tree, broken)] : found);
+  }
+
+  /** Trees of the cells, those parsed for the last check used again. */
+  #parsed(cells: readonly string[]): Tree[] {
+    const before = this.#trees;
+    this.#trees = new Map(cells.map((cell) => [cell, before.get(cell) ?? parse(cell)]));
+    return cells.map((cell) => this.#trees.get(cell) ?? parse(cell));
   }
 
   async #typed(joined: Joined, trees: readonly Tree[]): Promise<readonly CellDiagnostic[]> {
@@ -118,7 +129,10 @@ class NotebookChecker implements Checker {
   }
 
   #keep(text: string, fixed: boolean, found: readonly CellDiagnostic[]): readonly CellDiagnostic[] {
-    if (fixed) this.#known.set(text, found);
+    if (!fixed) return found;
+    this.#known.set(text, found);
+    const [oldest] = this.#known.keys();
+    if (this.#known.size > MOST_KNOWN && oldest !== undefined) this.#known.delete(oldest);
     return found;
   }
 

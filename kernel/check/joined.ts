@@ -107,7 +107,8 @@ class Joiner {
     const imports = tree.program.body.filter((node) => node.type === "ImportDeclaration");
     const again = [...declared].some((name) => this.visible.has(name));
     const aliased = imports.some((node) => this.#clashes(node));
-    this.body.add(again || aliased ? "\n;{" : "\n;");
+    // On a line of their own: a comment after them on the same line would not be the cell's documentation.
+    this.body.add(again || aliased ? "\n;{\n" : "\n;\n");
     if (again || aliased) this.depth++;
     for (const node of tree.program.body) if (goesInFront(node)) this.#inFront(tree, node, index);
     this.body.copy(bodyText(tree), index, 0);
@@ -180,4 +181,35 @@ export function join(trees: readonly Tree[]): Joined {
     return { index: segment.index, offset: segment.from + Math.min(offset - segment.at, segment.length) };
   };
   return { text, origin };
+}
+
+/** Cells followed by a text that is being written, for questions about a place in it. */
+export interface JoinedDraft {
+  readonly text: string;
+  /** Where an offset of the draft stands in the text. */
+  readonly place: (offset: number) => number;
+}
+
+/** An import, also one that has not been written to its end. */
+const IMPORT = /^[ \t]*import\b(?!\s*[(.])[^;"'`]*?(?:["'][^"'\n]*["']?;?|$)/gm;
+
+const OPEN = "\n;{\n";
+
+/** Join parsed cells, none with faults, and a draft, which may be anything. Its imports go in front. */
+export function joinDraft(trees: readonly Tree[], draft: string): JoinedDraft {
+  const joiner = new Joiner();
+  for (const [index, tree] of trees.entries()) joiner.cell(tree, index);
+  const { front, body, depth } = joiner;
+  const moved: Segment[] = [];
+  const rest = draft.replace(IMPORT, (found, from: number) => {
+    moved.push({ at: front.text.length, length: found.length, index: trees.length, from });
+    front.add(`${found}\n`);
+    return blank(found);
+  });
+  const start = front.text.length + body.text.length + OPEN.length;
+  const place = (offset: number): number => {
+    const segment = moved.find(({ from, length }) => offset > from && offset <= from + length);
+    return segment ? segment.at + offset - segment.from : start + offset;
+  };
+  return { text: `${front.text}${body.text}${OPEN}${rest}\n}${"}".repeat(depth)}\nexport {};\n`, place };
 }

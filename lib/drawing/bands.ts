@@ -4,6 +4,7 @@ import { type DistributedLoad, type Load, metresAlong } from "../structure/index
 import { arrow } from "./arrows.ts";
 import { along, distance, dot, minus, type Pt, plus, times, unit } from "./geometry.ts";
 import type { MemberLine } from "./members.ts";
+import { repeats } from "./repeats.ts";
 import { type Label, PENS, polyline, type Scene, type Shape, scene } from "./scene.ts";
 
 const DEEPEST = 30;
@@ -68,7 +69,7 @@ function axialBand(on: MemberLine, s: Stretch, offset: number): Band {
   const a = along(on.page(s.begin), out, offset + 4);
   const b = along(on.page(s.end), out, offset + 4);
   const sense = dot([s.load.direction[0], s.load.direction[1]], on.axis) * (s.q1 + s.q2) >= 0 ? 1 : -1;
-  const count = Math.max(1, Math.round(distance(a, b) / 34));
+  const count = Math.max(1, Math.round(repeats(distance(a, b), 34)));
   const step = times([b[0] - a[0], b[1] - a[1]], 1 / count);
   const shapes = Array.from({ length: count }, (_, i) => {
     const tail = along(a, step, i + 0.1);
@@ -84,7 +85,7 @@ function crossBand(on: MemberLine, s: Stretch, offset: number, scaled: Depth): B
   const mean = s.q1 + s.q2 >= 0 ? 1 : -1;
   const out = times(direction, -mean);
   const depth = (q: number): number => depthAt(q, scaled);
-  const count = Math.max(2, Math.round(distance(on.page(s.begin), on.page(s.end)) / 20));
+  const count = Math.max(2, Math.round(repeats(distance(on.page(s.begin), on.page(s.end)), 20)));
   const shapes: Shape[] = [];
   const tops: Pt[] = [];
   for (let i = 0; i <= count; i++) {

@@ -1,12 +1,14 @@
 // Hatching drawn as strokes of its own, so that no pattern id can clash and print keeps it.
 
 import { type Pt, type Segment, turned } from "./geometry.ts";
+import { repeats } from "./repeats.ts";
 
 /** Parallel strokes inside a closed outline (even-odd), at an angle to the page's x axis, `spacing` apart. */
 export function hatch(outline: readonly Pt[], angle: number, spacing: number): readonly Segment[] {
   const flat = outline.map((p) => turned(p, -angle));
   const ys = flat.map((p) => p[1]);
   const found: Segment[] = [];
+  repeats(Math.max(...ys) - Math.min(...ys), spacing);
   // Strokes sit on multiples of the spacing, so that neighbouring outlines continue each other's hatching.
   for (let i = Math.ceil(Math.min(...ys) / spacing); i * spacing < Math.max(...ys); i++) {
     // A hair off the multiple keeps corners that lie exactly on a stroke from being counted twice.

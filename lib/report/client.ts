@@ -26,6 +26,13 @@ export const CLIENT: string = `"use strict";
       const line = targetOf(link);
       if (line) line.classList.add(name);
     }
+    // A run of lines is written by its ends and carries the anchors of all.
+    for (const run of row.querySelectorAll(links.replace("a.ref", "[data-lines]"))) {
+      for (const anchor of (run.getAttribute("data-lines") || "").split(" ")) {
+        const line = document.getElementById(anchor);
+        if (line) line.classList.add(name);
+      }
+    }
   };
 
   const show = (/** @type {HTMLElement} */ link) => {

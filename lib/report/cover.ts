@@ -1,12 +1,15 @@
 // The first page: what is calculated, by whom, how far it may be relied on, and what came out.
 
-import type { CheckEntry, GivenEntry, Head, QueryEntry, ResultEntry } from "../sheet/index.ts";
+import type { CheckEntry, Head, QueryEntry, ResultEntry } from "../sheet/index.ts";
+import { isClosure } from "./arrange.ts";
 import { type Book, type Item, lineAnchor } from "./book.ts";
 import { CAUTIONS, NOT_CONSIDERED, statusWords } from "./cautions.ts";
-import { type Html, h, type Part } from "./html.ts";
+import { closuresOnCover } from "./closures.ts";
+import { type Html, h, type Part, raw } from "./html.ts";
 import { setFromOutside, verdict } from "./lines.ts";
-import { maths } from "./maths.ts";
+import { maths, wrapping } from "./maths.ts";
 import { numberLink } from "./references.ts";
+import { unbroken } from "./words.ts";
 
 type Of<E> = Item & { readonly entry: E };
 
@@ -54,20 +57,25 @@ function governing(items: readonly Of<ResultEntry>[]): Html {
       entry,
       label,
     }) => h`<li><a class="no" href="#${lineAnchor(entry.id)}" aria-label="line ${label}">${label}</a>
-<p class="value">${maths(entry.tex)} = ${numberLink(entry.id, entry.value.text)}</p><p>${entry.description}</p></li>`,
+<p class="value">${maths(entry.tex)} = ${numberLink(entry.id, entry.value.text)}</p><p>${unbroken(entry.description)}</p></li>`,
   )}</ul>`;
 }
 
-function checks(items: readonly Of<CheckEntry>[]): Html {
+/** The engineer's own checks and every check that fails, each by itself; then one line on the equations that close. */
+function checks(book: Book): Html {
+  const items = ofKind(book, "check");
   if (items.length === 0) return h`<p class="none">No check is made in this calculation.</p>`;
-  return h`<ul class="ledger">${items.map(
-    ({
-      entry,
-      label,
-    }) => h`<li><a class="no" href="#${lineAnchor(entry.id)}" aria-label="line ${label}">${label}</a>
-<p>${entry.description === "" ? maths(entry.lines.symbols) : entry.description}</p><p>${verdict(entry)}</p></li>`,
-  )}</ul>`;
+  const listed = items.filter((item) => !isClosure(item) || !item.entry.passed);
+  return h`<ul class="ledger">${listed.map(checkLine)}${closuresOnCover(book)}</ul>`;
 }
+
+const checkLine = ({ entry, label }: Of<CheckEntry>): Html => {
+  // A formula may be long: it has the width to itself, and the verdict stands beneath.
+  const formula = entry.description === "";
+  const what = formula ? wrapping(entry.lines.symbols) : h`${unbroken(entry.description)}`;
+  return h`<li${formula ? raw(' class="stacked"') : ""}><a class="no" href="#${lineAnchor(entry.id)}" aria-label="line ${label}">${label}</a>
+<p>${what}</p><p>${verdict(entry)}</p></li>`;
+};
 
 function queries(items: readonly Of<QueryEntry>[]): Html {
   if (items.length === 0) return h`<p class="none">None.</p>`;
@@ -78,11 +86,11 @@ function queries(items: readonly Of<QueryEntry>[]): Html {
 }
 
 function outside(book: Book): Part {
-  const entries = ofKind(book, "given").filter((g) => g.entry.overridden);
+  const entries = [...ofKind(book, "given"), ...ofKind(book, "assumption")].filter((g) => g.entry.overridden);
   const shown = new Set(entries.map((g) => g.entry.symbol));
   const others = book.record.overrides.filter((o) => !shown.has(o.symbol));
   if (entries.length === 0 && others.length === 0) return "";
-  return h`<section><h3>Set from outside</h3>${entries.map((g) => setFromOutside(g.entry as GivenEntry))}${others.map(
+  return h`<section><h3>Set from outside</h3>${entries.map((g) => setFromOutside(g.entry))}${others.map(
     (o) => h`<p class="outside">set from outside: ${o.symbol} = ${o.set}, notebook says ${o.written}</p>`,
   )}</section>`;
 }
@@ -110,7 +118,7 @@ ${titleBlock(head)}
 ${stopped(book)}<section class="summary" aria-labelledby="outcome"><h2 id="outcome">Outcome</h2>
 ${outdated(book)}
 <section><h3>Governing results</h3>${governing(ofKind(book, "result"))}</section>
-<section><h3>Checks${count}</h3>${checks(ofKind(book, "check"))}</section>
+<section><h3>Checks${count}</h3>${checks(book)}</section>
 <section><h3>Open queries</h3>${queries(ofKind(book, "query"))}</section>
 ${outside(book)}
 <section><h3>Not considered</h3><ul class="plain">${(notConsidered ?? NOT_CONSIDERED).map((t) => h`<li>${t}</li>`)}</ul></section>

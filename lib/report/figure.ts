@@ -7,6 +7,9 @@ const KINDS: readonly FigureSpec["kind"][] = [
   "mechanism",
   "free body",
   "diagrams",
+  "self-stress",
+  "shape",
+  "deflection",
   "line chart",
 ];
 
@@ -20,3 +23,24 @@ export async function drawFigureSpec(spec: { readonly kind: string }, prefix: st
   }
   return spec.kind === "line chart" ? drawLineChart(spec, prefix) : drawSketch(spec, prefix);
 }
+
+/** Internal forces of a frame too large for one page are drawn on one per quantity; every other figure is one drawing. */
+export async function drawFigureParts(
+  spec: { readonly kind: string },
+  prefix: string,
+): Promise<readonly string[]> {
+  const whole = await drawFigureSpec(spec, prefix);
+  if (!isFigureSpec(spec) || spec.kind !== "diagrams" || spec.quantities.length < 2 || !isLarge(whole))
+    return [whole];
+  return spec.quantities.map((quantity) =>
+    drawSketch(
+      { ...spec, title: `${spec.title}: ${quantity}`, quantities: [quantity] },
+      `${prefix}-${quantity}`,
+    ),
+  );
+}
+
+/** Height in px above which a drawing would be shrunk to fit a printed page. */
+const TALL = 900;
+
+const isLarge = (svg: string): boolean => Number(/ height="([\d.]+)"/.exec(svg)?.[1]) > TALL;

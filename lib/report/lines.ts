@@ -20,11 +20,26 @@ import { markdown } from "./markdown.ts";
 import { maths, threeLines } from "./maths.ts";
 import { margin, numberLink } from "./references.ts";
 import { table } from "./tables.ts";
+import { unbroken, withMinus } from "./words.ts";
 
-/** SVG of the figures of a record, by entry id. */
-export type Figures = ReadonlyMap<string, { readonly number: number; readonly svg: string }>;
+/** SVG of a figure, in parts that a page may break between, with its number; a wide one is more than a telephone shows at a legible size. */
+export interface DrawnFigure {
+  readonly number: number;
+  readonly parts: readonly string[];
+  readonly wide: boolean;
+}
 
-const says = (description: string): Part => (description === "" ? "" : h`<p class="says">${description}</p>`);
+/** The figures of a record, by entry id. */
+export type Figures = ReadonlyMap<string, DrawnFigure>;
+
+/** What is shown other than the entry says: the equation of a step by name, the caption of a figure. */
+export interface Wording {
+  readonly heading?: string;
+  readonly caption?: string;
+}
+
+const says = (description: string): Part =>
+  description === "" ? "" : h`<p class="says">${unbroken(description)}</p>`;
 
 /** "Utilisation 0.83" to two places; three where two would round a failure to 1.00. */
 export function utilisationText(value: number): string {
@@ -39,9 +54,10 @@ export function verdict(entry: CheckEntry): Html {
     : h`<strong class="fails">DOES NOT HOLD${used}</strong>`;
 }
 
-export function setFromOutside(entry: GivenEntry): Part {
-  if (!entry.overridden) return "";
-  return h`<p class="outside">set from outside: ${maths(entry.tex)} = ${entry.value.text}, notebook says ${entry.overridden.text}</p>`;
+/** A given or assumption whose value is not the one written in the notebook. */
+export function setFromOutside({ tex, value, overridden }: GivenEntry | AssumptionEntry): Part {
+  if (!overridden || tex === undefined || value === undefined) return "";
+  return h`<p class="outside">set from outside: ${maths(tex)} = ${value.text}, notebook says ${overridden.text}</p>`;
 }
 
 const value = (entry: GivenEntry | CalcEntry | ResultEntry): Html =>
@@ -55,11 +71,13 @@ const given = (entry: GivenEntry): Part => [
 ];
 
 function assumption(entry: AssumptionEntry): Part {
+  const { symbol, tex, value: valued, text: words } = entry;
   const shown =
-    entry.value && entry.tex
-      ? h`<p class="value">${maths(entry.tex)} = ${numberLink(entry.id, entry.value.text)}</p>`
-      : "";
-  return [shown, h`<p>${entry.text}</p>`, h`<p class="source">because ${entry.because}</p>`];
+    valued && tex ? h`<p class="value">${maths(tex)} = ${numberLink(entry.id, valued.text)}</p>` : "";
+  // The ledger writes "r = 2.50" where the engineer gave no words; the line above says that.
+  const said =
+    words === "" || (valued && words === `${symbol} = ${valued.text}`) ? "" : h`<p>${unbroken(words)}</p>`;
+  return [shown, said, h`<p class="source">because ${unbroken(entry.because)}</p>`, setFromOutside(entry)];
 }
 
 const calc = (entry: CalcEntry): Part => [
@@ -75,8 +93,9 @@ const check = (entry: CheckEntry): Part => [
 
 const result = (entry: ResultEntry): Part => [
   value(entry),
-  says(entry.description),
-  entry.governing ? h`<p class="source">governs</p>` : "",
+  says(
+    entry.governing ? [entry.description, "governs"].filter((t) => t !== "").join("; ") : entry.description,
+  ),
 ];
 
 const step = (entry: StepEntry, heading: string): Part => [
@@ -84,23 +103,37 @@ const step = (entry: StepEntry, heading: string): Part => [
   threeLines(entry.lines, (found) => numberLink(entry.id, found, entry.value.text)),
 ];
 
-const finding = (entry: FindingEntry): Part => [
-  h`<p class="says"><strong>${entry.title}</strong></p>`,
-  entry.lines.length > 0 ? h`<ul class="working">${entry.lines.map((l) => h`<li>${l}</li>`)}</ul>` : "",
-  h`<p>${numberLink(entry.id, entry.verdict)}</p>`,
-];
+const plain = (text: string): string => text.replaceAll("−", "-").trim();
 
-function figure(entry: FigureEntry, figures: Figures): Part {
-  const drawn = figures.get(entry.id);
-  return h`<figure class="${entry.spec.kind.replaceAll(" ", "-")}">${raw(drawn?.svg ?? "")}<figcaption>Figure ${drawn?.number ?? ""}. ${entry.caption}</figcaption></figure>`;
+/** The verdict, then the working, without what the verdict says already. */
+function finding(entry: FindingEntry): Part {
+  const working = entry.lines.filter((l) => !plain(entry.verdict).includes(plain(l)));
+  return [
+    h`<p class="says"><strong>${entry.title}</strong></p>`,
+    h`<p>${numberLink(entry.id, unbroken(withMinus(entry.verdict)))}</p>`,
+    working.length > 0
+      ? h`<ul class="working">${working.map((l) => h`<li>${unbroken(withMinus(l))}</li>`)}</ul>`
+      : "",
+  ];
 }
 
-const note = (entry: NoteEntry): Part => h`<p class="note">${entry.text}</p>`;
+function figure(entry: FigureEntry, figures: Figures, caption: string): Part {
+  const drawn = figures.get(entry.id);
+  const parts = (drawn?.parts ?? []).map(raw);
+  // A drawing wider than a telephone moves in a frame of its own, so that its letters can still be read.
+  const frame = drawn?.wide
+    ? h`<div class="scroll" tabindex="0" role="group" aria-label="figure ${drawn.number}">${parts}</div>`
+    : parts;
+  const words = caption === "" ? "" : ` ${unbroken(caption)}`;
+  return h`<figure class="${entry.spec.kind.replaceAll(" ", "-")}">${frame}<figcaption>Figure ${drawn?.number ?? ""}.${words}</figcaption></figure>`;
+}
+
+const note = (entry: NoteEntry): Part => h`<p class="note">${unbroken(entry.text)}</p>`;
 const query = (entry: QueryEntry): Part => h`<p class="query"><strong>Open query.</strong> ${entry.text}</p>`;
 const conclusion = (entry: ConclusionEntry): Part => h`<p class="conclusion">${entry.text}</p>`;
 const text = (entry: TextEntry): Part => h`<div class="prose">${markdown(entry.markdown)}</div>`;
 
-function matter(item: Item, figures: Figures, heading: string): Part {
+function matter(item: Item, figures: Figures, { heading = "", caption }: Wording): Part {
   const { entry } = item;
   switch (entry.kind) {
     case "given":
@@ -120,7 +153,7 @@ function matter(item: Item, figures: Figures, heading: string): Part {
     case "table":
       return table(entry);
     case "figure":
-      return figure(entry, figures);
+      return figure(entry, figures, caption ?? entry.caption);
     case "note":
       return note(entry);
     case "query":
@@ -134,8 +167,8 @@ function matter(item: Item, figures: Figures, heading: string): Part {
 
 const STALE = h`<p class="stale">OUT OF DATE: something this stands on has changed since it was worked out.</p>`;
 
-/** One entry as a line of the page; `heading` says which equation a step is. */
-export function line(book: Book, item: Item, figures: Figures, heading = ""): Html {
+/** One entry as a line of the page. */
+export function line(book: Book, item: Item, figures: Figures, wording: Wording = {}): Html {
   const { entry, label } = item;
   const anchor = lineAnchor(entry.id);
   const number =
@@ -143,7 +176,7 @@ export function line(book: Book, item: Item, figures: Figures, heading = ""): Ht
   const stale = entry.outOfDate ? STALE : "";
   return h`<div class="line ${entry.kind}${entry.outOfDate ? " outdated" : ""}" id="${anchor}">
 <div class="number">${number}</div>
-<div class="matter">${stale}${matter(item, figures, heading)}</div>
+<div class="matter">${stale}${matter(item, figures, wording)}</div>
 ${margin(book, item)}
 </div>
 `;

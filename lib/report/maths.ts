@@ -6,6 +6,16 @@ import { type Html, h, joined, raw } from "./html.ts";
 const set = new Map<string, Html>();
 const KEPT = 2000;
 
+/** TeX whose subscripts of several names are upright throughout: M_{\mathrm{BC},B} is M_{\mathrm{BC,B}}. */
+export const uprightSubscripts = (tex: string): string =>
+  tex.replace(/_\{((?:\\mathrm\{[^{}]*\}|\w+)(?:,(?:\\mathrm\{[^{}]*\}|\w+))+)\}/g, (_, inside: string) => {
+    return `_{\\mathrm{${inside.replace(/\\mathrm\{([^{}]*)\}/g, "$1")}}}`;
+  });
+
+const written = (tex: string, display: boolean): Html =>
+  // Sums of forces are small signs in a line of text; only fractions need the height of a displayed formula.
+  raw(toMathML(uprightSubscripts(tex), { display: display && /\\frac\b/.test(tex) }));
+
 /** A formula as MathML, `display` with fractions in full size; the text itself where TeX cannot be read. */
 export function maths(tex: string, display = false): Html {
   const key = `${display} ${tex}`;
@@ -13,7 +23,7 @@ export function maths(tex: string, display = false): Html {
   if (known) return known;
   let made: Html;
   try {
-    made = raw(toMathML(tex, { display }));
+    made = written(tex, display);
   } catch {
     made = h`<code>${tex}</code>`;
   }
@@ -43,16 +53,20 @@ export function breakable(tex: string): readonly string[] {
     pieces.push(before);
     start = i;
   }
-  return [...pieces, tex.slice(start).trim()];
+  const last = tex.slice(start).trim();
+  // "= 0" alone on a line says nothing.
+  return last.length < 5 && last.startsWith("=") && pieces.length > 1
+    ? [...pieces.slice(0, -1), `${pieces.at(-1)} ${last}`]
+    : [...pieces, last];
 }
 
 /** A formula that may run over several lines. */
-function wrapping(tex: string): Html {
+export function wrapping(tex: string): Html {
   const pieces = breakable(tex);
   if (pieces.length === 1) return maths(tex, true);
   try {
     // The empty group makes the sign at the start of a piece one between two terms.
-    const laid = pieces.map((piece, i) => raw(toMathML(i === 0 ? piece : `{}${piece}`, { display: true })));
+    const laid = pieces.map((piece, i) => written(i === 0 ? piece : `{}${piece}`, true));
     return h`${joined(laid, " ")}`;
   } catch {
     return maths(tex, true);
@@ -69,6 +83,9 @@ function sides(tex: string): readonly [string, string] | undefined {
   }
   return undefined;
 }
+
+/** What stands right of the first equals sign, with the sign; the whole where there is none. */
+export const rightSide = (tex: string): string => sides(tex)?.[1] ?? tex;
 
 /** The three lines of a formula; `link` wraps the last one, the number. */
 export function threeLines(lines: FormulaLines, link: (result: Html) => Html): Html {

@@ -1,15 +1,19 @@
 // A record as one HTML file that needs nothing else.
 
-import { createHash } from "node:crypto";
-import type { FreeBodyFigure } from "../drawing/index.ts";
-import type { CalculationRecord } from "../sheet/index.ts";
-import { type Book, bookOf, type Item } from "./book.ts";
+import { type CalculationRecord, canonicalJson, sha256 } from "../sheet/index.ts";
+import { type Block, blocksOf } from "./arrange.ts";
+import { body } from "./body.ts";
+import { type Book, bookOf } from "./book.ts";
 import { statusWords } from "./cautions.ts";
 import { CLIENT } from "./client.ts";
+import { closures } from "./closures.ts";
 import { cover } from "./cover.ts";
-import { drawFigureSpec } from "./figure.ts";
+import { policyDigest } from "./digest.ts";
+import { drawFigureParts } from "./figure.ts";
 import { type Html, h, type Part, raw } from "./html.ts";
-import { type Figures, line } from "./lines.ts";
+import { issueSection, movesSection } from "./issue-section.ts";
+import { type DrawnFigure, type Figures, line } from "./lines.ts";
+import { RECHECK_CLIENT, recheckLine } from "./recheck-client.ts";
 import { pageStyle } from "./style.ts";
 import { why } from "./why.ts";
 
@@ -18,16 +22,19 @@ export interface PackageOptions {
   readonly language?: string;
 }
 
-const sha256 = (text: string, encoding: "base64" | "hex"): string =>
-  createHash("sha256").update(text, "utf8").digest(encoding);
+/** Wider drawings than this, in px, are not shrunk to a telephone. */
+const NARROW = 500;
+
+const widthOf = (svg: string): number => Number(/ width="([\d.]+)"/.exec(svg)?.[1] ?? 0);
 
 async function drawFigures(record: CalculationRecord): Promise<Figures> {
-  const figures = new Map<string, { number: number; svg: string }>();
+  const figures = new Map<string, DrawnFigure>();
   for (const entry of record.entries) {
     if (entry.kind !== "figure") continue;
     const number = figures.size + 1;
     try {
-      figures.set(entry.id, { number, svg: await drawFigureSpec(entry.spec, `fig${number}`) });
+      const parts = await drawFigureParts(entry.spec, `fig${number}`);
+      figures.set(entry.id, { number, parts, wide: Math.max(...parts.map(widthOf)) > NARROW });
     } catch (error) {
       throw new Error(`figure "${entry.id}" (${entry.caption}): ${(error as Error).message}`);
     }
@@ -45,33 +52,26 @@ const kept = (book: Book, kind: "given" | "assumption", figures: Figures): Part 
   return items.length === 0 ? h`<p class="none">None.</p>` : items.map((i) => line(book, i, figures));
 };
 
-/** The body a line belongs to: that of a step, or the one a free-body figure shows. */
-function bodyOf({ entry }: Item): string {
-  if (entry.kind === "step") return entry.body;
-  if (entry.kind !== "figure" || !("body" in entry.spec)) return "";
-  return (entry.spec as FreeBodyFigure).body.name;
+/** Lines in the notebook's order; a body cut free stands beside its equations, equations left over together. */
+const calculation = (book: Book, figures: Figures): Part =>
+  blocksOf(book).map((block) => blockOf(book, block, figures));
+
+function blockOf(book: Book, block: Block, figures: Figures): Html {
+  switch (block.kind) {
+    case "line":
+      return line(book, block.item, figures);
+    case "body":
+      return body(book, block, figures);
+    case "closures":
+      return closures(book, block.items);
+  }
 }
 
-/** Lines in the notebook's order; what concerns one body stands under its name. */
-function calculation(book: Book, figures: Figures): Part {
-  let body = "";
-  return book.items
-    .filter((i) => i.entry.kind !== "given" && i.entry.kind !== "assumption")
-    .map((item): Part => {
-      const own = bodyOf(item);
-      // "beam AB, moments about A" goes on about "beam AB".
-      const goesOn = body !== "" && (own === body || own.startsWith(`${body}, `));
-      if (!goesOn) body = own;
-      const title = goesOn || own === "" ? "" : h`<h3 class="body-name">${own}</h3>\n`;
-      return [title, line(book, item, figures, goesOn ? own.slice(body.length + 2) : "")];
-    });
-}
+const embedded = (json: string): string => json.replace(/</g, "\\u003c");
 
-const embedded = (record: CalculationRecord): string => JSON.stringify(record).replace(/</g, "\\u003c");
-
-function colophon(record: CalculationRecord, json: string): Html {
+function colophon(record: CalculationRecord, digest: string): Html {
   const versions = Object.entries(record.versions).map(([name, version]) => `${name} ${version}`);
-  return h`<footer class="colophon"><p>Made from notebook ${record.notebook.name} by ${versions.join(", ") || "an unnamed version"}. Record SHA-256 ${sha256(json, "hex")}. This file holds the record and the notebook it was made from.</p></footer>
+  return h`<footer class="colophon"><p>Made from notebook ${record.notebook.name} by ${versions.join(", ") || "an unnamed version"}. Record SHA-256 ${digest}. This file holds the record and the notebook it was made from.</p></footer>
 `;
 }
 
@@ -81,21 +81,22 @@ const PANEL = h`<aside id="trace" tabindex="-1" aria-label="What the chosen numb
 const CONTENTS = h`<nav class="contents" aria-label="Contents"><a href="#outcome">Outcome</a> <a href="#givens">Givens</a> <a href="#assumptions">Assumptions</a> <a href="#calculation">Calculation</a> <a href="#provenance">What stands on what</a> <a href="#notebook">Notebook</a></nav>
 `;
 
+const SCRIPT = CLIENT + RECHECK_CLIENT;
+
 /** A calculation as one self-contained HTML file: no network, all text escaped, a content-security policy by hash.
  *  Throws on a record that contradicts itself (ids twice, references that cannot be read) and on a figure that cannot
  *  be drawn, naming it. */
-export async function renderPackage(
-  record: CalculationRecord,
-  options: PackageOptions = {},
-): Promise<string> {
+export async function renderPackage(given: CalculationRecord, options: PackageOptions = {}): Promise<string> {
+  // Written from the canonical form, so that the same record gives the same page, whatever order its fields came in.
+  const json = canonicalJson(given);
+  const record = JSON.parse(json) as CalculationRecord;
   const book = bookOf(record);
   const figures = await drawFigures(record);
   const style = pageStyle(record);
-  const json = embedded(record);
   const policy = [
     "default-src 'none'",
-    `style-src 'sha256-${sha256(style, "base64")}'`,
-    `script-src 'sha256-${sha256(CLIENT, "base64")}'`,
+    `style-src 'sha256-${await policyDigest(style)}'`,
+    `script-src 'sha256-${await policyDigest(SCRIPT)}'`,
     "img-src data:",
     "base-uri 'none'",
     "form-action 'none'",
@@ -117,9 +118,9 @@ export async function renderPackage(
 <body>
 <a class="skip" href="#calculation">Skip to the calculation</a>
 ${banner}<main>
-${cover(book)}${CONTENTS}${section("givens", "Givens", kept(book, "given", figures))}${section("assumptions", "Assumptions", kept(book, "assumption", figures))}${section("calculation", "Calculation", calculation(book, figures))}${section("provenance", "What stands on what", why(book))}${section("notebook", "Notebook", h`<details><summary>Source of ${record.notebook.name}</summary><pre tabindex="0">${record.notebook.source}</pre></details>\n`)}${colophon(record, json)}</main>
-${PANEL}<script type="application/json" id="record">${raw(json)}</script>
-<script>${raw(CLIENT)}</script>
+${cover(book)}${recheckLine}${issueSection(book)}${CONTENTS}${section("givens", "Givens", kept(book, "given", figures))}${section("assumptions", "Assumptions", kept(book, "assumption", figures))}${movesSection(book)}${section("calculation", "Calculation", calculation(book, figures))}${section("provenance", "What stands on what", why(book))}${section("notebook", "Notebook", h`<details><summary>Source of ${record.notebook.name}</summary><pre tabindex="0">${record.notebook.source}</pre></details>\n`)}${colophon(record, await sha256(json))}</main>
+${PANEL}<script type="application/json" id="record">${raw(embedded(json))}</script>
+<script>${raw(SCRIPT)}</script>
 </body>
 </html>
 `.html;

@@ -4,6 +4,7 @@ import type { Entry } from "../sheet/index.ts";
 import { type Book, type Ground, type Item, lineAnchor, whyAnchor } from "./book.ts";
 import { type Html, h, joined, type Part } from "./html.ts";
 import { maths } from "./maths.ts";
+import { runsOf } from "./runs.ts";
 
 /** Where an entry is, in words: "line 12", "given G3", "assumption A2", "the text of cell 4". */
 export function placeName(item: Item): string {
@@ -22,26 +23,44 @@ export function nameOf(item: Item): Html {
 
 interface Reference {
   readonly link: Html;
-  /** Lines named by number only, gathered behind the word "lines". */
-  readonly bare: boolean;
+  readonly id: string;
+  /** Number of a line that has no symbol: gathered with others behind the word "lines". */
+  readonly line?: number;
 }
 
 function reference(item: Item, after: Part = ""): Reference {
-  const bare = texOf(item.entry) === undefined && /^\d+$/.test(item.label);
-  const text = bare ? h`${item.label}` : nameOf(item);
-  const place = placeName(item);
+  const { id } = item.entry;
+  const tex = texOf(item.entry);
+  const line = tex === undefined && /^\d+$/.test(item.label) ? { line: Number(item.label) } : {};
+  const short = tex !== undefined ? maths(tex) : item.label === "" ? placeName(item) : item.label;
   return {
-    bare,
-    link: h`<a class="ref" href="#${lineAnchor(item.entry.id)}" title="${place}">${text}</a>${after}`,
+    id,
+    ...line,
+    link: h`<a class="ref" href="#${lineAnchor(id)}" title="${placeName(item)}">${short}</a>${after}`,
   };
 }
 
-/** References with commas between; symbols first, then the lines that have none. */
-function listed(references: readonly Reference[]): Part {
-  const named = references.filter((r) => !r.bare).map((r): Part => r.link);
-  const lines = references.filter((r) => r.bare).map((r): Part => r.link);
+/** Lines by number, runs by their ends; a run carries the anchors of all its lines, for the page's script. */
+function lineList(references: readonly Reference[]): readonly Html[] {
+  const at = new Map(references.map((r) => [r.line ?? 0, r]));
+  return runsOf([...at.keys()]).map((run) => {
+    const [first, last] = [at.get(run[0] ?? 0), at.get(run.at(-1) ?? 0)];
+    if (run.length === 1) return h`${first?.link}`;
+    const anchors = run.map((n) => lineAnchor(at.get(n)?.id ?? "")).join(" ");
+    return h`<span class="run" data-lines="${anchors}">${first?.link} to ${last?.link}</span>`;
+  });
+}
+
+/** References with commas between, symbols first, then the lines that have none; `most` limits how many are named. */
+function listed(references: readonly Reference[], most = Number.POSITIVE_INFINITY, more: Part = ""): Part {
+  const named = references.filter((r) => r.line === undefined);
+  const lines = references.filter((r) => r.line !== undefined);
+  const shown = named.slice(0, most).map((r): Part => r.link);
+  const runs = lineList(lines);
+  const kept = runs.slice(0, Math.max(0, most - shown.length));
   const word = lines.length === 1 ? "line " : "lines ";
-  return joined(lines.length === 0 ? named : [...named, [word, joined(lines, ", ")]], ", ");
+  const list = joined(kept.length === 0 ? shown : [...shown, [word, joined(kept, ", ")]], ", ");
+  return shown.length + kept.length < named.length + runs.length ? [list, more] : list;
 }
 
 const CHANGED = h` <span class="stale">(changed since)</span>`;
@@ -49,14 +68,18 @@ const CHANGED = h` <span class="stale">(changed since)</span>`;
 const groundReference = (book: Book, ground: Ground): Reference => {
   const item = book.item(ground.id);
   if (item) return reference(item, ground.state === "changed" ? CHANGED : "");
-  return { bare: false, link: h`<span class="gone">${ground.id} (no longer on the sheet)</span>` };
+  return { id: ground.id, link: h`<span class="gone">${ground.id} (no longer on the sheet)</span>` };
 };
 
-/** Links to everything an entry stands on. */
-export const groundLinks = (book: Book, grounds: readonly Ground[]): Part =>
-  grounds.length === 0
-    ? h`<span class="none">nothing else on this sheet</span>`
-    : listed(grounds.map((g) => groundReference(book, g)));
+/** Links to everything an entry stands on. What has changed since is always named by itself. */
+export function groundLinks(book: Book, grounds: readonly Ground[]): Part {
+  if (grounds.length === 0) return h`<span class="none">nothing else on this sheet</span>`;
+  const references = grounds.map((g) => {
+    const { line, ...alone } = groundReference(book, g);
+    return g.state === "current" && line !== undefined ? { ...alone, line } : alone;
+  });
+  return listed(references);
+}
 
 const itemReferences = (book: Book, ids: readonly string[]): Reference[] =>
   ids.flatMap((id) => {
@@ -82,13 +105,11 @@ export const cellLink = (id: string, group: number, shown: Part): Html =>
   h`<a class="num" href="#${whyAnchor(id, group)}">${shown}</a>`;
 
 /** More than this many in the margin are named in the list of what stands on what. */
-const MOST = 9;
+const MOST = 5;
 
 function used(book: Book, item: Item): Part {
-  const shown = item.by.length > MOST ? item.by.slice(0, MOST - 2) : item.by;
-  const rest = item.by.length - shown.length;
-  const more = rest === 0 ? "" : h` and <a class="ref" href="#${whyAnchor(item.entry.id)}">${rest} more</a>`;
-  return h`<p><span class="tag">used by</span> ${itemLinks(book, shown)}${more}</p>`;
+  const more = h` and <a class="ref" href="#${whyAnchor(item.entry.id)}">more</a>`;
+  return h`<p><span class="tag">used by</span> ${listed(itemReferences(book, item.by), MOST, more)}</p>`;
 }
 
 /** The right-hand margin of a line. */

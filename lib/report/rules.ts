@@ -43,7 +43,7 @@ dt { font-size: .72rem; color: var(--quiet); }
 .summary > :not(h2) { margin-left: var(--left); }
 .plain li { padding-left: 1rem; text-indent: -1rem; margin-bottom: .25rem; } .plain li::before { content: "– "; display: inline-block; width: 1rem; text-indent: 0; }
 .ledger li { display: grid; grid-template-columns: 2.2rem minmax(0, 3fr) minmax(0, 2fr); gap: 0 .6rem; align-items: baseline; padding: .28rem 0; border-top: 1px solid var(--rule); }
-.ledger .wide { grid-column: 2 / -1; }
+.ledger .wide, .ledger .stacked p { grid-column: 2 / -1; }
 .contents { display: flex; flex-wrap: wrap; gap: .3rem 1.2rem; margin: 1.8rem 0 0 var(--left); padding: .55rem 0; border: 1px solid var(--rule); border-width: 1px 0; font-size: .85rem; }
 .contents a { padding: .2rem 0; }
 
@@ -56,36 +56,52 @@ dt { font-size: .72rem; color: var(--quiet); }
 .margin { font-size: .86rem; line-height: 1.4; padding: .42rem 0 .3rem .4rem; color: var(--quiet); }
 .line.figure .margin, .line.table .margin { grid-column: 2; border-left: 1.5px solid var(--accent); padding: 0 1rem .5rem; } .line.text .margin:empty { display: none; }
 .line.figure .margin p, .line.table .margin p { display: inline; margin-right: 1rem; }
-.body-name { margin: 0; padding: .9rem 0 .1rem 1rem; border-left: 1.5px solid var(--accent); margin-left: var(--left); }
+.body { display: grid; grid-template: "name name" auto "steps drawn" 1fr / minmax(0, 1fr) 22rem; }
+.body.undrawn { display: block; }
+.body-name { grid-area: name; margin: 0; padding: .7rem 0 .1rem 1rem; border-left: 1.5px solid var(--accent); margin-left: var(--left); }
+.steps { grid-area: steps; display: flex; flex-direction: column; }
+.steps::after { content: ""; flex: 1; margin-left: var(--left); border-left: 1.5px solid var(--accent); }
+.drawn { grid-area: drawn; padding-left: .6rem; }
+.body:not(.undrawn) .steps .line { grid-template-columns: var(--left) minmax(0, 1fr); }
+.body:not(.undrawn) .steps .margin { grid-column: 2; border-left: 1.5px solid var(--accent); padding: 0 0 .3rem 1rem; }
+.body:not(.undrawn) .steps .margin p, .drawn .margin p { display: inline; margin-right: .8rem; }
+.steps .matter { padding-bottom: 0; }
+.drawn .line { grid-template-columns: 1.9rem minmax(0, 1fr); } .drawn .number { padding: 0 .4rem 0 0; }
+.drawn .matter, .drawn .line.figure .margin { border-left: 0; padding: 0; }
+.closures .heading { margin-left: var(--left); padding: .7rem 0 .1rem 1rem; border-left: 1.5px solid var(--accent); color: var(--quiet); }
+.closure .matter { padding-top: .1rem; padding-bottom: .1rem; font-size: .94rem; } .closure .number { padding-top: .1rem; } .closure .margin { padding-top: .15rem; padding-bottom: 0; }
+.closure .sum, .closure .own { display: inline; } .closure .own { font-size: .84rem; color: var(--quiet); margin-left: .6rem; }
 .value { font-size: 1.04rem; }
-.given .matter { display: grid; grid-template-columns: minmax(9rem, 2fr) minmax(0, 3fr); gap: 0 1rem; align-items: baseline; align-content: start; }
-.given .source { grid-column: 2; } .given .outside, .given .stale { grid-column: 1 / -1; }
+.given .matter, .result .matter { display: grid; grid-template-columns: minmax(9rem, 2fr) minmax(0, 3fr); gap: 0 1rem; align-items: baseline; align-content: start; }
+.given .source { grid-column: 2; } .given .outside, .given .stale, .result .stale { grid-column: 1 / -1; }
 .num { color: var(--ink); border-bottom: 1.5px solid var(--accent); padding: 0 .08em; }
 .formula .num { display: inline-block; position: relative; }
+.value .num, .closure .num { white-space: nowrap; }
 .num:hover { background: var(--wash); text-decoration: none; }
-.formula { display: grid; grid-template-columns: max-content minmax(0, 1fr); gap: .28rem .35rem; align-items: center; overflow-x: auto; padding: .1rem 0; }
+.formula { display: grid; grid-template-columns: max-content minmax(0, 1fr); gap: .06rem .35rem; align-items: center; overflow-x: auto; padding: .05rem 0; }
 .formula.plain { grid-template-columns: minmax(0, 1fr); }
 .spoken { position: absolute; width: 1px; height: 1px; overflow: hidden; clip-path: inset(50%); white-space: nowrap; }
 .why .what, .ledger p { overflow-x: auto; overflow-y: hidden; }
-.formula > span { min-width: 0; padding: .12rem 0; } .formula math { display: inline math; }
+.formula > span { min-width: 0; padding: .05rem 0; } .formula math, .sum math, .ledger math { display: inline math; }
 .holds { font-weight: 600; } .fails { font-weight: 700; background: var(--ink); color: var(--paper); padding: .05rem .4rem; }
 .stale { font-weight: 700; border: 2px dashed var(--ink); padding: .2rem .5rem; margin-bottom: .3rem; } .margin .stale { border: 0; padding: 0; }
 .outdated > .matter { border-left-style: dashed; }
 .outside { font-weight: 600; border-left: 4px solid var(--ink); padding-left: .5rem; margin: .2rem 0; }
 .query > .matter { border-left-width: 5px; } .conclusion > .matter { font-weight: 600; }
 .working { margin: .2rem 0; } .working li { padding-left: 1rem; }
-figure { max-width: 33rem; margin: .3rem auto .2rem; } figure.free-body { max-width: 28rem; }
-.figure-svg { display: block; width: 100%; height: auto; }
-figcaption { font-size: .85rem; margin-top: .3rem; }
-.scroll { overflow-x: auto; }
+figure { margin: .3rem 0 .2rem; }
+.figure-svg { display: block; max-width: 100%; height: auto; }
+figcaption { font-size: .85rem; margin-top: .2rem; }
+.scroll { overflow-x: auto; background: linear-gradient(90deg, var(--paper) 40%, #fff0) 0 0 / 2rem 100% no-repeat local, linear-gradient(270deg, var(--paper) 40%, #fff0) 100% 0 / 2rem 100% no-repeat local, linear-gradient(90deg, #57534b66, #57534b00) 0 0 / .7rem 100% no-repeat scroll, linear-gradient(270deg, #57534b66, #57534b00) 100% 0 / .7rem 100% no-repeat scroll; }
 table { border-collapse: collapse; width: 100%; font-size: .95rem; border-top: 2px solid var(--ink); border-bottom: 2px solid var(--ink); }
 caption { text-align: left; font-size: .85rem; padding-bottom: .3rem; }
 th, td { padding: .28rem .6rem; text-align: left; border-top: 1px solid var(--rule); vertical-align: baseline; } th { font-size: .82rem; font-weight: 600; } thead th { border-top: 0; }
 .figures { white-space: nowrap; }
 
-.why li { display: grid; grid-template-columns: var(--left) minmax(0, 5fr) minmax(0, 7fr); gap: 0 1rem; padding: .4rem 0; border-top: 1px solid var(--rule); }
-.why .no { grid-row: 1 / span 4; } .why .what { grid-row: 1 / span 4; grid-column: 2; font-weight: 600; }
-.why .on, .why .by, .why .roots { grid-column: 3; }
+.why { margin-left: var(--left); columns: 2; column-gap: 2rem; font-size: .86rem; line-height: 1.38; }
+.why li { position: relative; break-inside: avoid; padding: .3rem 0 .3rem 2rem; border-top: 1px solid var(--rule); }
+.why .no { position: absolute; left: 0; top: .3rem; min-width: 1.5rem; } .why .what { font-weight: 600; }
+.why p:not(.what) { display: inline; } .why p:not(.what)::after { content: "  "; white-space: pre; }
 .why li:target, .line:target > .matter { background: var(--wash); }
 details { margin-left: var(--left); } summary { cursor: pointer; padding: .3rem 0; } details pre { border: 1px solid var(--rule); padding: .7rem; margin-top: .5rem; }
 .colophon { margin: 2.5rem 0 0 var(--left); padding-top: .6rem; border-top: 1px solid var(--rule); font-size: .82rem; color: var(--quiet); overflow-wrap: anywhere; }
@@ -113,11 +129,14 @@ const NARROW = `
   .matter { padding: .35rem 0 .3rem .7rem; }
   .margin, .line.figure .margin, .line.table .margin { grid-column: 2; border-left: 1.5px solid var(--accent); padding: 0 0 .45rem .7rem; }
   .margin p { display: inline; margin-right: .8rem; }
-  .given .matter { display: block; }
+  .given .matter, .result .matter { display: block; }
+  .scroll td, .scroll th { min-width: 4.4rem; }
   .title-block > div { grid-column: span 3; } .title-block > div:nth-child(3), .title-block > div:nth-child(7) { grid-column: 1 / -1; }
   .ledger li { grid-template-columns: 1.6rem minmax(0, 1fr); } .ledger li > p { grid-column: 2; }
-  .why li { grid-template-columns: var(--left) minmax(0, 1fr); } .why .what, .why .on, .why .by, .why .roots { grid-column: 2; grid-row: auto; }
-  .why .no { grid-row: 1; }
+  .why { columns: 1; margin-left: .3rem; }
+  .body { display: block; } .drawn { padding: 0; } .drawn .line.figure { padding-left: .3rem; }
+  .closures .heading, .body-name { padding-left: .7rem; } .body:not(.undrawn) .steps .margin { padding-left: .7rem; }
+  figure .scroll .figure-svg { max-width: none; width: 40rem; }
   .line.figure { grid-template-columns: minmax(0, 1fr); } .line.figure > .number { text-align: left; padding-left: .5rem; } .line.figure > .matter, .line.figure > .margin { grid-column: 1; border-left: 0; padding-left: .4rem; }
   .is-ground > .number::after, .is-user > .number::after { content: ""; }
   #trace { right: 0; left: 0; bottom: 0; width: 100%; max-height: 45vh; border-width: 2px 0 0; }
@@ -134,18 +153,20 @@ const PRINT = `
   h2[id="notebook"] { display: none; }
   a, .num, .ref { color: inherit; text-decoration: none; border: 0; }
   h2 { margin-top: 7mm; }
-  h2, h3, .body-name, caption { break-after: avoid; }
+  h2, h3, h4, h5, h6, .body-name, caption, .line.text:has(> .matter > .prose > :is(h3, h4, h5, h6):last-child) { break-after: avoid; }
   .line, .why li, .ledger li, .title-block, .stopped, tr, .status, .colophon { break-inside: avoid; }
   .line.text, .line.table { break-inside: auto; }
-  figure { break-inside: avoid; max-width: 120mm; } figure.free-body { max-width: 100mm; }
-  .figure-svg { max-height: 215mm; }
-  .scroll, .formula { overflow: visible; }
+  figure { break-inside: avoid; max-width: 128mm; } .body { grid-template-columns: minmax(0, 1fr) 78mm; } .body, .closures .line { break-inside: avoid; }
+  .closures .heading { break-after: avoid; }
+  .figure-svg { max-height: 215mm; break-inside: avoid; }
+  .line.figure:has(.figure-svg + .figure-svg), figure:has(.figure-svg + .figure-svg) { break-inside: auto; max-width: none; }
+  figure:has(.scroll) { max-width: none; }
+  .scroll, .formula { overflow: visible; background: none; }
   .fails { outline: 1.5pt solid #1c1b19; background: none; color: inherit; }
   .summary { break-after: page; }
   .colophon { break-before: avoid; margin-top: 5mm; }
   .banner { position: static; border: 2pt solid #1c1b19; background: none; color: inherit; margin-bottom: 5mm; }
-  .why { columns: 2; column-gap: 7mm; font-size: 8.4pt; }
-  .why li { display: block; position: relative; padding: 1.2mm 0 1.2mm 9mm; } .why .no { position: absolute; left: 0; top: 1.2mm; min-width: 6mm; }
+  .why { margin-left: 0; column-gap: 7mm; font-size: 8.4pt; } .why li { padding: 1mm 0 1mm 9mm; } .why .no { top: 1mm; min-width: 6mm; }
   .margin { font-size: 8.6pt; } .tag { font-size: 7pt; }
   .stamp { display: block; position: fixed; top: 105mm; left: 0; right: 0; text-align: center; font: 700 58pt sans-serif; color: transparent; -webkit-text-stroke: 1pt #8a867d; transform: rotate(-32deg); opacity: .6; }
   .is-ground > .number::after, .is-user > .number::after { content: none; }

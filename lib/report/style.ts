@@ -3,6 +3,7 @@
 
 import type { CalculationRecord } from "../sheet/index.ts";
 import { statusWords } from "./cautions.ts";
+import { ISSUE_RULES } from "./issue-rules.ts";
 import { RULES } from "./rules.ts";
 
 /** A text as a CSS string, for the running heads; nothing in it can end the string or the style element. */
@@ -30,4 +31,4 @@ function runningHeads({ head, complete }: CalculationRecord): string {
 }
 
 /** The whole style of a package. */
-export const pageStyle = (record: CalculationRecord): string => RULES + runningHeads(record);
+export const pageStyle = (record: CalculationRecord): string => RULES + ISSUE_RULES + runningHeads(record);

@@ -11,7 +11,7 @@ function shown(entry: Entry): Part {
   if (entry.kind === "step") return h`: ${maths(entry.lines.result)}`;
   if (entry.kind === "check")
     return entry.description === "" ? h`: ${entry.formula}` : h`: ${entry.description}`;
-  if (entry.kind === "finding") return h`: ${entry.verdict}`;
+  if (entry.kind === "finding") return h`: ${entry.title}`;
   if (entry.kind === "table" || entry.kind === "figure") return h`: ${entry.caption}`;
   if ("value" in entry && entry.value !== undefined) return h` = ${entry.value.text}`;
   if ("text" in entry) return h`: ${entry.text}`;
@@ -21,10 +21,13 @@ function shown(entry: Entry): Part {
 function row(book: Book, item: Item): Html {
   const { entry, label, by, roots } = item;
   const finally_ =
-    roots.length > 0
+    roots.length > 0 && !item.on.every(({ id }) => roots.includes(id))
       ? h`<p class="roots"><span class="tag">rests in the end on</span> ${itemLinks(book, roots)}</p>`
       : "";
-  const bears = by.length > 0 ? itemLinks(book, by) : h`<span class="none">nothing</span>`;
+  const bears =
+    by.length > 0
+      ? h`<p class="by"><span class="tag">what stands on it</span> ${itemLinks(book, by)}</p>`
+      : "";
   const origin =
     item.on.length === 0 && (entry.kind === "given" || entry.kind === "assumption")
       ? h`<span class="none">${originOf(entry)}</span>`
@@ -33,7 +36,7 @@ function row(book: Book, item: Item): Html {
 <a class="no" href="#${lineAnchor(entry.id)}" aria-label="line ${label}">${label}</a>
 <p class="what">${nameOf(item)}${shown(entry)}</p>
 <p class="on"><span class="tag">stands on</span> ${origin}</p>
-${finally_}<p class="by"><span class="tag">what stands on it</span> ${bears}</p>
+${finally_}${bears}
 </li>
 ${entry.kind === "table" ? cellRows(book, entry, label) : ""}`;
 }

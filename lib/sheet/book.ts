@@ -209,6 +209,10 @@ export class Book implements Ledger {
     this.#store.endCell(cellId);
   }
 
+  setFromOutside<D extends Dimension>(name: string, value: Quantity<D>, written: string): Quantity<D> {
+    return this.#overrides.apply(name, value, written);
+  }
+
   unusedOverrides(): readonly string[] {
     return this.#overrides.unused();
   }

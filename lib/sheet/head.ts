@@ -4,7 +4,7 @@ import { displayUnits, nearest } from "../quantity/index.ts";
 import type { Head } from "./record.ts";
 
 const required = ["title", "job", "preparedBy", "basis", "units", "status"] as const;
-const optional = ["checkedBy", "approvedBy", "date", "revision"] as const;
+const optional = ["checkedBy", "checkedOn", "approvedBy", "approvedOn", "date", "revision"] as const;
 const known: readonly string[] = [...required, ...optional];
 
 const meaning: Readonly<Record<(typeof required)[number], string>> = {

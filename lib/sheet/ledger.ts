@@ -69,6 +69,8 @@ export interface Ledger {
   entries(): readonly Entry[];
   /** Drops what earlier runs of a cell recorded and its last run did not. */
   endCell(cellId: string): void;
+  /** A value the notebook wrote, or the one set from outside under this name; `written` is how the notebook says it. */
+  setFromOutside<D extends Dimension>(name: string, value: Quantity<D>, written: string): Quantity<D>;
   /** Symbols set from outside that no given or assumption has taken up. */
   unusedOverrides(): readonly string[];
   record(about: {

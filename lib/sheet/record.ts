@@ -1,5 +1,9 @@
 // The record: one run of a calculation as plain JSON. Numbers are SI; `unit` is the unit they are shown in.
 
+import type { Changes } from "./change.ts";
+
+export type * from "./change.ts";
+
 export const RECORD_FORMAT = "hingebook record" as const;
 export const RECORD_VERSION = 0 as const;
 
@@ -94,6 +98,8 @@ export interface CheckEntry extends EntryBase {
   readonly description: string;
   /** True for an equation of equilibrium the tool itself wrote as a check: it must close. */
   readonly closure?: true;
+  /** The terms a closure adds up, to be added again by others. */
+  readonly terms?: readonly EquationTerm[];
 }
 
 /** A number taken from an analysis and given a symbol; the governing ones stand on the cover. */
@@ -106,13 +112,21 @@ export interface ResultEntry extends EntryBase {
   readonly governing: boolean;
 }
 
+/** One known term of an equation, SI. `from` names the earlier step the value is taken from, "id@version"; its sign is
+ *  in the coefficient. */
+export interface EquationTerm {
+  readonly coefficient: number;
+  readonly value: number;
+  readonly from?: string;
+}
+
 /** One free-body equation in three lines, with the data to re-add it. */
 export interface StepEntry extends EntryBase {
   readonly kind: "step";
   readonly body: string;
   readonly lines: FormulaLines;
   readonly value: ShownValue;
-  readonly terms: readonly { readonly coefficient: number; readonly value: number }[];
+  readonly terms: readonly EquationTerm[];
   readonly coefficient: number;
 }
 
@@ -187,6 +201,36 @@ export interface Failure {
   readonly excerpt: string;
 }
 
+/** What makes a record an issue: its revision, why it was issued, and its place in the register of issues. */
+export interface IssueMark {
+  readonly revision: string;
+  readonly why: string;
+  /** 1 for the first row of the register. */
+  readonly number: number;
+  /** Digest of the register's row before, 64 noughts for the first. */
+  readonly follows: string;
+}
+
+/** A file beside the notebook that its cells import: its path from the notebook's folder, with "/", and its text. */
+export interface SourceFile {
+  readonly path: string;
+  readonly text: string;
+}
+
+/** How far one assumption moves one result: the calculation run again with that assumption changed alone. */
+export interface Movement {
+  /** Entry of the assumption. */
+  readonly assumption: string;
+  /** What it was changed by, in words: "+10 %". */
+  readonly change: string;
+  /** What it was set to. */
+  readonly set: ShownValue;
+  /** Results that moved; `share` is the change over the value before, absent where that is nought. */
+  readonly results: readonly { readonly id: string; readonly value: ShownValue; readonly share?: number }[];
+  /** Why there is no answer, where the changed calculation did not run to its end. */
+  readonly failed?: string;
+}
+
 export interface CalculationRecord {
   readonly format: typeof RECORD_FORMAT;
   readonly version: typeof RECORD_VERSION;
@@ -198,5 +242,12 @@ export interface CalculationRecord {
   readonly overrides: readonly { readonly symbol: string; readonly written: string; readonly set: string }[];
   readonly entries: readonly Entry[];
   readonly notebook: { readonly name: string; readonly source: string };
+  /** Files beside the notebook that its cells import. */
+  readonly files?: readonly SourceFile[];
   readonly versions: Readonly<Record<string, string>>;
+  readonly issue?: IssueMark;
+  /** What changed since the issue before. */
+  readonly since?: { readonly revision: string; readonly changes: Changes };
+  /** What each assumption moves, where that was asked for. */
+  readonly moves?: readonly Movement[];
 }

@@ -13,6 +13,8 @@ describe("readArguments", () => {
         ["g", "6 kN/m"],
         ["h", "4 m"],
       ]),
+      sensitivity: false,
+      watch: false,
     });
     expect(readArguments(["run", "--", "-odd.ipynb"])).toMatchObject({ files: ["-odd.ipynb"], out: "out" });
   });

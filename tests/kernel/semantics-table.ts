@@ -456,4 +456,22 @@ export const table: readonly Row[] = [
     "const s = '𝛼𝛽'; const n: number = 'x'",
     refused(/not assignable/, 1, 25),
   ]),
+  // What a cell finds besides the language
+  row("waiting for a timer needs no type", [
+    "await new Promise((go) => setTimeout(go, 1));\nawait new Promise((go) => setImmediate(go));\n'done'",
+    shows("'done'"),
+  ]),
+  row("a cell cannot ask for input", ["1;\ninput('load?')", throws(/cannot ask for input/, 2, 1)]),
+  row("names of the notebook's own helpers are free to be declared", [
+    "const input = 3, display = 4;\ninput + display",
+    shows("7"),
+  ]),
+  row("display shows something on the way and is not the cell's value", [
+    "display(1).update(2);\n3",
+    shows("3"),
+  ]),
+  row("a display that fails fails the cell, at its line", [
+    "1;\ndisplay({ toHtml() { throw new Error('no picture') } })",
+    throws(/^no picture$/, 2),
+  ]),
 ];

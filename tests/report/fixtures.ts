@@ -28,6 +28,17 @@ const base = (id: string, cell: number, uses: readonly string[] = []) => ({
   outOfDate: false,
 });
 
+const closure = (id: string, sum: string, terms: string, left: string, passed: boolean): Entry => ({
+  ...base(id, 6, ["A_x@1", "A_y@1", "h1_y@1"]),
+  kind: "check",
+  formula: `${id} = 0`,
+  lines: { symbols: `${sum} = ${terms}`, numbers: "24.9 - 24.9", result: `${sum} = ${left}` },
+  inputs: {},
+  passed,
+  closure: true,
+  description: `roof: ${id === "closure 1" ? "column AB" : "joint B"}: the equation left over closes by itself`,
+});
+
 const entries: readonly Entry[] = [
   {
     ...base("text 1", 1),
@@ -35,6 +46,7 @@ const entries: readonly Entry[] = [
     markdown:
       "# Store roof frame, line 6\n\nThe frame carries the **roof** and the wind at the eave. Hinges are put where the moment is expected to be zero; with $L$ the span, that is about $0.125 L$ from each knee.",
   },
+  { ...base("text 2", 2), kind: "text", markdown: "## Given" },
   {
     ...base("L", 2),
     kind: "given",
@@ -105,6 +117,17 @@ const entries: readonly Entry[] = [
     text: "Bases are pinned.",
     because: "base plates with two bolts on the centreline",
   },
+  {
+    ...base("r_I", 3),
+    kind: "assumption",
+    symbol: "r_I",
+    tex: "r_I",
+    value: shown(2.5, "pure number", "", "2.50"),
+    text: "r_I = 2.50",
+    because: "first guess of sizes",
+    overridden: shown(2, "pure number", "", "2.00"),
+  },
+  { ...base("text 3", 4), kind: "text", markdown: "## Loads and bodies" },
   {
     ...base("w", 4, ["g@2", "s@1"]),
     kind: "calc",
@@ -196,6 +219,8 @@ const entries: readonly Entry[] = [
     ],
     coefficient: 5.5,
   },
+  closure("closure 1", "\\sum F_x", "A_x - X_{h1}", "0\\,\\mathrm{kN}", true),
+  closure("closure 2", "\\sum F_y", "A_y - w a - Y_{h1}", "0.1\\,\\mathrm{kN}", false),
   {
     ...base("diagrams", 7, ["A_x@1", "A_y@1", "w@1"]),
     kind: "figure",
@@ -331,7 +356,7 @@ export const incomplete: CalculationRecord = {
     excerpt:
       '  2 | const bodies =\n> 3 |   sheet.freeBodies(gravity, "E");\n    |                             ^',
   },
-  entries: entries.slice(0, 14),
+  entries: entries.slice(0, 17),
 };
 
 /** The record with one thing changed upstream: what stands on it is out of date. */

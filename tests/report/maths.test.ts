@@ -1,5 +1,5 @@
 import { describe, expect, it } from "vitest";
-import { breakable, maths, threeLines } from "../../lib/report/maths.ts";
+import { breakable, maths, threeLines, uprightSubscripts } from "../../lib/report/maths.ts";
 
 describe("breakable", () => {
   const long =
@@ -12,8 +12,7 @@ describe("breakable", () => {
       [
         "(1.75\\,\\mathrm{m})(67.2\\,\\mathrm{kN})",
         "- (0.875\\,\\mathrm{m})(22.4\\,\\mathrm{kN})",
-        "+ (5.50\\,\\mathrm{m}) X_{h1}",
-        "= 0",
+        "+ (5.50\\,\\mathrm{m}) X_{h1} = 0",
       ],
     ],
     [
@@ -38,6 +37,17 @@ describe("breakable", () => {
 describe("maths", () => {
   it("maths(TeX that cannot be read) shows it as it is, escaped", () => {
     expect(maths("\\frac{<b>").html).toBe("<code>\\frac{&lt;b&gt;</code>");
+  });
+});
+
+describe("uprightSubscripts", () => {
+  it.each([
+    ["M_{\\mathrm{BC},B} = 0", "M_{\\mathrm{BC,B}} = 0"],
+    ["X_{a,b}", "X_{\\mathrm{a,b}}"],
+    ["X_{\\mathrm{h1}} + A_x", "X_{\\mathrm{h1}} + A_x"],
+    ["\\sum M_{A}", "\\sum M_{A}"],
+  ])("uprightSubscripts(%s) is %s", (tex, expected) => {
+    expect(uprightSubscripts(tex)).toBe(expected);
   });
 });
 

@@ -1,0 +1,1 @@
+export { type WatchOptions, watchNotebook } from "./watch.ts";
