@@ -69,7 +69,11 @@ export class Client {
     const fields = Object.fromEntries(CHANNELS.map((channel) => [`${channel}_port`, ports[channel]]));
     writeFileSync(file, JSON.stringify({ transport: "tcp", ip: "127.0.0.1", key, ...fields }));
     const [node = "", ...words] = kernelCommandLine(process.execPath, command, file);
-    const kernel = spawn(node, words, { cwd, stdio: ["ignore", "inherit", "inherit"] });
+    const kernel = spawn(node, words, {
+      cwd,
+      stdio: ["ignore", "inherit", "inherit"],
+      env: { ...process.env, JPY_PARENT_PID: String(process.pid) },
+    });
     const client = new Client(kernel, key, ports, folder);
     client.#iopub.subscribe();
     client.#iopub.connect(`tcp://127.0.0.1:${ports.iopub}`);
