@@ -95,8 +95,8 @@ function station(structure: Structure, member: string, at: Spot): Station {
   };
 }
 
-/** What a value at a station stands on: at an end that was cut free the step that found it; elsewhere the steps the
- *  functions follow from and, away from the ends, the member's loads. */
+/** What a value at a station stands on: at an end that was cut free the step that found it; at an end on a support alone
+ *  the reactions and loads there; elsewhere the steps the functions follow from and the member's loads. */
 function sourcesAt(
   solved: readonly SolvedSet[],
   member: string,
@@ -104,14 +104,53 @@ function sourcesAt(
   inside: boolean,
   which: "N" | "V" | "M",
 ): Sources {
-  const perSet = solved.flatMap(({ set, loads, solution, entries }) => {
+  const perSet = solved.flatMap((one) => {
+    const { set, loads, solution, entries } = one;
     const found = solution.steps.findIndex(({ unknown }) => unknown === `${member}_${joint}_${which}`);
-    const follows = solution.members.find((one) => one.member === member)?.uses ?? [];
+    const atSupport =
+      joint === undefined || found !== -1 ? undefined : supportSources(one, member, joint, which);
+    if (atSupport !== undefined) return atSupport;
+    const follows = solution.members.find((forces) => forces.member === member)?.uses ?? [];
     const uses = found === -1 ? follows : [found];
     const own = inside ? memberLoads(set.hinged, loads, member).loads.flatMap((i) => loads[i] ?? []) : [];
     return [...uses.flatMap((i) => entries[i] ?? []), ...loadSources(own)];
   });
   return mergeSources(perSet, from);
+}
+
+/** At a joint with one member end: the reactions and joint loads with a part along (N) or across (V) the member.
+ *  None where other members meet there or nothing acts. */
+function supportSources(
+  { set, loads, solution, entries }: SolvedSet,
+  member: string,
+  joint: string,
+  which: "N" | "V" | "M",
+): Sources | undefined {
+  const meeting = set.hinged.members.filter(({ start, end }) => start === joint || end === joint);
+  const reaction = solution.reactions.find((one) => one.joint === joint);
+  if (meeting.length !== 1 || reaction === undefined) return undefined;
+  const { c, s } = axisOf(set.hinged, memberNamed(set.hinged, member, "result"));
+  const [partX, partY] = which === "N" ? [c, s] : [s, c];
+  const enters = (part: number): boolean => which !== "M" && Math.abs(part) > 1e-12;
+  const { x, y, moment } = reaction.steps;
+  const steps = [
+    ...(enters(partX) ? [x] : []),
+    ...(enters(partY) ? [y] : []),
+    ...(which === "M" ? [moment] : []),
+  ];
+  const own = loads.filter(
+    (load) =>
+      load.kind === "joint" &&
+      load.joint === joint &&
+      ((load.fx !== 0 && enters(partX)) ||
+        (load.fy !== 0 && enters(partY)) ||
+        (load.couple !== 0 && which === "M")),
+  );
+  const found = [
+    ...steps.flatMap((step) => (step === undefined ? [] : (entries[step] ?? []))),
+    ...loadSources(own),
+  ];
+  return found.length > 0 ? found : undefined;
 }
 
 function forceAt(

@@ -7,7 +7,7 @@ import { type Ledger, shownValue, type TableCell } from "../sheet/index.ts";
 import { axisOf, memberNamed, mergeSources } from "../structure/index.ts";
 import type { Structure } from "../structure/types.ts";
 import { shownAs, sketchBundle } from "./shown.ts";
-import { geometrySources, loadSources } from "./sources.ts";
+import { geometrySources, loadSources, memberSources } from "./sources.ts";
 import type { LoadCase } from "./types.ts";
 import { spanPart, structureName } from "./words.ts";
 
@@ -38,12 +38,14 @@ export function recordShape(ledger: Ledger, structure: Structure, cases: readonl
     alternative: spec.description,
     spec,
   });
-  const rows = found.members.flatMap((one) => inflectionRows(structure, one, uses));
+  const rows = found.members.flatMap((one) =>
+    inflectionRows(structure, one, mergeSources(memberSources(structure, one.member), loadSources(loads))),
+  );
   if (rows.length > 0)
     ledger.put({
       kind: "table",
       id: `probable points of inflection ${name}`,
-      uses,
+      uses: mergeSources(...rows.flat().flatMap((cell) => (typeof cell === "string" ? [] : [cell.uses]))),
       caption: `Probable points of inflection under ${name}: qualitative, places to start from`,
       columns: ["member", "about", "why"],
       rows,
