@@ -68,12 +68,24 @@ function reduceThree({ first, shift }: Envelope, a: Float64Array, i: number): vo
   const s0 = shift[i] as number;
   const s1 = shift[i + 1] as number;
   const s2 = shift[i + 2] as number;
-  for (let j = fi + 1; j < i; j++) {
+  for (let j = fi + 1; j < i; ) {
+    const begin = first[j] as number;
+    if (j + 2 < i && begin === first[j + 1] && begin === first[j + 2]) {
+      threeByThree(
+        a,
+        [s0, s1, s2],
+        [shift[j] as number, shift[j + 1] as number, shift[j + 2] as number],
+        Math.max(begin, fi),
+        j,
+      );
+      j += 3;
+      continue;
+    }
     const sj = shift[j] as number;
     let g0 = a[s0 + j] as number;
     let g1 = a[s1 + j] as number;
     let g2 = a[s2 + j] as number;
-    for (let k = Math.max(first[j] as number, fi); k < j; k++) {
+    for (let k = Math.max(begin, fi); k < j; k++) {
       const l = a[sj + k] as number;
       g0 -= (a[s0 + k] as number) * l;
       g1 -= (a[s1 + k] as number) * l;
@@ -82,7 +94,60 @@ function reduceThree({ first, shift }: Envelope, a: Float64Array, i: number): vo
     a[s0 + j] = g0;
     a[s1 + j] = g1;
     a[s2 + j] = g2;
+    j += 1;
   }
+}
+
+/** Three rows by three columns j, j + 1, j + 2 at once: half the loads from memory for each product. */
+function threeByThree(
+  a: Float64Array,
+  [s0, s1, s2]: readonly [number, number, number],
+  [t0, t1, t2]: readonly [number, number, number],
+  begin: number,
+  j: number,
+): void {
+  let g00 = a[s0 + j] as number;
+  let g01 = a[s0 + j + 1] as number;
+  let g02 = a[s0 + j + 2] as number;
+  let g10 = a[s1 + j] as number;
+  let g11 = a[s1 + j + 1] as number;
+  let g12 = a[s1 + j + 2] as number;
+  let g20 = a[s2 + j] as number;
+  let g21 = a[s2 + j + 1] as number;
+  let g22 = a[s2 + j + 2] as number;
+  for (let k = begin; k < j; k++) {
+    const l0 = a[t0 + k] as number;
+    const l1 = a[t1 + k] as number;
+    const l2 = a[t2 + k] as number;
+    const x0 = a[s0 + k] as number;
+    g00 -= x0 * l0;
+    g01 -= x0 * l1;
+    g02 -= x0 * l2;
+    const x1 = a[s1 + k] as number;
+    g10 -= x1 * l0;
+    g11 -= x1 * l1;
+    g12 -= x1 * l2;
+    const x2 = a[s2 + k] as number;
+    g20 -= x2 * l0;
+    g21 -= x2 * l1;
+    g22 -= x2 * l2;
+  }
+  // Columns j + 1 and j + 2 still lack the products with the columns of this block before them.
+  const m1 = a[t1 + j] as number;
+  const m2 = a[t2 + j] as number;
+  const n2 = a[t2 + j + 1] as number;
+  g01 -= g00 * m1;
+  g11 -= g10 * m1;
+  g21 -= g20 * m1;
+  a[s0 + j] = g00;
+  a[s0 + j + 1] = g01;
+  a[s0 + j + 2] = g02 - g00 * m2 - g01 * n2;
+  a[s1 + j] = g10;
+  a[s1 + j + 1] = g11;
+  a[s1 + j + 2] = g12 - g10 * m2 - g11 * n2;
+  a[s2 + j] = g20;
+  a[s2 + j + 1] = g21;
+  a[s2 + j + 2] = g22 - g20 * m2 - g21 * n2;
 }
 
 /** l_ij = g_ij / d_j and d_i = a_ii - Σ l_ij g_ij; whether the pivot d_i is beyond suspicion. */
