@@ -1,7 +1,7 @@
 // Single spans: fixed-end moments, span moments, points of inflection and reactions against closed forms.
 // Derived from elastic theory and equal to the classical handbook entries; fixed ends under a uniform load (wL²/12, wL²/24)
 // as printed in T. G. Hicks, Civil Engineering Formulas, beam case 5; inflection at 0.211 L of that case in V. E. Saouma,
-// Structural Engineering (lecture notes), 14.3.1. The other entries (also in the AISC Manual, Table 3-23) from memory.
+// Structural Engineering, 14.3.1. The other entries (also in the AISC Manual, Table 3-23) from memory.
 import { describe, expect, test } from "vitest";
 import { exact } from "../../lib/exact/index.ts";
 import { quantity } from "../../lib/quantity/index.ts";

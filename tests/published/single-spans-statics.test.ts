@@ -1,7 +1,7 @@
 // Single spans solved by statics, hinges at the published points of inflection: end moments, reactions and span moments follow.
 //
 // Sources as in single-spans.test.ts: T. G. Hicks, Civil Engineering Formulas, beam case 5 (fixed, uniform: read); V. E. Saouma,
-// lecture notes Structural Engineering, sec. 14.3.1 (0.211 L: read); the other rows are classical entries of AISC Manual
+// Structural Engineering, sec. 14.3.1 (0.211 L: read); the other rows are classical entries of AISC Manual
 // Table 3-23, Roark, and fixed-end moment tables (from memory), each derived again from elastic theory in rationals.
 // Not here: the parabolic load, which no load of the library describes, and settlements, which statics alone cannot see.
 

@@ -1,7 +1,7 @@
 // Fixed-end moments and points of inflection of single spans, against closed forms.
 //
 // Source of the fixed-fixed uniform load: T. G. Hicks, Civil Engineering Formulas, beam case 5; of its points of inflection at
-// 0.211 L: V. E. Saouma, lecture notes Structural Engineering, sec. 14.3.1. The other rows are the classical entries of
+// 0.211 L: V. E. Saouma, Structural Engineering, sec. 14.3.1. The other rows are the classical entries of
 // AISC Manual Table 3-23, Roark, and the fixed-end moment tables of Hibbeler, Kassimali and Norris-Wilbur (from memory);
 // each was derived again from elastic theory in rationals. Closed forms are compared to 1e-12, printed decimals to half their last digit.
 
