@@ -3,6 +3,7 @@
 import { type Quantity, quantity } from "../quantity/index.ts";
 import type { FreeBodySolution, Step, Term } from "../results/types.ts";
 import { type FormulaLines, shownValue, symbolTex, valueTex } from "../sheet/index.ts";
+import { closedSum } from "./nought.ts";
 
 /** What an equation needs to know of the solution it belongs to: the unknowns, and what the loads are called. */
 export interface Named {
@@ -46,8 +47,11 @@ export function idleLines(steps: readonly [Step, ...Step[]], named: Named): Form
 }
 
 /** An equation without unknowns in three lines of TeX: it closes or it does not. */
-export function closureLines(closure: Equation & { readonly sum: number }, named: Named): FormulaLines {
-  const sum = quantity(closure.sum, sumDimension(closure.equation));
+export function closureLines(
+  closure: Equation & { readonly sum: number; readonly scale: number },
+  named: Named,
+): FormulaLines {
+  const sum = quantity(closedSum(closure.sum, closure.scale), sumDimension(closure.equation));
   return {
     symbols: `${sumTex(closure)} = ${joinTerms(termsBySymbol(closure, named))}`,
     numbers: joinTerms(termsByNumber(closure)),

@@ -9,6 +9,7 @@ import { bodyFigure } from "./body-figure.ts";
 import { closureLines, equationText, forceQuantity, idleLines, type Named, stepLines } from "./equation.ts";
 import { handOf } from "./hand.ts";
 import { loadNames } from "./load-words.ts";
+import { isNought } from "./nought.ts";
 import { coordinateSources, jointSources, loadSources } from "./sources.ts";
 import type { Hand, HingeSet, SolvedSet } from "./types.ts";
 import { and } from "./words.ts";
@@ -140,7 +141,7 @@ function recordClosure(book: SetBook, closure: Closure): void {
     inputs: {},
     closure: true,
     terms: termsOf(book, closure),
-    passed: Math.abs(closure.sum) <= Math.max(1e-9 * closure.scale, negligible),
+    passed: isNought(closure.sum, closure.scale),
     description: `${set.name}: ${bodyName(book, closure)}: the equation left over closes by itself`,
   });
 }
@@ -152,9 +153,6 @@ function termsOf({ entries }: SetBook, { terms }: Pick<Closure, "terms">): reado
     return from === undefined ? { coefficient, value } : { coefficient, value, from };
   });
 }
-
-/** A sum below a thousandth of a newton (or N·m) is nought whatever the terms. */
-const negligible = 1e-3;
 
 function bodyName({ named }: SetBook, { bodies, joined }: Pick<Step, "bodies" | "joined">): string {
   return named.solution.bodies[joined ?? bodies[0] ?? -1]?.name ?? "";

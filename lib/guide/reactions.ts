@@ -13,6 +13,7 @@ import {
 import { equilibrium } from "../statics/index.ts";
 import { mergeSources } from "../structure/index.ts";
 import type { Structure } from "../structure/types.ts";
+import { closedSum, isNought } from "./nought.ts";
 import { shownAs } from "./shown.ts";
 import { geometrySources, loadSources } from "./sources.ts";
 import type { Hand } from "./types.ts";
@@ -128,14 +129,14 @@ function recordEquilibrium(ledger: Ledger, hand: Hand, reactions: readonly Suppo
       id: `equilibrium ${hand.name} ${name}`,
       uses: mergeSources(loadSources(loads), steps, key === "sumM" ? geometrySources(hand.frame) : []),
       formula: `${name} = 0`,
-      lines: sumLines(tex, shown(ofReactions[key]), shown(ofLoads[key]), shown(all[key])),
+      lines: sumLines(tex, shown(ofReactions[key]), shown(ofLoads[key]), shown(closedSum(all[key], scale))),
       inputs: {},
       closure: true,
       terms: [
         ...reactions.flatMap((one) => reactionTerms(hand.frame, all.about, one, key)),
         { coefficient: 1, value: ofLoads[key] },
       ],
-      passed: Math.abs(all[key]) <= 1e-9 * Math.max(scale, negligible),
+      passed: isNought(all[key], scale),
       description: `whole structure under ${hand.name}: reactions and loads, ${name.replace("sum ", "Σ")}`,
     });
   }
@@ -159,9 +160,6 @@ function reactionTerms(
   const [dx, dy] = [(at?.x ?? 0) - (centre?.x ?? 0), (at?.y ?? 0) - (centre?.y ?? 0)];
   return [...term(-dy, x), ...term(dx, y), ...term(1, moment)];
 }
-
-/** Sums are judged by the largest force or moment in them, but not finer than this, N or N·m. */
-const negligible = 1e-3;
 
 function sumLines(tex: string, reactions: ShownValue, loads: ShownValue, total: ShownValue): FormulaLines {
   return {
