@@ -3,6 +3,8 @@
 import { printValue, quantity } from "../quantity/index.ts";
 import type { Structure } from "../structure/types.ts";
 
+export { and, counted } from "../statics/index.ts";
+
 const calls: Readonly<Record<Structure["family"], string>> = {
   beam: "beam",
   portal: "frame",
@@ -14,17 +16,6 @@ export function structureName(structure: Structure): string {
   const joints = structure.joints.map((joint) => joint.name).join("");
   const called = calls[structure.family];
   return joints.length <= 8 ? `${called} ${joints}` : `${called} of ${structure.members.length} members`;
-}
-
-/** "A", "A and B", "A, B and C". */
-export function and(names: readonly string[]): string {
-  if (names.length < 2) return names.join("");
-  return `${names.slice(0, -1).join(", ")} and ${names[names.length - 1]}`;
-}
-
-/** "1 hinge", "2 hinges". */
-export function counted(n: number, noun: string): string {
-  return `${n} ${noun}${n === 1 ? "" : "s"}`;
 }
 
 /** Metres printed in the sheet's length unit. */
