@@ -1,112 +1,60 @@
-// The corners of the unknowns: every one at its least or its most. A corner is a number with a bit per unknown, 1 at its most.
+// Corners of many unknowns: least and greatest of a result found by going from corner to corner. A corner is a number with a bit per
+// unknown, 1 at its most.
 
-import { type Trial, tryOut } from "./trial.ts";
-import type { Unknown } from "./unknowns.ts";
-
-/** Up to so many unknowns all corners are solved. */
-export const allCornersUpTo = 10;
-/** Of more, so many at most. */
-const most = 4096;
-
-export interface CornerResults {
-  /** Per result. */
-  readonly least: Float64Array;
-  readonly greatest: Float64Array;
-  readonly solved: number;
+/** Looks at corners one climb may take in a frame whose states hold `size` numbers: some seconds for all results of a middling frame, none
+ *  in a very large one, where the corners drawn must do. It depends on the frame alone, and so does the answer. */
+export function looksFor(size: number): number {
+  return Math.floor(2.5e6 / size ** 2);
 }
 
-/** Least and greatest results over all corners; with more than ten unknowns over those found by going, for each result, from the
- *  corner its trend over the samples points to, by turning one unknown at a time, until no turn brings it further. `drawn` holds the
- *  unknowns sample by sample, `found` the results result by result. */
-export function cornerResults(
-  trial: Trial,
-  wanted: number,
-  drawn: Float64Array,
-  found: Float64Array,
-  samples: number,
-): CornerResults {
-  const count = trial.unknowns.length;
-  const tried = cornerTrials(trial, wanted);
-  if (count <= allCornersUpTo) for (let i = 0; i < 2 ** count; i++) tried.solve(BigInt(i));
-  else {
-    for (const corner of byTrend(drawn, found, count, samples)) tried.solve(corner);
-    climb(tried, count);
+/** A result that is followed from corner to corner. */
+export interface Followed {
+  readonly valueAt: (corner: bigint) => number;
+  readonly unknowns: number;
+  readonly looks: number;
+}
+
+/** The value of a result at a corner that is greatest in a sense (1 greatest, -1 least), as far as turning one unknown, then two at
+ *  a time, leads from `start` in the looks allowed. */
+export function climbed({ valueAt, unknowns, looks }: Followed, start: bigint, sense: 1 | -1): number {
+  if (looks < 1) return sense * Number.NEGATIVE_INFINITY;
+  const turns = turnsOf(unknowns);
+  let [best, corner, idle] = [valueAt(start), start, 0];
+  for (let look = 1; look < looks && idle < turns.length; look++, idle++) {
+    const next = corner ^ (turns[idle < unknowns ? look % unknowns : idle] ?? 0n);
+    const value = valueAt(next);
+    if (!(sense * (value - best) > 0)) continue;
+    [best, corner, idle] = [value, next, -1];
   }
-  return { least: tried.least, greatest: tried.greatest, solved: tried.seen.size };
+  return best;
 }
 
-/** Corners tried so far, and the best of them per result. */
-interface CornerTrials {
-  readonly seen: Set<bigint>;
-  readonly least: Float64Array;
-  readonly greatest: Float64Array;
-  readonly at: bigint[];
-  solve(corner: bigint): void;
-}
-
-function cornerTrials({ unknowns, ...trial }: Trial, wanted: number): CornerTrials {
-  const seen = new Set<bigint>();
-  const least = new Float64Array(wanted).fill(Number.POSITIVE_INFINITY);
-  const greatest = new Float64Array(wanted).fill(Number.NEGATIVE_INFINITY);
-  const at = new Array<bigint>(2 * wanted).fill(0n);
-  const values = new Float64Array(unknowns.length);
-  const out = new Float64Array(wanted);
-  const solve = (corner: bigint): void => {
-    if (seen.has(corner) || seen.size >= most) return;
-    seen.add(corner);
-    setCorner(unknowns, corner, values);
-    tryOut({ unknowns, ...trial }, values, out);
-    out.forEach((value, k) => {
-      if (value < (least[k] ?? 0)) [least[k], at[2 * k]] = [value, corner];
-      if (value > (greatest[k] ?? 0)) [greatest[k], at[2 * k + 1]] = [value, corner];
-    });
-  };
-  return { seen, least, greatest, at, solve };
-}
-
-/** Tries the neighbours of every best corner until none is better. */
-function climb({ at, solve }: CornerTrials, count: number): void {
-  const climbed = new Set<bigint>();
-  for (;;) {
-    const next = [...new Set(at)].filter((corner) => !climbed.has(corner));
-    if (next.length === 0) return;
-    for (const corner of next) {
-      climbed.add(corner);
-      for (let k = 0; k < count; k++) solve(corner ^ (1n << BigInt(k)));
+/** The corner a result grows towards: by the sign of its covariance with each of the unknowns in `free`. `values` holds `width`
+ *  values of unknowns per row, `found` the result, `rowOf` the row of each sample. */
+export function towards(
+  values: Float64Array,
+  width: number,
+  free: readonly number[],
+  found: Float64Array,
+  rowOf: Int32Array,
+): bigint {
+  let corner = 0n;
+  free.forEach((k, bit) => {
+    let [sum, x, z] = [0, 0, 0];
+    for (const row of rowOf) {
+      const [a, b] = [values[row * width + k] ?? 0, found[row] ?? 0];
+      x += a;
+      z += b;
+      sum += a * b;
     }
-  }
-}
-
-function byTrend(
-  drawn: Float64Array,
-  found: Float64Array,
-  count: number,
-  samples: number,
-): ReadonlySet<bigint> {
-  const corners = new Set<bigint>();
-  const full = (1n << BigInt(count)) - 1n;
-  for (let begin = 0; begin < found.length; begin += samples) {
-    let corner = 0n;
-    for (let k = 0; k < count; k++)
-      if (covariance(drawn, k, count, found.subarray(begin, begin + samples)) > 0) corner |= 1n << BigInt(k);
-    corners.add(corner).add(full ^ corner);
-  }
-  return corners;
-}
-
-function covariance(drawn: Float64Array, k: number, count: number, y: Float64Array): number {
-  let [sum, x, z] = [0, 0, 0];
-  for (let s = 0; s < y.length; s++) {
-    const [a, b] = [drawn[s * count + k] ?? 0, y[s] ?? 0];
-    x += a;
-    z += b;
-    sum += a * b;
-  }
-  return sum - (x * z) / y.length;
-}
-
-function setCorner(unknowns: readonly Unknown[], corner: bigint, values: Float64Array): void {
-  unknowns.forEach(({ least, most: top }, k) => {
-    values[k] = (corner >> BigInt(k)) & 1n ? top : least;
+    if (sum - (x * z) / rowOf.length > 0) corner |= 1n << BigInt(bit);
   });
+  return corner;
+}
+
+/** Single unknowns, then pairs of them. */
+function turnsOf(unknowns: number): readonly bigint[] {
+  const single = Array.from({ length: unknowns }, (_, k) => 1n << BigInt(k));
+  const pairs = single.flatMap((a, i) => single.slice(i + 1).map((b) => a | b));
+  return [...single, ...pairs];
 }

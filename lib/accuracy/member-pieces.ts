@@ -14,7 +14,7 @@ import {
   type Side,
   valueAt,
 } from "../results/index.ts";
-import type { Load } from "../structure/types.ts";
+import type { Imposed, Load } from "../structure/types.ts";
 
 export interface Piece {
   readonly segment: number;
@@ -32,10 +32,14 @@ export interface Piece {
   readonly p1: number;
 }
 
-/** The pieces of one member under one load case, start to end. */
-export function memberPieces(prepared: Prepared, loadCase: number, member: string): readonly Piece[] {
-  const loads = (prepared.cases[loadCase] ?? []).filter((l): l is Load => !isImposed(l.kind));
-  const own = memberLoads(prepared.structure, loads, member);
+/** The pieces of one member under loads, start to end. */
+export function memberPieces(
+  prepared: Prepared,
+  loads: readonly (Load | Imposed)[],
+  member: string,
+): readonly Piece[] {
+  const forces = loads.filter((l): l is Load => !isImposed(l.kind));
+  const own = memberLoads(prepared.structure, forces, member);
   return prepared.skeleton.segments.flatMap((segment, e) =>
     segment.member === member ? segmentPieces(own, e, segment.begin, segment.end) : [],
   );
@@ -78,10 +82,10 @@ function segmentPieces(own: MemberLoads, segment: number, begin: number, end: nu
   });
 }
 
-/** Value of a force at s from the beginning of a piece; `F` as `endForces` gives it. */
-export function valueIn(piece: Piece, force: "N" | "V" | "M", F: Float64Array, s: number): number {
+/** Value of a force at s from the beginning of a piece; `F` from `from` on as `endForces` gives it. */
+export function valueIn(piece: Piece, force: "N" | "V" | "M", F: Float64Array, s: number, from = 0): number {
   const { v, w0, w1 } = piece;
-  const at = 6 * piece.segment;
+  const at = from + 6 * piece.segment;
   if (force === "N") return (F[at] ?? 0) + piece.n - s * (piece.p0 + (s * piece.p1) / 2);
   const V1 = F[at + 1] ?? 0;
   if (force === "V") return V1 + v - s * (w0 + (s * w1) / 2);
@@ -95,27 +99,28 @@ export function extremeIn(
   force: "N" | "V" | "M",
   F: Float64Array,
   sense: 1 | -1,
+  from = 0,
 ): number {
   let best = Number.NEGATIVE_INFINITY;
   for (let i = 0; i < pieces.length; i++) {
     const piece = pieces[i] as Piece; // i is within the length
     best = Math.max(
       best,
-      sense * valueIn(piece, force, F, 0),
-      sense * valueIn(piece, force, F, piece.length),
+      sense * valueIn(piece, force, F, 0, from),
+      sense * valueIn(piece, force, F, piece.length, from),
     );
     // the derivative is a + b s + d s²
     const V = force === "M";
     const load = force === "N" ? piece.p0 : piece.w0;
     const rise = force === "N" ? piece.p1 : piece.w1;
-    const a = V ? (F[6 * piece.segment + 1] ?? 0) + piece.v : -load;
+    const a = V ? (F[from + 6 * piece.segment + 1] ?? 0) + piece.v : -load;
     const b = V ? -load : -rise;
     const d = V ? -rise / 2 : 0;
     const root = Math.sqrt(b * b - 4 * a * d); // not a number when there is none, and then no turning point either
     const q = -(b + (b < 0 ? -root : root)) / 2;
     const [s1, s2] = [a / q, q / d];
-    if (s1 > 0 && s1 < piece.length) best = Math.max(best, sense * valueIn(piece, force, F, s1));
-    if (s2 > 0 && s2 < piece.length) best = Math.max(best, sense * valueIn(piece, force, F, s2));
+    if (s1 > 0 && s1 < piece.length) best = Math.max(best, sense * valueIn(piece, force, F, s1, from));
+    if (s2 > 0 && s2 < piece.length) best = Math.max(best, sense * valueIn(piece, force, F, s2, from));
   }
   return sense * best;
 }

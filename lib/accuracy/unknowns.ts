@@ -2,6 +2,7 @@
 
 import type { Structure } from "../structure/index.ts";
 import { AccuracyError } from "./faults.ts";
+import { matters } from "./matters.ts";
 
 /** From `least` to `most`. */
 export interface Between {
@@ -18,6 +19,19 @@ export interface GroupUnknown {
   readonly members?: readonly string[];
   readonly I?: Between;
   readonly A?: Between;
+  /** Members that have a stated ratio to these: their I, or A, goes along. */
+  readonly along?: readonly string[];
+  /** What was stated as a ratio, to another group or to the plain nominal value; for the words. */
+  readonly ratio?: StatedRatio;
+  /** Nobody stated it. */
+  readonly byDefault?: true;
+}
+
+export interface StatedRatio {
+  /** The other group. */
+  readonly to?: string;
+  /** The ratio at a multiple of 1. */
+  readonly nominal: number;
 }
 
 /** Bases whose restraint is known only within a range of fixities, one fixity for all of them: 0 free to turn, 1 fixed.
@@ -37,9 +51,9 @@ export function within(factor: number): Between {
   return Object.freeze({ least: 1 / factor, most: factor });
 }
 
-/** The plain default. Forces depend on ratios only, so the I of the first group (or of `reference`) is the measure of the
- *  others; theirs are within the factor of the nominal ratio to it, and the A of every group within the factor of its own.
- *  Bases are as given. */
+/** The plain default. Forces depend on ratios only, so the I of the first group that bends (or of `reference`) is the measure of the
+ *  others, of bars alone the A; the others' is within the factor of the nominal ratio to it, and the A of every group within the factor of
+ *  its own. What cannot matter is left out (see `matters`). Bases are as given. */
 export function defaultUnknowns(
   structure: Structure,
   { factor = 2, reference }: { readonly factor?: number; readonly reference?: string } = {},
@@ -48,15 +62,19 @@ export function defaultUnknowns(
   if (!(factor >= 1) || !Number.isFinite(factor))
     throw new AccuracyError({ kind: "bad range", what: "every I and A", ...range });
   const names = groupNames(structure);
-  const first = reference ?? names[0];
   if (reference !== undefined && !names.includes(reference))
     throw new AccuracyError({ kind: "no such group", group: reference, known: names });
+  const worth = names.map((group) => matters(structure, membersOf(structure, { group })));
+  const measured = worth.some((w) => w.I) ? "I" : "A";
+  const first = reference ?? names.find((_, i) => worth[i]?.[measured]);
+  const groups = names.map((group, i): GroupUnknown => {
+    const varies = (kind: "I" | "A"): boolean =>
+      worth[i]?.[kind] === true && !(kind === measured && group === first);
+    const ranges = { ...(varies("I") ? { I: range } : {}), ...(varies("A") ? { A: range } : {}) };
+    return Object.freeze({ group, ...ranges });
+  });
   return Object.freeze({
-    groups: Object.freeze(
-      names.map((group) =>
-        Object.freeze(group === first ? { group, A: range } : { group, I: range, A: range }),
-      ),
-    ),
+    groups: Object.freeze(groups.filter((g) => g.I !== undefined || g.A !== undefined)),
     bases: Object.freeze([]),
   });
 }
@@ -91,19 +109,28 @@ export interface Unknown {
   readonly most: number;
   readonly members: readonly number[];
   readonly joints: readonly string[];
+  readonly ratio?: StatedRatio;
+  readonly byDefault?: true;
 }
 
 /** The unknowns one by one; those whose range is a single nominal value are left out. Throws on ranges that are none and on
  *  members varied twice. */
 export function eachUnknown(structure: Structure, { groups, bases }: Unknowns): readonly Unknown[] {
   const stiff = groups.flatMap((group) => {
+    const { ratio, byDefault, along = [] } = group;
     const members = membersOf(structure, group);
-    return (["I", "A"] as const).flatMap((kind): Unknown[] => {
+    const led = along.length === 0 ? [] : membersOf(structure, { group: group.group, members: along });
+    return (["I", "A"] as const).flatMap((kind): (Unknown & { readonly led: readonly number[] })[] => {
       const range = group[kind];
       if (range === undefined) return [];
-      const name = `${kind} of ${group.group}`;
+      const name = `${kind} of ${group.group}${ratio?.to === undefined ? "" : ` / ${kind} of ${ratio.to}`}`;
       checkMultiple(name, range);
-      return range.least === 1 && range.most === 1 ? [] : [{ name, kind, ...range, members, joints: [] }];
+      if (range.least === 1 && range.most === 1) return [];
+      const said = {
+        ...(ratio === undefined ? {} : { ratio }),
+        ...(byDefault === undefined ? {} : { byDefault }),
+      };
+      return [{ name, kind, ...range, members, joints: [], led, ...said }];
     });
   });
   const restraint = bases.map(({ joints, fixity }): Unknown => {
@@ -113,7 +140,8 @@ export function eachUnknown(structure: Structure, { groups, bases }: Unknowns): 
     return { name: `fixity of ${joints.join(", ")}`, kind: "fixity", least, most, members: [], joints };
   });
   checkOnce(structure, stiff);
-  return Object.freeze([...stiff, ...restraint]);
+  const varied = stiff.map(({ led, ...u }): Unknown => ({ ...u, members: [...u.members, ...led] }));
+  return Object.freeze([...varied, ...restraint]);
 }
 
 function checkMultiple(what: string, { least, most }: Between): void {
@@ -139,4 +167,22 @@ function checkOnce(structure: Structure, unknowns: readonly Unknown[]): void {
 /** Value of an unknown at t in 0..1 of its law: even in the logarithm for multiples, even for fixities. */
 export function valueAtPart({ kind, least, most }: Unknown, t: number): number {
   return kind === "fixity" ? least + (most - least) * t : least * (most / least) ** t;
+}
+
+/** Places of the unknowns that have a range. */
+export function freeOf(unknowns: readonly Unknown[]): readonly number[] {
+  return unknowns.flatMap(({ least, most }, k) => (least < most ? [k] : []));
+}
+
+/** Values of the unknowns at a corner: a bit per place in `free`, 1 at its most. */
+export function atCorner(
+  unknowns: readonly Unknown[],
+  free: readonly number[],
+  corner: bigint,
+): Float64Array {
+  const values = Float64Array.from(unknowns, (u) => u.least);
+  free.forEach((k, bit) => {
+    if ((corner >> BigInt(bit)) & 1n) values[k] = unknowns[k]?.most ?? Number.NaN;
+  });
+  return values;
 }

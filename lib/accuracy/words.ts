@@ -14,14 +14,30 @@ export function bandWords(measure: "ratio" | "difference", s: Spread): string {
   return `${what}: 90 % between ${show(s.low)} and ${show(s.high)}, least ${show(s.least)}, greatest ${show(s.greatest)}, middle ${show(s.middle)}, ${covers}`;
 }
 
-/** What was varied, in one sentence. */
-export function unknownWords(unknowns: readonly Unknown[], samples: number, allCorners: boolean): string {
+/** Laws of single unknowns, for a table. */
+export const laws = {
+  multiple: "at an end of its range, or anywhere within, even in ratio",
+  fixity: "at an end of its range, or anywhere within, even",
+} as const;
+
+/** What was varied and by which law, in one sentence. */
+export function unknownWords(
+  unknowns: readonly Unknown[],
+  samples: number,
+  atEnds: number,
+  allCorners: boolean,
+): string {
   if (unknowns.length === 0) return `nothing varied: stiffnesses and bases as given; ${covers}`;
-  const each = unknowns.map(({ name, kind, least, most }) => {
-    const range = `${short(least)} to ${short(most)}`;
-    return kind === "fixity" ? `${name} ${range} (even)` : `${name} ${range} times nominal (even in ratio)`;
+  const each = unknowns.map(({ name, kind, least, most, ratio }) => {
+    const nominal = ratio?.nominal ?? 1;
+    const range = least === most ? short(least) : `${short(nominal * least)} to ${short(nominal * most)}`;
+    return `${name} ${range}${kind === "fixity" || ratio !== undefined ? "" : " times nominal"}`;
   });
-  return `${each.join(", ")}; ${samples} frames tried and ${allCorners ? "all corners" : "corners"} of these ranges; ${covers}`;
+  if (unknowns.every((u) => u.least === u.most)) return `nothing varied: ${each.join(", ")}; ${covers}`;
+  const corners = allCorners
+    ? "all combinations of ends solved for least and greatest"
+    : "combinations of ends sought for least and greatest of each result";
+  return `${each.join(", ")}; of ${samples} frames tried ${atEnds} take every unknown at one end or the other of its range, the others anywhere within it (multiples even in ratio, fixities even); ${corners}; ${covers}`;
 }
 
 function short(x: number): string {

@@ -5,7 +5,7 @@ import { type CoverageRow, coverage } from "../../lib/accuracy/index.ts";
 
 let rows: readonly CoverageRow[] = [];
 beforeAll(() => {
-  rows = coverage({ frames: 120, truths: 8 });
+  rows = coverage({ frames: 48, truths: 6 });
 });
 
 const all = (law: string): readonly CoverageRow[] => rows.filter((r) => r.family === "all" && r.law === law);
@@ -15,23 +15,31 @@ describe("coverage of the bands on random frames of six families", () => {
     const found = all("as printed");
     expect(found.map((r) => r.kind)).toEqual(["beam M", "column M", "shear", "axial"]);
     for (const { inside, count } of found) {
-      expect(count).toBeGreaterThan(20_000);
+      expect(count).toBeGreaterThan(5_000);
       expect(Math.abs(inside - 0.9)).toBeLessThan(0.03);
     }
   });
 
   test("drawn even in value: at least 80 %", () => {
-    for (const { inside } of all("even in value")) expect(inside).toBeGreaterThan(0.8);
+    const found = all("even in value");
+    expect(found.length).toBe(4);
+    for (const { inside } of found) expect(inside).toBeGreaterThan(0.8);
   });
 
-  // Every frame is then a corner. An interval that leaves a tenth out where one unknown rules leaves out its ends, so no interval that
-  // is right for the printed law can hold these; least and greatest do.
-  test("drawn at the ends: always between least and greatest", () => {
+  // at most a tenth of all frames lie outside, and seven in ten frames are such corners: at most one corner in seven
+  test("drawn at the ends: at least 80 %, in every family too", () => {
     const found = rows.filter((r) => r.law === "at the ends");
     expect(found.length).toBeGreaterThan(20);
-    for (const { within, kind, family } of found) expect(within, `${family}, ${kind}`).toBe(1);
+    for (const { inside, kind, family } of found) expect(inside, `${family}, ${kind}`).toBeGreaterThan(0.8);
   });
 
+  test("the corners lie between least and greatest, always", () => {
+    for (const { within, kind, family } of rows.filter((r) => r.law === "at the ends"))
+      expect(within, `${family}, ${kind}`).toBe(1);
+  });
+
+  // a frame of two or three spans has one or two unknowns: two or four corners, none of which can be left out, so that the interval is the
+  // whole range; portals and low frames have three or four
   test("the families on which bands of other populations broke hold as well", () => {
     for (const family of ["9 to 14 storeys", "a column line up to ten times stiffer", "spans 1 : 2"]) {
       const found = rows.filter((r) => r.family === family && r.law === "as printed");

@@ -37,6 +37,12 @@ describe("sweeps", () => {
     expect((truth[2] ?? 0) / -FEM).toBeCloseTo(kneeShare(2 / 3, "fixed"), 4);
   });
 
+  test("what has no range is not swept", () => {
+    const half = { joints: ["A", "D"], fixity: { least: 0.5, most: 0.5 } };
+    const unknowns = { groups: [{ group: "beams", I: within(4) }], bases: [half] };
+    expect(sweeps({ ...question, unknowns }).map((s) => s.unknown.name)).toEqual(["I of beams"]);
+  });
+
   test("refuses no steps", () => {
     expect(() => sweeps({ ...question, steps: 0 })).toThrow("a sweep of 0 steps");
   });
