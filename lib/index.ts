@@ -1,18 +1,28 @@
 // The public names, nothing else.
 
+export type { UnknownRow } from "./accuracy/index.ts";
 export { ExactError, exact } from "./exact/index.ts";
 export {
+  type BesideRow,
   type DeterminacyOptions,
   type DiagramOptions,
+  type ExactRow,
+  type GravityOptions,
+  type GravityPlace,
+  type GravitySet,
   type Hand,
   type HingeChoice,
   type HingeSet,
+  type HingesOptions,
+  type Holding,
   hinge,
   type LoadCase,
   openSheet,
   type Peak,
+  type PureNumber,
   type Sheet,
   type SolvedSet,
+  type SpanPart,
   type Spot,
   type SupportReaction,
 } from "./guide/index.ts";
@@ -53,6 +63,7 @@ export {
   partial,
   pointLoad,
   portal,
+  type StiffnessRatios,
   StructureError,
   type StructureOptions,
   selfWeight,

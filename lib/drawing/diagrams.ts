@@ -16,7 +16,7 @@ import {
   worldPoints,
 } from "./members.ts";
 import { fittedTogether, type Laid, type Scale } from "./scale.ts";
-import { type Label, line, merge, PENS, polyline, type Scene, scene, strokes } from "./scene.ts";
+import { type Label, line, merge, PENS, polyline, type Scene, type Shape, scene, strokes } from "./scene.ts";
 import type { DiagramsFigure, ForceQuantity } from "./spec.ts";
 import { supports } from "./supports.ts";
 import type { Panel } from "./svg.ts";
@@ -69,6 +69,22 @@ function ofMember(drawing: DrawnForce, forces: MemberForces): Scene {
   );
 }
 
+/** Where the true values of a member lie: two thin lines beside its diagram. */
+function bandLines({ spec, quantity, scale, gain }: DrawnForce): Scene {
+  const own = (spec.bands ?? []).filter((band) => band.quantity === quantity && gain !== 0);
+  return scene(
+    own.flatMap(({ member, at, low, high }) => {
+      const on = memberLine(spec.structure, member, scale);
+      const edge = (values: readonly number[]): Shape =>
+        polyline(
+          at.map((x, i) => along(on.page(x), on.fibre, (values[i] ?? 0) * gain)),
+          PENS.band,
+        );
+      return [edge(low), edge(high)];
+    }),
+  );
+}
+
 function headingOf(spec: DiagramsFigure, quantity: ForceQuantity, nothing: boolean): string {
   const words = {
     N: "N  axial force",
@@ -102,6 +118,7 @@ function sceneOf(spec: DiagramsFigure, { quantity, greatest, isNothing }: Sheet,
   return merge(
     supports(structure, scale),
     ...spec.forces.map((f) => ofMember(drawing, f)),
+    bandLines(drawing),
     memberLines(withoutBars(drawing), scale, { ...PENS.member, width: 2 }),
     hinges(unnamed, scale),
     isNothing ? scene([]) : values(drawing),

@@ -1,6 +1,7 @@
 import { diagramPanels } from "./diagrams.ts";
 import { freeBodyPanel } from "./free-body.ts";
 import { mechanismPanel } from "./mechanism.ts";
+import { rangePanels } from "./ranges.ts";
 import { selfStressPanels } from "./self-stress.ts";
 import { deflectionPanel, shapePanel } from "./shape.ts";
 import type { SketchSpec } from "./spec.ts";
@@ -24,6 +25,8 @@ export function panelsOf(spec: SketchSpec): readonly Panel[] {
       return [shapePanel(spec)];
     case "deflection":
       return [deflectionPanel(spec)];
+    case "ranges":
+      return rangePanels(spec);
   }
 }
 

@@ -56,8 +56,17 @@ export function overlap(a: Box, b: Box): number {
   return width > 0 && height > 0 ? width * height : 0;
 }
 
+/** Whether the box round a segment meets a box, if only along an edge. */
+export const touches = ([a, b]: Segment, box: Box): boolean =>
+  Math.max(a[0], b[0]) >= box.left &&
+  Math.min(a[0], b[0]) <= box.right &&
+  Math.max(a[1], b[1]) >= box.top &&
+  Math.min(a[1], b[1]) <= box.bottom;
+
 /** Length of a segment inside a box, by clipping its parameter against the four sides; a touching point counts 0. */
-export function lengthInside([a, b]: Segment, box: Box): number {
+export function lengthInside(segment: Segment, box: Box): number {
+  if (!touches(segment, box)) return 0;
+  const [a, b] = segment;
   const [dx, dy] = minus(b, a);
   let enters = 0;
   let leaves = 1;

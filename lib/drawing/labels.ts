@@ -3,12 +3,12 @@
 import {
   along,
   type Box,
-  boxOf,
   distance,
   lengthInside,
   overlap,
   type Pt,
   type Segment,
+  touches,
   turned,
   union,
   unit,
@@ -29,37 +29,70 @@ export interface PlacedLabel {
   readonly tied: boolean;
 }
 
-interface Candidate extends PlacedLabel {
+/** One way to put a label: at which of its places, how far out, on which side, and what that costs by itself. */
+interface Choice {
+  readonly place: number;
+  readonly ring: number;
+  readonly step: number;
   readonly price: number;
 }
 
-function boxAt(label: Label, direction: Pt, gap: number): Box {
-  const size = label.size ?? TEXT_SIZE;
-  const width = textWidth(label.text, size);
-  const height = size * 1.15;
-  // The box is pushed out along the direction until it clears the point by the gap.
-  const centre: Pt = [
-    label.at[0] + direction[0] * (gap + width / 2),
-    label.at[1] + direction[1] * (gap + height / 2),
-  ];
-  return boxOf([
-    [centre[0] - width / 2, centre[1] - height / 2],
-    [centre[0] + width / 2, centre[1] + height / 2],
-  ]);
-}
+const orders = new Map<string, readonly Choice[]>();
 
-function candidates(label: Label): readonly Candidate[] {
-  const places = [label, ...(label.instead ?? [])];
-  return places.flatMap(({ at, prefer }, p) =>
-    (label.fixed ? FARTHER.slice(0, 1) : FARTHER).flatMap((extra, ring) =>
-      (label.fixed ? STEPS.slice(0, 1) : STEPS).map((step, i) => {
-        const here = { ...label, at };
-        const direction = turned(unit(prefer), (step * Math.PI) / 4);
-        const box = boxAt(here, direction, label.gap + extra);
-        return { label, at, box, tied: ring >= 2, price: p * (label.reluctance ?? 2.5) + i * 3 + ring * 9 };
+/** All choices for a label, the cheapest first. */
+function choicesOf(label: Label): readonly Choice[] {
+  const places = 1 + (label.instead?.length ?? 0);
+  const { reluctance = 2.5, fixed = false } = label;
+  const key = `${places} ${reluctance} ${fixed}`;
+  const known = orders.get(key);
+  if (known !== undefined) return known;
+  const [rings, steps] = fixed ? [1, 1] : [FARTHER.length, STEPS.length];
+  const found = Array.from({ length: places }, (_, place) =>
+    Array.from({ length: rings }, (_, ring) =>
+      Array.from({ length: steps }, (_, step) => {
+        return { place, ring, step, price: place * reluctance + step * 3 + ring * 9 };
       }),
     ),
   );
+  const sorted = found.flat(2).sort((p, q) => p.price - q.price);
+  orders.set(key, sorted);
+  return sorted;
+}
+
+/** A label that is being placed: where it could go, and the lines that it could touch there. */
+interface Task {
+  readonly label: Label;
+  readonly width: number;
+  readonly height: number;
+  readonly choices: readonly Choice[];
+  /** Of each choice, as far as it was looked at: most labels take one of the first. */
+  readonly candidates: (PlacedLabel | undefined)[];
+  readonly blocks: readonly Segment[];
+}
+
+function taskOf(label: Label, blocks: readonly Segment[]): Task {
+  const size = label.size ?? TEXT_SIZE;
+  const [width, height] = [textWidth(label.text, size), size * 1.15];
+  const farthest = label.gap + (label.fixed ? 0 : Math.max(...FARTHER));
+  const [x, y] = [farthest + width + 2, farthest + height + 2];
+  const reach = union(
+    [label, ...(label.instead ?? [])].map(({ at: [left, top] }) => {
+      return { left: left - x, top: top - y, right: left + x, bottom: top + y };
+    }),
+  );
+  const near = blocks.filter((block) => touches(block, reach));
+  return { label, width, height, choices: choicesOf(label), candidates: [], blocks: near };
+}
+
+function put({ label, width, height }: Task, { place, ring, step }: Choice): PlacedLabel {
+  const { at, prefer } = place === 0 ? label : (label.instead?.[place - 1] ?? label);
+  const direction = turned(unit(prefer), ((STEPS[step] ?? 0) * Math.PI) / 4);
+  const gap = label.gap + (FARTHER[ring] ?? 0);
+  // The box is pushed out along the direction until it clears the point by the gap.
+  const x = at[0] + direction[0] * (gap + width / 2);
+  const y = at[1] + direction[1] * (gap + height / 2);
+  const box = { left: x - width / 2, top: y - height / 2, right: x + width / 2, bottom: y + height / 2 };
+  return { label, at, box, tied: ring >= 2 };
 }
 
 const grown = (box: Box, pad: number): Box => ({
@@ -69,58 +102,45 @@ const grown = (box: Box, pad: number): Box => ({
   bottom: box.bottom + pad,
 });
 
-function priceOf(candidate: Candidate, placed: readonly PlacedLabel[], blocks: readonly Segment[]): number {
-  const airy = grown(candidate.box, 1.5);
-  let price = candidate.price;
+/** What a label costs where it is put: the place's own price, and more for each label and line it covers. */
+function priceOf(
+  own: number,
+  { box }: PlacedLabel,
+  placed: readonly PlacedLabel[],
+  blocks: readonly Segment[],
+): number {
+  const airy = grown(box, 1.5);
+  let price = own;
   for (const other of placed) {
     const shared = overlap(airy, other.box);
     if (shared > 0) price += 2000 + shared * 10;
   }
   for (const block of blocks) {
-    const covered = touches(block, airy) ? lengthInside(block, airy) : 0;
+    const covered = lengthInside(block, airy);
     if (covered > 0) price += 25 + covered * 3;
   }
   return price;
 }
 
-const touches = ([a, b]: Segment, box: Box): boolean =>
-  Math.max(a[0], b[0]) >= box.left &&
-  Math.min(a[0], b[0]) <= box.right &&
-  Math.max(a[1], b[1]) >= box.top &&
-  Math.min(a[1], b[1]) <= box.bottom;
-
-/** A label with its candidates, cheapest first, and the lines that any of them could touch. */
-interface Task {
-  readonly candidates: readonly Candidate[];
-  readonly blocks: readonly Segment[];
-}
-
-function taskOf(label: Label, blocks: readonly Segment[]): Task {
-  const all = [...candidates(label)].sort((p, q) => p.price - q.price);
-  const reach = grown(union(all.map((c) => c.box)), 2);
-  return { candidates: all, blocks: blocks.filter((block) => touches(block, reach)) };
-}
-
 function best(task: Task, placed: readonly PlacedLabel[]): PlacedLabel {
-  let least: Candidate | undefined;
+  let least: PlacedLabel | undefined;
   let leastPrice = Number.POSITIVE_INFINITY;
-  for (const candidate of task.candidates) {
-    // From here on every candidate costs more by its place alone.
-    if (candidate.price >= leastPrice) break;
-    const price = priceOf(candidate, placed, task.blocks);
+  for (const [i, choice] of task.choices.entries()) {
+    // From here on every choice costs more by its place alone.
+    if (choice.price >= leastPrice) break;
+    task.candidates[i] ??= put(task, choice);
+    const candidate = task.candidates[i];
+    const price = priceOf(choice.price, candidate, placed, task.blocks);
     if (price < leastPrice) [least, leastPrice] = [candidate, price];
   }
   if (least === undefined) throw new Error("figure: a label has no finite place");
-  return { label: least.label, at: least.at, box: least.box, tied: least.tied };
+  return least;
 }
 
-/** Places for all labels, in their order: fixed ones first, then each where it costs least, then twice again with
- *  all the others in place. */
-export function placeLabels(labels: readonly Label[], blocks: readonly Segment[]): readonly PlacedLabel[] {
-  const order = [...labels.filter((l) => l.fixed), ...labels.filter((l) => !l.fixed)].filter(
-    (l) => l.text !== "",
-  );
-  const tasks = order.map((label) => taskOf(label, blocks));
+const isPrinted = ({ text }: Label): boolean => text !== "";
+
+/** In their order: fixed ones first, then each where it costs least, then twice again with all the others in place. */
+function placeTasks(tasks: readonly Task[]): readonly PlacedLabel[] {
   const placed: PlacedLabel[] = [];
   for (const task of tasks) placed.push(best(task, placed));
   for (let round = 0; round < 2; round++) {
@@ -134,6 +154,15 @@ export function placeLabels(labels: readonly Label[], blocks: readonly Segment[]
   return placed;
 }
 
+function tasksOf(labels: readonly Label[], blocks: readonly Segment[]): readonly Task[] {
+  const order = [...labels.filter((l) => l.fixed), ...labels.filter((l) => !l.fixed)];
+  return order.filter(isPrinted).map((label) => taskOf(label, blocks));
+}
+
+/** Places for all labels. */
+export const placeLabels = (labels: readonly Label[], blocks: readonly Segment[]): readonly PlacedLabel[] =>
+  placeTasks(tasksOf(labels, blocks));
+
 /** More labels than this make a figure crowded. */
 const MANY = 36;
 /** A label of this rank and more is printed farther from its place, tied to it, rather than not at all. */
@@ -145,7 +174,7 @@ const collides = (placed: PlacedLabel, others: readonly PlacedLabel[]): boolean 
 /** Whether a label lies over so much of the lines that it is hard to read. */
 function isCovering({ box }: PlacedLabel, blocks: readonly Segment[]): boolean {
   const height = box.bottom - box.top;
-  const covered = blocks.reduce((sum, b) => sum + (touches(b, box) ? lengthInside(b, box) : 0), 0);
+  const covered = blocks.reduce((sum, b) => sum + lengthInside(b, box), 0);
   return covered > height * 1.2;
 }
 
@@ -168,10 +197,10 @@ function placeByRank(labels: readonly Label[], blocks: readonly Segment[]): read
 
 /** Places for all labels that must be printed and for as many of the others as find room, those of high rank first. */
 export function placeWithin(labels: readonly Label[], blocks: readonly Segment[]): readonly PlacedLabel[] {
-  if (labels.filter(({ text }) => text !== "").length > MANY) return placeByRank(labels, blocks);
-  let kept = labels;
+  if (labels.filter(isPrinted).length > MANY) return placeByRank(labels, blocks);
+  let kept = tasksOf(labels, blocks);
   for (;;) {
-    const placed = placeLabels(kept, blocks);
+    const placed = placeTasks(kept);
     const hit = placed.filter((one) =>
       collides(
         one,
@@ -181,7 +210,7 @@ export function placeWithin(labels: readonly Label[], blocks: readonly Segment[]
     const ranked = hit.filter(({ label }) => label.rank !== undefined);
     if (ranked.length === 0) return placed;
     const lowest = ranked.reduce((a, b) => ((b.label.rank ?? 0) < (a.label.rank ?? 0) ? b : a));
-    kept = kept.filter((label) => label !== lowest.label);
+    kept = kept.filter(({ label }) => label !== lowest.label);
   }
 }
 

@@ -70,6 +70,7 @@ type PenName =
   | "fibre"
   | "hatch"
   | "curve"
+  | "band"
   | "leader";
 
 export const PENS: Readonly<Record<PenName, Pen>> = {
@@ -85,6 +86,7 @@ export const PENS: Readonly<Record<PenName, Pen>> = {
   fibre: { name: "fibre", width: 0.9, dash: "4 3", light: true },
   hatch: { name: "hatch", width: 0.7, light: true },
   curve: { name: "curve", width: 1.7, colour: ACCENT },
+  band: { name: "band", width: 1, colour: ACCENT, dash: "2 3", light: true },
   leader: { name: "leader", width: 0.6, light: true },
 };
 

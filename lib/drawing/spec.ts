@@ -85,6 +85,18 @@ export interface DiagramsFigure extends FigureWords {
   readonly moments: "tension side" | "compression side";
   readonly marks: readonly DiagramMark[];
   readonly headings?: Readonly<Partial<Record<ForceQuantity, string>>>;
+  /** Where the true values lie, drawn as two thin lines beside the diagram. */
+  readonly bands?: readonly DiagramBand[];
+}
+
+/** Between what most true values of one quantity lie along a member: places in m from its start, in order (one twice where the
+ *  quantity jumps), and the two values at each, N or N·m. */
+export interface DiagramBand {
+  readonly quantity: ForceQuantity;
+  readonly member: string;
+  readonly at: readonly number[];
+  readonly low: readonly number[];
+  readonly high: readonly number[];
 }
 
 /** A state of self-stress: forces in equilibrium with no load, known up to a factor. Members left out are at rest.
@@ -139,6 +151,30 @@ export interface LineChartFigure extends FigureWords {
   readonly series: readonly ChartSeries[];
 }
 
+/** One cause and what it makes of a result: `least` and `greatest` are the result's values at the two ends of the cause's own range,
+ *  with their texts, the one for the smaller value first. */
+export interface RangeBar {
+  readonly kind: "hinge" | "unknown";
+  readonly label: string;
+  readonly least: number;
+  readonly greatest: number;
+  readonly texts: readonly [string, string];
+}
+
+/** One result with the value as chosen, and a bar for every cause. */
+export interface RangePanel {
+  readonly heading: string;
+  readonly chosen: number;
+  readonly chosenText: string;
+  readonly bars: readonly RangeBar[];
+}
+
+/** How results move through the ranges of what they depend on. */
+export interface RangesFigure extends FigureWords {
+  readonly kind: "ranges";
+  readonly panels: readonly RangePanel[];
+}
+
 /** Figures drawn at once, without loading anything. */
 export type SketchSpec =
   | StructureFigure
@@ -147,6 +183,7 @@ export type SketchSpec =
   | DiagramsFigure
   | SelfStressFigure
   | ShapeFigure
-  | DeflectionFigure;
+  | DeflectionFigure
+  | RangesFigure;
 
 export type FigureSpec = SketchSpec | LineChartFigure;

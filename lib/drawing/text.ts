@@ -24,6 +24,7 @@ const SUBSCRIPT =
 
 /** A text split at its subscripts: "A_x = 3" and "X_{h1}" lower x and h1; "roof_beam" stays as it is. */
 export function runs(text: string): readonly Run[] {
+  if (!text.includes("_")) return text === "" ? [] : [{ text, lowered: false }];
   const found: Run[] = [];
   let last = 0;
   for (const match of text.matchAll(SUBSCRIPT)) {
@@ -36,13 +37,25 @@ export function runs(text: string): readonly Run[] {
 }
 
 /** Share of the size a character takes, on the wide side of the usual sans-serif faces. */
-function advance(character: string): number {
+function measured(character: string): number {
   if (/[\s.,:;'|!ijl·()[\]]/u.test(character)) return 0.36;
   if (/[ftrI/\-\u2212]/u.test(character)) return 0.45;
   if (/[mwMW%@\u2014]/u.test(character)) return 0.95;
   if (/[A-Z+=<>]/u.test(character)) return 0.74;
   if (/\p{Script=Han}|\p{Emoji_Presentation}/u.test(character)) return 1.1;
   return 0.63;
+}
+
+const advances = new Map<string, number>();
+const KEPT = 1000;
+
+function advance(character: string): number {
+  const known = advances.get(character);
+  if (known !== undefined) return known;
+  if (advances.size >= KEPT) advances.clear();
+  const found = measured(character);
+  advances.set(character, found);
+  return found;
 }
 
 const LOWERED_SIZE = 0.75;

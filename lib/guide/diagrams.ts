@@ -2,10 +2,14 @@
 
 import { type DiagramsFigure, diagramMarks, type ForceQuantity } from "../drawing/index.ts";
 import { printValue, quantity } from "../quantity/index.ts";
-import { extremes, type Side, valueAt } from "../results/index.ts";
+import { type Side, valueAt } from "../results/index.ts";
 import type { MemberForces } from "../results/types.ts";
-import { type Ledger, shownValue, type TableCell } from "../sheet/index.ts";
+import type { Ledger, TableCell } from "../sheet/index.ts";
 import { memberNamed } from "../structure/index.ts";
+import type { BandBook } from "./band-book.ts";
+import { type DiagramBands, diagramBands } from "./diagram-bands.ts";
+import { handCells } from "./hand-cells.ts";
+import { innerExtremes } from "./inner-extremes.ts";
 import { shownAs, sketchBundle } from "./shown.ts";
 import type { Hand, Spot } from "./types.ts";
 import { lengthText } from "./words.ts";
@@ -19,17 +23,23 @@ const dimensions = { N: "force", V: "force", M: "moment" } as const;
 const order: readonly ForceQuantity[] = ["N", "V", "M"];
 
 /** Records the figure and the table of internal forces; answers with the figure. */
-export function recordDiagrams(ledger: Ledger, hand: Hand, options: DiagramOptions): DiagramsFigure {
+export function recordDiagrams(
+  ledger: Ledger,
+  bands: BandBook,
+  hand: Hand,
+  options: DiagramOptions,
+): DiagramsFigure {
   const moments = options.moments ?? "tension side";
   if (moments !== "tension side" && moments !== "compression side")
     throw new Error(`diagrams: moments "${String(moments)}"; write "tension side" or "compression side"`);
-  const spec = diagramsFigure(hand, moments);
+  const drawn = diagramBands(bands, hand);
+  const spec = diagramsFigure(hand, moments, drawn);
   const uses = [...new Set(hand.solved.flatMap(({ entries }) => entries))];
   ledger.put({
     kind: "figure",
     id: `figure internal forces ${hand.name}`,
     uses,
-    caption: `Axial force, shear and moment under ${hand.name}; moments on the ${moments}`,
+    caption: `Axial force, shear and moment under ${hand.name}; moments on the ${moments}${drawn.words}`,
     alternative: spec.description,
     spec,
   });
@@ -39,12 +49,16 @@ export function recordDiagrams(ledger: Ledger, hand: Hand, options: DiagramOptio
     uses,
     caption: `Internal forces under ${hand.name} (N tension +; M + with tension on the reference fibre)`,
     columns: ["member", "at", "N", "V", "M"],
-    rows: hand.members.flatMap((forces) => rows(hand, forces)),
+    rows: rows(bands, hand),
   });
   return shownAs(spec, () => sketchBundle(spec, spec.description));
 }
 
-function diagramsFigure(hand: Hand, moments: "tension side" | "compression side"): DiagramsFigure {
+function diagramsFigure(
+  hand: Hand,
+  moments: "tension side" | "compression side",
+  { bands, words }: DiagramBands,
+): DiagramsFigure {
   const structure = hand.solved.length === 1 ? (hand.solved[0]?.set.hinged ?? hand.frame) : hand.frame;
   const marks = diagramMarks(hand.members, order, {
     value: (si, which) => printValue(quantity(si, dimensions[which])),
@@ -53,29 +67,14 @@ function diagramsFigure(hand: Hand, moments: "tension side" | "compression side"
   return {
     kind: "diagrams",
     title: `Internal forces under ${hand.name}`,
-    description: `${spoken}.`,
+    description: `${spoken}${words}.`,
     structure,
     forces: hand.members,
     quantities: order,
     moments,
     marks,
+    ...(bands.length === 0 ? {} : { bands }),
   };
-}
-
-/** Extremes strictly inside the member that say more than its ends do. */
-function innerExtremes(forces: MemberForces, which: ForceQuantity): readonly { x: number; value: number }[] {
-  if (which === "N") return [];
-  const { length } = forces;
-  const { greatest, least } = extremes(forces[which]);
-  return [greatest, least].filter(
-    ({ x, value }) => x > 1e-9 * length && x < (1 - 1e-9) * length && !isNought(value, forces, which),
-  );
-}
-
-function isNought(value: number, forces: MemberForces, which: ForceQuantity): boolean {
-  const { greatest, least } = extremes(forces[which]);
-  const size = Math.max(Math.abs(greatest.value), Math.abs(least.value), 1e-3);
-  return Math.abs(value) <= 1e-9 * size;
 }
 
 function stations(
@@ -90,15 +89,15 @@ function stations(
   return [{ label: start, at: start }, ...inner, { label: end, at: end }];
 }
 
-function rows(hand: Hand, forces: MemberForces): readonly (readonly TableCell[])[] {
-  return stations(hand, forces).map(({ label, at }) => [
-    forces.member,
-    label,
-    ...[hand.axial, hand.shear, hand.moment].map((ask): TableCell => {
-      const value = ask(forces.member, { at });
-      return { value: shownValue(value), uses: value.from };
-    }),
-  ]);
+function rows(bands: BandBook, hand: Hand): readonly (readonly TableCell[])[] {
+  const places = hand.members.flatMap((forces) =>
+    stations(hand, forces).map((place) => ({ ...place, member: forces.member })),
+  );
+  const values = places.flatMap(({ member, at }) =>
+    [hand.axial, hand.shear, hand.moment].map((ask) => ({ value: ask(member, { at }) })),
+  );
+  const cells = handCells(bands, values);
+  return places.map(({ member, label }, i) => [member, label, ...cells.slice(3 * i, 3 * i + 3)]);
 }
 
 function spokenForces(hand: Hand, forces: MemberForces): string {

@@ -5,11 +5,15 @@ import { axisOf, memberNamed, pointOn } from "../structure/index.ts";
 import type { Structure } from "../structure/types.ts";
 import { lengthText } from "./words.ts";
 
+/** Places of more hinges than this stand in their table only: a frame's own dimensions would be lost among them. */
+export const mostHinges = 4;
+
 /** One chain of dimensions along x below the figure and one along y beside it. */
 export function dimensionLines(structure: Structure): readonly DimensionLine[] {
+  const hinges = structure.hinges.length > mostHinges ? [] : structure.hinges;
   const points = [
     ...structure.joints.map(({ x, y }) => [x, y] as const),
-    ...structure.hinges.map(({ member, at }) =>
+    ...hinges.map(({ member, at }) =>
       pointOn(axisOf(structure, memberNamed(structure, member, "hinge")), at),
     ),
   ];

@@ -1,17 +1,38 @@
 // How what a verb recorded shows itself in a notebook: its figures, equations and tables, one below the other.
 
 import { drawSketch, type SketchSpec } from "../drawing/index.ts";
-import { type Entry, escaped, formulaDisplay, type Ledger, type TableCell } from "../sheet/index.ts";
+import {
+  bandCellTexts,
+  bandsOf,
+  type Entry,
+  escaped,
+  formulaDisplay,
+  type Ledger,
+  type TableCell,
+  tableBandNote,
+} from "../sheet/index.ts";
 import { type Bundle, figurePrefix, shownAs } from "./shown.ts";
 
-const cellText = (cell: TableCell): string => (typeof cell === "string" ? cell : cell.value.text);
+const cellText = (cell: TableCell): string => {
+  if (typeof cell === "string") return cell;
+  const band = cell.band === undefined ? [] : bandCellTexts(cell.band);
+  return band.length === 0 ? cell.value.text : `${cell.value.text} [${band.join(" ")}]`;
+};
+
+const cellHtml = (cell: TableCell): string => {
+  if (typeof cell === "string") return escaped(cell);
+  const band = cell.band === undefined ? [] : bandCellTexts(cell.band);
+  return [escaped(cell.value.text), ...band.map((text) => `<small>${escaped(text)}</small>`)].join("<br>");
+};
 
 function tableHtml(entry: Extract<Entry, { kind: "table" }>): string {
   const head = entry.columns.map((column) => `<th scope="col">${escaped(column)}</th>`).join("");
   const rows = entry.rows.map(
-    (row) => `<tr>${row.map((cell) => `<td>${escaped(cellText(cell))}</td>`).join("")}</tr>`,
+    (row) => `<tr>${row.map((cell) => `<td>${cellHtml(cell)}</td>`).join("")}</tr>`,
   );
-  return `<table><caption>${escaped(entry.caption)}</caption><thead><tr>${head}</tr></thead><tbody>${rows.join("")}</tbody></table>`;
+  const [band] = bandsOf(entry);
+  const note = band === undefined ? "" : `<p><small>${escaped(tableBandNote(band.band.words))}.</small></p>`;
+  return `<table><caption>${escaped(entry.caption)}</caption><thead><tr>${head}</tr></thead><tbody>${rows.join("")}</tbody></table>${note}`;
 }
 
 function figureHtml({ spec, caption }: Extract<Entry, { kind: "figure" }>): string {

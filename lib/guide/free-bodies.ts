@@ -4,24 +4,53 @@ import type { Quantity } from "../quantity/index.ts";
 import type { Closure, Step } from "../results/types.ts";
 import { type EquationTerm, type Ledger, shownValue } from "../sheet/index.ts";
 import { freeBodies } from "../statics/index.ts";
-import type { Load, Sources } from "../structure/types.ts";
+import type { Load, Sources, Structure } from "../structure/types.ts";
+import { solvedLoads } from "./actual-loads.ts";
+import type { BandBook } from "./band-book.ts";
 import { bodyFigure } from "./body-figure.ts";
 import { closureLines, equationText, forceQuantity, idleLines, type Named, stepLines } from "./equation.ts";
 import { handOf } from "./hand.ts";
 import { loadNames } from "./load-words.ts";
 import { isNought } from "./nought.ts";
-import { coordinateSources, jointSources, loadSources } from "./sources.ts";
+import { withBandShown } from "./shown-result.ts";
+import { coordinateSources, geometrySources, jointSources, loadSources } from "./sources.ts";
 import type { Hand, HingeSet, SolvedSet } from "./types.ts";
-import { and } from "./words.ts";
+import { queryUnreleased } from "./unreleased.ts";
+import { and, structureName } from "./words.ts";
 
-/** Solves each hinge set under its load cases and records every body and equation; answers with the results, added. */
-export function recordFreeBodies(ledger: Ledger, sets: readonly HingeSet[]): Hand {
-  if (sets.length === 0) throw new Error("freeBodies: no hinge set; give what sheet.hinges answered");
-  return handOf(sets.map((set) => recordSet(ledger, set)));
+/** Solves each hinge set under its load cases and records every body and equation; answers with the results, added. What is not
+ *  known of their frame is taken by default where nothing was stated, and that is recorded first. */
+export function recordFreeBodies(ledger: Ledger, bands: BandBook, sets: readonly HingeSet[]): Hand {
+  const [first] = sets;
+  if (first === undefined) throw new Error("freeBodies: no hinge set; give what sheet.hinges answered");
+  const taken = bands.taken(first.frame);
+  if ("none" in taken) recordWithout(ledger, first.frame, taken.none);
+  const solved = sets.map((set) => recordSet(ledger, set));
+  queryUnreleased(ledger, sets);
+  return handOf(solved, (value) => withBandShown(value, bands));
+}
+
+/** That hand results of a frame stand without bands, and why. */
+function recordWithout(ledger: Ledger, frame: Structure, why: string): void {
+  const name = structureName(frame);
+  ledger.put({
+    kind: "finding",
+    id: `bands of ${name}`,
+    uses: geometrySources(frame),
+    title: `Bands of hand results, ${name}`,
+    verdict: `none: ${why}`,
+    lines: [],
+  });
+}
+
+/** The set solved without printing a step: for sets that only try something out. */
+export function solvedQuietly(set: HingeSet): SolvedSet {
+  const loads = solvedLoads(set);
+  return { set, loads, solution: freeBodies(set.hinged, loads), entries: [] };
 }
 
 function recordSet(ledger: Ledger, set: HingeSet): SolvedSet {
-  const loads = set.cases.flatMap((loadCase) => loadCase.loads);
+  const loads = solvedLoads(set);
   const solution = freeBodies(set.hinged, loads);
   const book: SetBook = { ledger, set, loads, named: { solution, loadNames: loadNames(loads) }, entries: [] };
   let current = -1;

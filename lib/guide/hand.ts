@@ -1,16 +1,17 @@
 // Hand results as plain data with named questions: moment here, shear there, reaction at A.
 
-import { type Measure, type Quantity, quantity } from "../quantity/index.ts";
+import { type Dimension, type Measure, type Quantity, quantity } from "../quantity/index.ts";
 import { extremes, memberLoads, type Side, sum, valueAt } from "../results/index.ts";
 import type { MemberForces, Piecewise, Reaction } from "../results/types.ts";
 import { axisOf, memberNamed, mergeSources, metresAlong, readPlace, snapToEnds } from "../structure/index.ts";
 import type { Sources, Structure } from "../structure/types.ts";
+import { asResultOf } from "./origin.ts";
 import { loadSources, memberSources } from "./sources.ts";
 import type { Hand, Peak, SolvedSet, Spot } from "./types.ts";
 import { and } from "./words.ts";
 
 /** The results of solved hinge sets, added. All sets must be of one structure. */
-export function handOf(solved: readonly SolvedSet[]): Hand {
+export function handOf(solved: readonly SolvedSet[], shows: ShowResult = (value) => value): Hand {
   const first = solved[0];
   if (first === undefined) throw new Error("freeBodies: no hinge set");
   const frame = first.set.frame;
@@ -26,15 +27,39 @@ export function handOf(solved: readonly SolvedSet[]): Hand {
     name: solved.map(({ set }) => set.name).join(" + "),
     solved,
     members,
-    axial: (member, { at }) => forceAt(solved, members, "N", member, at),
-    shear: (member, { at }) => forceAt(solved, members, "V", member, at),
-    moment: (member, { at }) => momentAt(solved, members, member, at),
-    peakMoment: (member, sign) => peakMoment(solved, members, member, sign),
-    reaction: ((joint: string, component: Component) =>
-      reactionAt(solved, joint, component)) as Hand["reaction"],
+    axial: (member, { at }) => known(forceAt(solved, members, "N", member, at), "N", member, at),
+    shear: (member, { at }) => known(forceAt(solved, members, "V", member, at), "V", member, at),
+    moment: (member, { at }) => known(momentAt(solved, members, member, at), "M", member, at),
+    peakMoment: (member, sign) => {
+      const { moment, at } = peakMoment(solved, members, member, sign);
+      const wanted = { member, force: "M", at: sign === "positive" ? "greatest" : "least" } as const;
+      const ask = (other: Hand): Quantity => other.peakMoment(member, sign).moment;
+      return Object.freeze({ moment: shows(asResultOf(moment, { hand, wanted, ask })), at });
+    },
+    reaction: ((joint: string, component: Component) => {
+      const ask = (other: Hand): Quantity => (other.reaction as AnyReaction)(joint, component);
+      const wanted = { joint, reaction: component };
+      return shows(asResultOf(reactionAt(solved, joint, component), { hand, wanted, ask }));
+    }) as Hand["reaction"],
+  };
+  const known = <D extends "force" | "moment">(
+    value: Quantity<D>,
+    force: "N" | "V" | "M",
+    member: string,
+    at: Spot,
+  ): Quantity<D> => {
+    const { x, side } = station(frame, member, at);
+    const question = { N: "axial", V: "shear", M: "moment" } as const;
+    const ask = (other: Hand): Quantity => other[question[force]](member, { at });
+    return shows(asResultOf(value, { hand, wanted: { member, force, at: x, side }, ask }));
   };
   return Object.freeze(hand);
 }
+
+type AnyReaction = (joint: string, component: Component) => Quantity;
+
+/** How a hand result shows itself in a notebook; as a plain value where nobody says. */
+export type ShowResult = <D extends Dimension>(value: Quantity<D>) => Quantity<D>;
 
 type Component = "x" | "y" | "moment";
 

@@ -8,8 +8,15 @@ import { shownAs } from "./shown.ts";
 import { loadSources } from "./sources.ts";
 import type { LoadCase } from "./types.ts";
 
-/** Records a load case as a table of its loads; answers with it. Throws on a key that is no short word and on a case without loads. */
-export function recordLoadCase(ledger: Ledger, key: string, title: string, loads: readonly Load[]): LoadCase {
+/** Records a load case as a table of its loads; answers with it. `releases` is the hinge set whose holding forces it lets go.
+ *  Throws on a key that is no short word and on a case without loads. */
+export function recordLoadCase(
+  ledger: Ledger,
+  key: string,
+  title: string,
+  loads: readonly Load[],
+  releases?: string,
+): LoadCase {
   if (!/^\p{L}[\p{L}\p{N}]*$/u.test(key))
     throw new Error(
       `load case "${key}": the key is one short word of letters and digits, such as "G" or "W1"`,
@@ -28,9 +35,8 @@ export function recordLoadCase(ledger: Ledger, key: string, title: string, loads
     row(load).map((cell) => (typeof cell === "string" ? cell : cell.value.text)),
   );
   const text = [`load case ${key}: ${title}`, ...lines.map((line) => `  ${line.join(", ")}`)].join("\n");
-  return shownAs({ entry: `${id}@${version}`, key, title, loads: Object.freeze([...loads]) }, () => ({
-    "text/plain": text,
-  }));
+  const found = { entry: `${id}@${version}`, key, title, loads: Object.freeze([...loads]) };
+  return shownAs(releases === undefined ? found : { ...found, releases }, () => ({ "text/plain": text }));
 }
 
 function row(load: Load): readonly TableCell[] {

@@ -10,13 +10,13 @@ export function loadSymbol(load: Load): string | undefined {
   return id !== undefined && /^[A-Za-z][A-Za-z0-9]*(_[A-Za-z0-9]+)*$/.test(id) ? id : undefined;
 }
 
-/** The symbols by which equations call the resultants of loads: Q_g, P; with the member or joint where two would be
+/** The symbols by which equations call the resultants of loads: Q_g, P, C of couples; with the member or joint where two would be
  *  alike (Q_w_AB), and numbered where that does not tell them apart. */
 export function loadNames(loads: readonly Load[]): readonly string[] {
   const bare = loads.map((load, i) => {
     const symbol = loadSymbol(load);
     if (load.kind === "distributed") return `Q_${symbol ?? i + 1}`;
-    return symbol ?? `P_${i + 1}`;
+    return symbol ?? `${load.fx === 0 && load.fy === 0 ? "C" : "P"}_${i + 1}`;
   });
   const placed = bare.map((name, i) => (isAlone(bare, name) ? name : `${name}_${placeName(loads[i])}`));
   return placed.map((name, i) => (isAlone(placed, name) ? name : `${name}_${i + 1}`));

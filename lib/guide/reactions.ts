@@ -13,10 +13,14 @@ import {
 import { equilibrium } from "../statics/index.ts";
 import { mergeSources } from "../structure/index.ts";
 import type { Structure } from "../structure/types.ts";
+import { actualLoads } from "./actual-loads.ts";
+import type { BandBook } from "./band-book.ts";
+import { type CellOf, handCells } from "./hand-cells.ts";
 import { closedSum, isNought } from "./nought.ts";
 import { shownAs } from "./shown.ts";
 import { geometrySources, loadSources } from "./sources.ts";
 import type { Hand } from "./types.ts";
+import { unreleasedForces } from "./unreleased.ts";
 
 type Component = "x" | "y" | "moment";
 
@@ -26,6 +30,8 @@ export interface SupportReaction {
   readonly x?: Quantity<"force">;
   readonly y?: Quantity<"force">;
   readonly moment?: Quantity<"moment">;
+  /** A force taken to hold a floor against sway, which no support gives. */
+  readonly holding?: true;
 }
 
 const headings: Readonly<Record<Component, string>> = {
@@ -35,13 +41,15 @@ const headings: Readonly<Record<Component, string>> = {
 };
 
 /** Records the reactions as a table whose printed forces foot, and the equilibrium of the whole as three checks. */
-export function recordReactions(ledger: Ledger, hand: Hand): readonly SupportReaction[] {
+export function recordReactions(ledger: Ledger, bands: BandBook, hand: Hand): readonly SupportReaction[] {
   const reactions = supportReactions(hand);
   const used = (["x", "y", "moment"] as const).filter((one) =>
     reactions.some((reaction) => reaction[one] !== undefined),
   );
   const columns = used.map((component) => column(reactions, component));
-  const cells = (row: number): readonly TableCell[] => columns.map((one) => one[row] ?? "");
+  const shown = handCells(bands, columns.flat());
+  const height = reactions.length + 1;
+  const cells = (row: number): readonly TableCell[] => columns.map((_, i) => shown[i * height + row] ?? "");
   ledger.put({
     kind: "table",
     id: `reactions ${hand.name}`,
@@ -49,19 +57,22 @@ export function recordReactions(ledger: Ledger, hand: Hand): readonly SupportRea
     caption: `Reactions under ${hand.name}, on the structure`,
     columns: ["support", ...used.map((component) => headings[component])],
     rows: [
-      ...reactions.map(({ joint }, row) => [joint, ...cells(row)]),
+      ...reactions.map((one, row) => [nameOf(one), ...cells(row)]),
       ["sum of forces", ...cells(reactions.length)],
     ],
   });
   recordEquilibrium(ledger, hand, reactions);
   const lines = reactions.map(
-    ({ joint, ...values }) => `  ${joint}: ${used.map((c) => `${c} ${values[c] ?? "free"}`).join(", ")}`,
+    (values) => `  ${nameOf(values)}: ${used.map((c) => `${c} ${values[c] ?? "free"}`).join(", ")}`,
   );
   return shownAs(reactions, () => ({ "text/plain": [`reactions under ${hand.name}`, ...lines].join("\n") }));
 }
 
+const nameOf = ({ joint, holding }: SupportReaction): string =>
+  holding === true ? `${joint}, holding force` : joint;
+
 function supportReactions(hand: Hand): readonly SupportReaction[] {
-  return hand.frame.supports
+  const supports = hand.frame.supports
     .filter(({ kind }) => kind !== "free")
     .map(({ joint, holds }) => ({
       joint,
@@ -69,35 +80,33 @@ function supportReactions(hand: Hand): readonly SupportReaction[] {
       ...(holds.y ? { y: hand.reaction(joint, "y") } : {}),
       ...(holds.rotation ? { moment: hand.reaction(joint, "moment") } : {}),
     }));
+  const holding = unreleasedForces(hand).map(({ joint, force }) => ({
+    joint,
+    x: force,
+    holding: true as const,
+  }));
+  return [...supports, ...holding];
 }
 
 function quantities({ x, y, moment }: SupportReaction): readonly Quantity[] {
   return [x, y, moment].filter((value) => value !== undefined);
 }
 
-/** The cells of one column, then the cell of its sum; forces are printed so that they foot. */
-function column(reactions: readonly SupportReaction[], component: Component): readonly TableCell[] {
-  const values = reactions.flatMap((reaction) => reaction[component] ?? []);
-  if (component === "moment") return [...reactions.map((reaction) => cell(reaction.moment)), ""];
-  const forces = values as readonly Quantity<"force">[];
+/** What stands in one column, then its sum; forces are printed so that they foot. */
+function column(reactions: readonly SupportReaction[], component: Component): readonly CellOf[] {
+  const values = reactions.map((reaction): Quantity | undefined => reaction[component]);
+  if (component === "moment") return [...values.map((value) => ({ value })), { value: undefined }];
+  const forces = values.filter((value) => value !== undefined) as readonly Quantity<"force">[];
   const { parts, total } = footing(forces);
   let next = 0;
-  const cells = reactions.map((reaction) =>
-    cell(reaction[component], reaction[component] === undefined ? "" : parts[next++]),
-  );
+  const cells = values.map((value) => ({ value, text: value === undefined ? undefined : parts[next++] }));
   const sum = forces.reduce((a, b) => a + b.si, 0);
   const from = mergeSources(...forces.map((force) => force.from));
-  return [...cells, cell(quantity(sum, "force", { from }), total)];
-}
-
-function cell(value: Quantity | undefined, text?: string): TableCell {
-  if (value === undefined) return "";
-  const shown = shownValue(value);
-  return { value: text === undefined ? shown : { ...shown, text }, uses: value.from };
+  return [...cells, { value: quantity(sum, "force", { from }), text: total }];
 }
 
 function recordEquilibrium(ledger: Ledger, hand: Hand, reactions: readonly SupportReaction[]): void {
-  const loads = hand.solved.flatMap((one) => one.loads);
+  const loads = actualLoads(hand.solved.map(({ set }) => set));
   const plain = reactions.map(({ joint, x, y, moment }) => ({
     joint,
     ...(x === undefined ? {} : { x: x.si }),

@@ -1,5 +1,6 @@
 // Where the moment is zero: single spans under any load, end restraint, ranges, placement of hinges.
 
+export { type EndPlace, type LineBeam, lineBeams } from "./beam-lines.ts";
 export { columnSinking, withShortening } from "./column-shortening.ts";
 export { momentDistribution } from "./distribution.ts";
 export {
@@ -44,6 +45,12 @@ export {
   swayShares,
 } from "./portal-gravity.ts";
 export { type ProbableMember, type ProbableShape, probableShape } from "./probable-shape.ts";
+export {
+  checkGravity,
+  hingeByStiffness,
+  momentsByStiffness,
+  type StiffnessMoments,
+} from "./relative-stiffness.ts";
 export {
   coefficientMoments,
   coefficientSags,

@@ -27,6 +27,7 @@ export function rangeOf(
     return unloadedRange(
       loads.map((load) => inGlobalAxes(structure, load)),
       own.length,
+      known,
       far,
     );
   try {
@@ -39,8 +40,14 @@ export function rangeOf(
   }
 }
 
-/** A member turned at its far end only: M_near = -r M_far/2, hence zero at L r / (2 + r) from the near end, L/3 at most. */
-function unloadedRange(loads: readonly Load[], length: number, far: number | undefined): Judged {
+/** A member turned at its far end only: M_near = -r M_far/2, hence zero at L r / (2 + r) from the near end, L/3 at most.
+ *  Where its loaded neighbours can turn both ends the moment can be zero anywhere. */
+function unloadedRange(
+  loads: readonly Load[],
+  length: number,
+  near: number | undefined,
+  far: number | undefined,
+): Judged {
   if (loads.some(pushesSideways))
     return {
       why: "no load across the member and loads that may move the structure sideways: its own loads give no range",
@@ -49,9 +56,13 @@ function unloadedRange(loads: readonly Load[], length: number, far: number | und
     return {
       why: "no load across the member, and its far end cannot be turned by others: its own loads give no range",
     };
+  if (near === undefined)
+    return {
+      why: "no load across the member, and the frame can turn both its ends: its own loads give no range",
+    };
   return {
     range: Object.freeze({ least: 0, most: length / 3 }),
-    why: "no load across the member, far end turned by the frame, this end from free to turn to fixed",
+    why: "no load across the member, far end turned by the frame, this end fixed",
   };
 }
 

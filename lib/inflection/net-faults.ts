@@ -6,6 +6,9 @@ export type NetFault =
   | { readonly kind: "inclined"; readonly member: string }
   | { readonly kind: "hinged"; readonly hinges: readonly string[] }
   | { readonly kind: "ratio"; readonly what: string; readonly value: number }
+  | { readonly kind: "sideways"; readonly where: string }
+  | { readonly kind: "couple"; readonly where: string }
+  | { readonly kind: "no sign change"; readonly member: string; readonly words: string }
   | { readonly kind: "not uniform"; readonly member: string }
   | { readonly kind: "places"; readonly first: number; readonly second: number; readonly length: number };
 
@@ -23,7 +26,7 @@ export class NetError extends Error {
 function wordsOf(fault: NetFault): string {
   switch (fault.kind) {
     case "no stiffness":
-      return `member "${fault.member}" has no section; placing by relative stiffness needs its E and I, or ratios of them, by withSections`;
+      return `member "${fault.member}" has no section; placing by relative stiffness needs its E and I, by withSections, or ratios: { "I of beams / I of columns": 2.5 }`;
     case "inclined":
       return `member "${fault.member}" is neither level nor upright; these formulas are for beams and columns`;
     case "not carried":
@@ -34,6 +37,12 @@ function wordsOf(fault: NetFault): string {
       return `${fault.what} is ${fault.value}; a finite number more than zero is wanted`;
     case "not uniform":
       return `moment coefficients hold for a uniform load along all of a beam; the load of "${fault.member}" is another`;
+    case "sideways":
+      return `a load on ${fault.where} pushes the frame sideways; these formulas are for gravity, give it a hinge set of its own`;
+    case "couple":
+      return `a couple acts on ${fault.where}; these formulas take loads across the beams and forces down, place its hinges yourself`;
+    case "no sign change":
+      return `by relative stiffness (${fault.words}) the moment of member "${fault.member}" does not change sign; place the hinge in another member`;
     case "places":
       return `hinges at ${fault.first} m and ${fault.second} m of a span of ${fault.length} m; two different places on it are wanted`;
   }

@@ -50,7 +50,8 @@ export interface Placement {
 
 /** A hinge placed by a distance or by end fixity, judged by the range of the isolated span under these loads.
  *  The end at hand counts as anything from free to turn to fixed; so does the far end, unless a support alone decides how it turns.
- *  A member without load across it, under loads that do not push the structure sideways, is judged as turned at its far end. */
+ *  A member without load across it, under loads that do not push the structure sideways, is judged as turned at its far end
+ *  where a support alone holds this one. */
 export function placement(structure: Structure, loads: readonly Load[], choice: PlacementChoice): Placement {
   const member = memberNamed(structure, choice.member, "hinge");
   const { length } = axisOf(structure, member);

@@ -16,14 +16,14 @@ export interface UsualPlace {
 /** The usual places. 0.211 = 1/2 - √3/6 and 1/4 are those of a uniform load between fixed ends and on a propped span; a tenth is the
  *  rounded middle between 0 and 0.211. */
 export const usualPlaces: Readonly<Record<"tenth" | "fixed ends" | "propped", UsualPlace>> = Object.freeze({
-  tenth: Object.freeze({ part: 0.1, words: "common practice: a tenth of the span" }),
+  tenth: Object.freeze({ part: 0.1, words: "common practice: 0.1 L" }),
   "fixed ends": Object.freeze({
     part: 0.5 - Math.sqrt(3) / 6,
-    words: "common practice: 0.211 of the span, as between fixed ends",
+    words: "common practice: 0.211 L, as between fixed ends",
   }),
   propped: Object.freeze({
     part: 0.25,
-    words: "common practice: a quarter of the span, as on a propped span",
+    words: "common practice: 0.25 L, as on a propped span",
   }),
 });
 

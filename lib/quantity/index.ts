@@ -34,7 +34,15 @@ export {
   type Quotients,
   quotientDimension,
 } from "./products.ts";
-export { type Display, displayedAs, isQuantity, type Quantity, quantity, type UnitIn } from "./quantity.ts";
+export {
+  type Display,
+  displayedAs,
+  isQuantity,
+  multipleOf,
+  type Quantity,
+  quantity,
+  type UnitIn,
+} from "./quantity.ts";
 export { readMeasure } from "./read.ts";
 export { isUnit, lookUpUnit, plainSpelling, someUnits, type Unit } from "./unit-table.ts";
 export type {

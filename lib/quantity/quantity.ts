@@ -46,6 +46,21 @@ export type Display = Readonly<Record<string, string>>;
 // Beside the values and not in them: a quantity is plain data.
 const displays = new WeakMap<object, () => Display>();
 
+// What a value is a multiple of. A multiple of a hand result has its band, however it was turned round or shown.
+const multiples = new WeakMap<object, { readonly of: Quantity; readonly factor: number }>();
+
+/** The value another was made from by a factor alone (shown in another unit, turned round, multiplied by a number), and the
+ *  factor; the value itself and 1 where it was not. */
+export function multipleOf(value: Quantity): { readonly of: Quantity; readonly factor: number } {
+  return multiples.get(value) ?? { of: value, factor: 1 };
+}
+
+function asMultiple<Q extends Quantity>(value: Q, of: Quantity, factor: number): Q {
+  const first = multipleOf(of);
+  multiples.set(value, { of: first.of, factor: factor * first.factor });
+  return value;
+}
+
 class Value<D extends Dimension> implements Quantity<D> {
   readonly dimension: D;
   readonly si: number;
@@ -74,7 +89,8 @@ class Value<D extends Dimension> implements Quantity<D> {
   times<E extends Dimension>(factor: Quantity<E>): Quantity<Product<D, E>>;
   times(factor: number | Quantity): Quantity {
     if (!isFactor(factor)) throw new Error(wrongFactor(this, "multiplied", factor));
-    if (typeof factor === "number") return quantity(this.si * factor, this.dimension, this);
+    if (typeof factor === "number")
+      return asMultiple(quantity(this.si * factor, this.dimension, this), this, factor);
     const dimension = productDimension(this.dimension, factor.dimension);
     return quantity(this.si * factor.si, dimension, { from: joined(this, factor) });
   }
@@ -85,18 +101,19 @@ class Value<D extends Dimension> implements Quantity<D> {
     if (!isFactor(divisor)) throw new Error(wrongFactor(this, "divided", divisor));
     const si = typeof divisor === "number" ? divisor : divisor.si;
     if (si === 0) throw new Error(`${withDimension(this)} cannot be divided by ${divisor}`);
-    if (typeof divisor === "number") return quantity(this.si / si, this.dimension, this);
+    if (typeof divisor === "number")
+      return asMultiple(quantity(this.si / si, this.dimension, this), this, 1 / si);
     const dimension = quotientDimension(this.dimension, divisor.dimension);
     return quantity(this.si / si, dimension, { from: joined(this, divisor) });
   }
 
   negated(): Quantity<D> {
-    return quantity(-this.si, this.dimension, this);
+    return asMultiple(quantity(-this.si, this.dimension, this), this, -1);
   }
 
   to(unit: UnitIn<D>): Quantity<D> {
     this.checked(unit);
-    return quantity(this.si, this.dimension, { unit, from: this.from });
+    return asMultiple(quantity(this.si, this.dimension, { unit, from: this.from }), this, 1);
   }
 
   in(unit: UnitIn<D>): number {

@@ -1,7 +1,7 @@
 // The entries of a record as a reader meets them: each with its line label, its anchor, what it stands on and what
 // stands on it.
 
-import { type CalculationRecord, type Entry, readUse } from "../sheet/index.ts";
+import { allUses, type CalculationRecord, type Entry, readUse, valueUses } from "../sheet/index.ts";
 
 /** A thing an entry stands on, as it is now. */
 export interface Ground {
@@ -14,7 +14,7 @@ export interface Item {
   /** "G3" a given, "A2" an assumption, "17" a line of the calculation; empty for text. */
   readonly label: string;
   readonly on: readonly Ground[];
-  /** Ids of the entries that stand on it. */
+  /** Ids of the entries that stand on it, by their values or by their bands. */
   readonly by: readonly string[];
   /** Ids of the givens and assumptions it rests on in the end. */
   readonly roots: readonly string[];
@@ -50,19 +50,10 @@ function labels(entries: readonly Entry[]): Map<string, string> {
   return found;
 }
 
-/** Every use an entry names, those in the cells of a table included. */
-export function usesOf(entry: Entry): readonly string[] {
-  const cells =
-    entry.kind === "table"
-      ? entry.rows.flatMap((row) => row.flatMap((cell) => (typeof cell === "string" ? [] : cell.uses)))
-      : [];
-  return [...new Set([...entry.uses, ...cells])];
-}
-
 function usersOf(entries: readonly Entry[]): ReadonlyMap<string, readonly string[]> {
   const users = new Map<string, string[]>();
   for (const entry of entries) {
-    for (const id of new Set(usesOf(entry).map((use) => readUse(use).id))) {
+    for (const id of new Set(allUses(entry).map((use) => readUse(use).id))) {
       users.set(id, [...(users.get(id) ?? []), entry.id]);
     }
   }
@@ -73,7 +64,7 @@ function rootsOf(entry: Entry, byId: ReadonlyMap<string, Entry>): readonly strin
   const seen = new Set<string>([entry.id]);
   const open = [entry];
   for (let next = open.pop(); next; next = open.pop()) {
-    for (const use of usesOf(next)) {
+    for (const use of valueUses(next)) {
       const { id } = readUse(use);
       const ground = byId.get(id);
       if (seen.has(id) || !ground) continue;
@@ -102,7 +93,7 @@ export function bookOf(record: CalculationRecord): Book {
     (entry): Item => ({
       entry,
       label: numbered.get(entry.id) ?? "",
-      on: usesOf(entry).map(ground),
+      on: valueUses(entry).map(ground),
       by: users.get(entry.id) ?? [],
       roots: rootsOf(entry, byId),
     }),

@@ -2,12 +2,14 @@
 
 import type { CheckEntry, Head, QueryEntry, ResultEntry } from "../sheet/index.ts";
 import { isClosure } from "./arrange.ts";
+import { bandLine, bandsOnCover } from "./bands.ts";
 import { type Book, type Item, lineAnchor } from "./book.ts";
 import { CAUTIONS, NOT_CONSIDERED, statusWords } from "./cautions.ts";
 import { closuresOnCover } from "./closures.ts";
-import { type Html, h, type Part, raw } from "./html.ts";
+import { type Html, h, joined, type Part, raw } from "./html.ts";
 import { setFromOutside, verdict } from "./lines.ts";
 import { maths, wrapping } from "./maths.ts";
+import { promptsLeft, promptWords } from "./prompts.ts";
 import { numberLink } from "./references.ts";
 import { unbroken } from "./words.ts";
 
@@ -57,8 +59,8 @@ function governing(items: readonly Of<ResultEntry>[]): Html {
       entry,
       label,
     }) => h`<li><a class="no" href="#${lineAnchor(entry.id)}" aria-label="line ${label}">${label}</a>
-<p class="value">${maths(entry.tex)} = ${numberLink(entry.id, entry.value.text)}</p><p>${unbroken(entry.description)}</p></li>`,
-  )}</ul>`;
+<p class="value">${maths(entry.tex)} = ${numberLink(entry.id, entry.value.text)}</p><p>${unbroken(entry.description)}</p>${entry.band === undefined ? "" : bandLine(entry.band)}</li>`,
+  )}</ul>${bandsOnCover(rows.flatMap(({ entry }) => entry.band ?? []))}`;
 }
 
 /** The engineer's own checks and every check that fails, each by itself; then one line on the equations that close. */
@@ -104,6 +106,21 @@ function outdated(book: Book): Part {
   return h`<p class="stale">OUT OF DATE: ${items.length} of ${book.items.length} entries were worked out before something they stand on was changed:${links}</p>`;
 }
 
+/** What a template asked for and nobody has written yet, each cell leading to its first line. */
+function prompts(book: Book): Part {
+  const left = promptsLeft(book.record);
+  if (left.count === 0) return "";
+  const first = (cell: number): string | undefined => book.items.find((i) => i.entry.cell === cell)?.entry.id;
+  const links = left.cells.map((cell): Part => {
+    const id = first(cell);
+    return id === undefined ? `${cell}` : h`<a class="ref" href="#${lineAnchor(id)}">${cell}</a>`;
+  });
+  const where =
+    links.length === 0 ? "" : [left.cells.length === 1 ? ": cell " : ": cells ", joined(links, ", ")];
+  return h`<p class="stale">NOT FILLED IN: ${promptWords(left)}${where}</p>
+`;
+}
+
 /** The cover. */
 export function cover(book: Book): Html {
   const { head, notConsidered } = book.record;
@@ -116,7 +133,7 @@ export function cover(book: Book): Html {
 ${titleBlock(head)}
 </header>
 ${stopped(book)}<section class="summary" aria-labelledby="outcome"><h2 id="outcome">Outcome</h2>
-${outdated(book)}
+${prompts(book)}${outdated(book)}
 <section><h3>Governing results</h3>${governing(ofKind(book, "result"))}</section>
 <section><h3>Checks${count}</h3>${checks(book)}</section>
 <section><h3>Open queries</h3>${queries(ofKind(book, "query"))}</section>

@@ -10,6 +10,7 @@ const KINDS: readonly FigureSpec["kind"][] = [
   "self-stress",
   "shape",
   "deflection",
+  "ranges",
   "line chart",
 ];
 

@@ -101,6 +101,15 @@ function changed(book: Book, changes: Changes): readonly Part[] {
       changes.results.map(({ id, name, value }) => [lineName(book, id, name), ...valueCells(value)]),
     ),
     table(
+      "Bands changed",
+      [{ heading: "line" }, { heading: "before" }, { heading: "now" }],
+      (changes.bands ?? []).map(({ id, name, before, after }) => [
+        lineName(book, id, name),
+        unbroken(before),
+        unbroken(after),
+      ]),
+    ),
+    table(
       "Words changed",
       [{ heading: "line" }, { heading: "before" }, { heading: "now" }],
       changes.words.map(({ id, name, before, after }) => [lineName(book, id, name), before, after]),

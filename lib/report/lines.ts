@@ -14,6 +14,7 @@ import type {
   StepEntry,
   TextEntry,
 } from "../sheet/index.ts";
+import { bandWithGround } from "./bands.ts";
 import { type Book, type Item, lineAnchor } from "./book.ts";
 import { type Html, h, type Part, raw } from "./html.ts";
 import { markdown } from "./markdown.ts";
@@ -91,11 +92,12 @@ const check = (entry: CheckEntry): Part => [
   h`<p>${verdict(entry)}</p>`,
 ];
 
-const result = (entry: ResultEntry): Part => [
+const result = (book: Book, entry: ResultEntry): Part => [
   value(entry),
   says(
     entry.governing ? [entry.description, "governs"].filter((t) => t !== "").join("; ") : entry.description,
   ),
+  bandWithGround(book, entry.band),
 ];
 
 const step = (entry: StepEntry, heading: string): Part => [
@@ -133,7 +135,7 @@ const query = (entry: QueryEntry): Part => h`<p class="query"><strong>Open query
 const conclusion = (entry: ConclusionEntry): Part => h`<p class="conclusion">${entry.text}</p>`;
 const text = (entry: TextEntry): Part => h`<div class="prose">${markdown(entry.markdown)}</div>`;
 
-function matter(item: Item, figures: Figures, { heading = "", caption }: Wording): Part {
+function matter(book: Book, item: Item, figures: Figures, { heading = "", caption }: Wording): Part {
   const { entry } = item;
   switch (entry.kind) {
     case "given":
@@ -145,7 +147,7 @@ function matter(item: Item, figures: Figures, { heading = "", caption }: Wording
     case "check":
       return check(entry);
     case "result":
-      return result(entry);
+      return result(book, entry);
     case "step":
       return step(entry, heading);
     case "finding":
@@ -176,7 +178,7 @@ export function line(book: Book, item: Item, figures: Figures, wording: Wording 
   const stale = entry.outOfDate ? STALE : "";
   return h`<div class="line ${entry.kind}${entry.outOfDate ? " outdated" : ""}" id="${anchor}">
 <div class="number">${number}</div>
-<div class="matter">${stale}${matter(item, figures, wording)}</div>
+<div class="matter">${stale}${matter(book, item, figures, wording)}</div>
 ${margin(book, item)}
 </div>
 `;

@@ -73,6 +73,7 @@ dt { font-size: .72rem; color: var(--quiet); }
 .closure .sum, .closure .own { display: inline; } .closure .own { font-size: .84rem; color: var(--quiet); margin-left: .6rem; }
 .value { font-size: 1.04rem; }
 .given .matter, .result .matter { display: grid; grid-template-columns: minmax(9rem, 2fr) minmax(0, 3fr); gap: 0 1rem; align-items: baseline; align-content: start; }
+.band { font-size: .88rem; line-height: 1.38; } .tried { color: var(--quiet); font-size: .82rem; } .ledger + .tried { margin-top: .35rem; } .result .band { grid-column: 1 / -1; } .ledger .band { grid-column: 2 / -1; } td .band { font-size: .8rem; color: var(--quiet); } table + .band, .scroll + .band { color: var(--quiet); font-size: .82rem; margin-top: .25rem; }
 .given .source { grid-column: 2; } .given .outside, .given .stale, .result .stale { grid-column: 1 / -1; }
 .num { color: var(--ink); border-bottom: 1.5px solid var(--accent); padding: 0 .08em; }
 .formula .num { display: inline-block; position: relative; }
@@ -130,7 +131,7 @@ const NARROW = `
   .margin, .line.figure .margin, .line.table .margin { grid-column: 2; border-left: 1.5px solid var(--accent); padding: 0 0 .45rem .7rem; }
   .margin p { display: inline; margin-right: .8rem; }
   .given .matter, .result .matter { display: block; }
-  .scroll td, .scroll th { min-width: 4.4rem; }
+  .scroll td, .scroll th { min-width: 4.4rem; } .scroll .words { min-width: 13rem; }
   .title-block > div { grid-column: span 3; } .title-block > div:nth-child(3), .title-block > div:nth-child(7) { grid-column: 1 / -1; }
   .ledger li { grid-template-columns: 1.6rem minmax(0, 1fr); } .ledger li > p { grid-column: 2; }
   .why { columns: 1; margin-left: .3rem; }

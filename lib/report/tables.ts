@@ -1,6 +1,7 @@
 // Tables, whose numbers lead to what they stand on like any other.
 
-import type { TableCell, TableEntry } from "../sheet/index.ts";
+import { bandsOf, type TableCell, type TableEntry } from "../sheet/index.ts";
+import { bandInCell, noteOnBands } from "./bands.ts";
 import { type Html, h, type Part } from "./html.ts";
 import { cellLink } from "./references.ts";
 
@@ -24,10 +25,16 @@ export function cellGroups(entry: TableEntry): readonly CellGroup[] {
   return [...groups.values()];
 }
 
+/** A text longer than this is not set a word to the line on a telephone. */
+const LONG = 40;
+
+const textCell = (text: string): Html =>
+  text.length > LONG ? h`<td class="words">${text}</td>` : h`<td>${text}</td>`;
+
 function rowOf(entry: TableEntry, row: readonly TableCell[], keys: readonly string[]): Html {
   return h`<tr>${row.map((cell, i): Part => {
-    if (typeof cell === "string") return i === 0 ? h`<th scope="row">${cell}</th>` : h`<td>${cell}</td>`;
-    return h`<td class="figures">${cellLink(entry.id, keys.indexOf(keyOf(cell)), cell.value.text)}</td>`;
+    if (typeof cell === "string") return i === 0 ? h`<th scope="row">${cell}</th>` : textCell(cell);
+    return h`<td class="figures">${cellLink(entry.id, keys.indexOf(keyOf(cell)), cell.value.text)}${bandInCell(cell.band)}</td>`;
   })}</tr>
 `;
 }
@@ -40,5 +47,6 @@ export function table(entry: TableEntry): Html {
 <thead><tr>${entry.columns.map((c) => (c === "" ? h`<td></td>` : h`<th scope="col">${c}</th>`))}</tr></thead>
 <tbody>
 ${entry.rows.map((row) => rowOf(entry, row, keys))}</tbody>
-</table></div>`;
+</table></div>
+${noteOnBands(bandsOf(entry).map(({ band }) => band))}`;
 }

@@ -28,6 +28,7 @@ import {
   type Head,
   RECORD_FORMAT,
   RECORD_VERSION,
+  type ResultBand,
   type ShownValue,
 } from "./record.ts";
 import { shownAsWritten, shownGiven, shownValue } from "./shown.ts";
@@ -158,7 +159,7 @@ export class Book implements Ledger {
     symbol: string,
     value: Quantity<D>,
     description = "",
-    options: { readonly governing?: boolean } = {},
+    options: { readonly governing?: boolean; readonly band?: ResultBand } = {},
   ): Quantity<D> {
     const read = readMeasure(value, undefined, symbol);
     this.#overrides.refuse(symbol, () => basisOf(read.from, this.#store));
@@ -168,6 +169,7 @@ export class Book implements Ledger {
       uses: read.from,
       description,
       governing: options.governing ?? false,
+      ...(options.band === undefined ? {} : { band: options.band }),
     });
   }
 

@@ -32,6 +32,14 @@ export interface ResultChange extends LineChange {
   readonly governing: boolean;
 }
 
+/** A band that lies otherwise about its value: of a result by itself, of a table how many. A band that only grew with its
+ *  value, in the same ratios to it, has not changed. */
+export interface BandChange extends LineChange {
+  readonly before: string;
+  readonly after: string;
+  readonly governing: boolean;
+}
+
 /** A check whose verdict, utilisation or formula is another. */
 export interface CheckChange extends LineChange {
   readonly before: string;
@@ -56,6 +64,8 @@ export interface Changes {
   readonly head: readonly { readonly field: string; readonly before: string; readonly after: string }[];
   readonly grounds: readonly GroundChange[];
   readonly results: readonly ResultChange[];
+  /** Absent where no band changed. */
+  readonly bands?: readonly BandChange[];
   readonly checks: readonly CheckChange[];
   /** Questions raised now that were not before: a hinge out of its range among them. */
   readonly raised: readonly LineNamed[];

@@ -1,5 +1,6 @@
 // Two records of one calculation compared, line by line under their stable ids. What is the same is not listed.
 
+import { bandChange } from "./band-changes.ts";
 import type {
   Changes,
   CheckChange,
@@ -39,10 +40,12 @@ export function changesBetween(before: CalculationRecord, after: CalculationReco
   const added = after.entries.filter(({ id }) => !kept.has(id));
   const removed = before.entries.filter(({ id, kind }) => !now.has(id) || (!kept.has(id) && kind !== "text"));
   const differs = differsIn([...before.entries, ...after.entries]);
+  const bands = governingFirst(pairs.flatMap(([was, is]) => bandChange(was, is)));
   return Object.freeze({
     head: headChanges(before.head, after.head),
     grounds: groundChanges(pairs, after.entries, differs),
     results: governingFirst(pairs.flatMap((pair) => resultChanges(pair, differs))),
+    ...(bands.length === 0 ? {} : { bands }),
     checks: pairs.flatMap(checkChange),
     raised: added.filter(isQuery).map(lineNamed),
     settled: removed.filter(isQuery).map(lineNamed),
@@ -172,7 +175,7 @@ function resultChanges([before, after]: Pair, differs: Differs): readonly Result
   });
 }
 
-const governingFirst = (changes: readonly ResultChange[]): readonly ResultChange[] => [
+const governingFirst = <T extends { readonly governing: boolean }>(changes: readonly T[]): readonly T[] => [
   ...changes.filter(({ governing }) => governing),
   ...changes.filter(({ governing }) => !governing),
 ];

@@ -1,8 +1,9 @@
 // How entries show themselves in a notebook: MathML where there is a formula, plain text beside it.
 
 import type { Display } from "../quantity/index.ts";
+import { bandText } from "./band-words.ts";
 import { toMathML } from "./mathml.ts";
-import type { Entry, FormulaLines } from "./record.ts";
+import type { Entry, FormulaLines, ResultBand } from "./record.ts";
 import { valueTex } from "./tex.ts";
 
 /** A formula in its three lines, with its description. */
@@ -32,7 +33,17 @@ export function displayOf(entry: Entry): Display {
   const plain = `${entry.id} = ${entry.value.text}`;
   if (entry.kind === "calc") return formulaDisplay(plain, entry.lines, entry.description);
   const words = entry.kind === "assumption" ? entry.because : entry.description;
-  return lineDisplay(plain, `${entry.tex} = ${valueTex(entry.value)}`, words);
+  const shown = lineDisplay(plain, `${entry.tex} = ${valueTex(entry.value)}`, words);
+  return entry.kind === "result" && entry.band !== undefined ? withBand(shown, entry.band) : shown;
+}
+
+/** A value's display with its band beneath. */
+function withBand(shown: Display, band: ResultBand): Display {
+  const words = `${bandText(band)}; ${band.words}`;
+  return Object.freeze({
+    "text/html": `${shown["text/html"]}<div><small>${escaped(words)}</small></div>`,
+    "text/plain": `${shown["text/plain"]}\n${words}`,
+  });
 }
 
 function title(description: string): string {

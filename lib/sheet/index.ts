@@ -1,5 +1,6 @@
 // The ledger of one calculation: givens, assumptions, steps, checks; formulas; the record format; the runner's contract.
 
+export { bandCellTexts, bandText, isSettled, tableBandNote } from "./band-words.ts";
 export { canonicalDigest, canonicalJson, sha256 } from "./canonical.ts";
 export { changesBetween, isUnchanged, shareOf } from "./changes.ts";
 export { escaped, formulaDisplay, lineDisplay } from "./display.ts";
@@ -29,4 +30,14 @@ export { standingOn, usersOf } from "./standing.ts";
 export { readUse } from "./store.ts";
 export { checkedSymbol, symbolTex } from "./symbol.ts";
 export { numberTex, unitTex, valueTex } from "./tex.ts";
-export { allUses, type NamedValue, readerName, valuesOf } from "./values.ts";
+export {
+  allUses,
+  bandsOf,
+  bandUses,
+  bandValues,
+  type NamedBand,
+  type NamedValue,
+  readerName,
+  valuesOf,
+  valueUses,
+} from "./values.ts";

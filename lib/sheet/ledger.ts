@@ -11,7 +11,7 @@ import type {
 } from "../quantity/index.ts";
 import type { Draft } from "./draft.ts";
 import type { CellRef } from "./host.ts";
-import type { AssumptionEntry, CalculationRecord, Entry, Failure, Head } from "./record.ts";
+import type { AssumptionEntry, CalculationRecord, Entry, Failure, Head, ResultBand } from "./record.ts";
 
 /** The outcome of a check; `utilisation` is 1 at the limit and absent where the limit is not positive. */
 export interface CheckResult {
@@ -46,12 +46,13 @@ export interface Ledger {
   ): Quantity<DimensionAsked<U>>;
   /** Two sides compared: check("delta <= L/360", "deflection"). */
   check(comparison: string, description?: string): CheckResult;
-  /** A number taken from an analysis; it becomes a symbol, and a governing one stands on the cover. */
+  /** A number taken from an analysis; it becomes a symbol, and a governing one stands on the cover. A hand result brings its
+   *  band with it. */
   result<D extends Dimension>(
     symbol: string,
     value: Quantity<D>,
     description?: string,
-    options?: { readonly governing?: boolean },
+    options?: { readonly governing?: boolean; readonly band?: ResultBand },
   ): Quantity<D>;
   note(text: string): Entry;
   conclude(text: string): Entry;

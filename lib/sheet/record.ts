@@ -15,6 +15,33 @@ export interface ShownValue {
   readonly text: string;
 }
 
+/** How the true value lies about a hand value: the same result of many frames, the stiffnesses and bases that are not known tried
+ *  within their ranges, each frame solved exactly. */
+export interface ResultBand {
+  /** 90 % of the true values lie between these two. */
+  readonly low: ShownValue;
+  readonly high: ShownValue;
+  /** Of all frames tried. */
+  readonly least: ShownValue;
+  readonly greatest: ShownValue;
+  /** What `against` holds: true over hand, or true less hand where the hand value is near zero. */
+  readonly measure: "ratio" | "difference";
+  /** The same four in that measure, a pure number or SI. */
+  readonly against: {
+    readonly low: number;
+    readonly high: number;
+    readonly least: number;
+    readonly greatest: number;
+  };
+  /** The middle of the true values over the hand value, less 1, shown in percent; or less the hand value. */
+  readonly bias: ShownValue;
+  /** What was tried and what was not. */
+  readonly words: string;
+  /** What the band stands on: the entry that says what is not known, then what the frames tried were made of. The value beside it
+   *  does not stand on these. */
+  readonly uses: readonly string[];
+}
+
 export interface Head {
   readonly title: string;
   readonly job: string;
@@ -110,6 +137,8 @@ export interface ResultEntry extends EntryBase {
   readonly value: ShownValue;
   readonly description: string;
   readonly governing: boolean;
+  /** Where the value was worked out by hand. */
+  readonly band?: ResultBand;
 }
 
 /** One known term of an equation, SI. `from` names the earlier step the value is taken from, "id@version"; its sign is
@@ -155,7 +184,9 @@ export interface QueryEntry extends EntryBase {
   readonly text: string;
 }
 
-export type TableCell = string | { readonly value: ShownValue; readonly uses: readonly string[] };
+export type TableCell =
+  | string
+  | { readonly value: ShownValue; readonly uses: readonly string[]; readonly band?: ResultBand };
 
 export interface TableEntry extends EntryBase {
   readonly kind: "table";

@@ -37,6 +37,9 @@ export const changes: z.ZodType<Changes> = z
         })
         .readonly(),
     ),
+    bands: z.exactOptional(
+      list(z.strictObject({ ...named, before: text, after: text, governing: z.boolean() }).readonly()),
+    ),
     checks: list(z.strictObject({ ...named, before: text, after: text, turned: z.boolean() }).readonly()),
     raised: list(lineNamed),
     settled: list(lineNamed),

@@ -1,13 +1,28 @@
 // The schema of one entry of a record, by kind.
 
 import { z } from "zod";
-import type { Entry, ShownValue } from "./record.ts";
+import type { Entry, ResultBand, ShownValue } from "./record.ts";
 import { count, list, name, number, source, symbol, text, use } from "./schema-parts.ts";
 
 const shownForm = z
   .strictObject({ si: number, dimension: text, unit: z.string().max(40), text: z.string().max(200) })
   .readonly()
   .describe("a number in SI with the unit and text it is shown with");
+const four = { low: number, high: number, least: number, greatest: number };
+const band = z
+  .strictObject({
+    low: shownForm,
+    high: shownForm,
+    least: shownForm,
+    greatest: shownForm,
+    measure: z.enum(["ratio", "difference"]),
+    against: z.strictObject(four).readonly(),
+    bias: shownForm,
+    words: text,
+    uses: list(use),
+  })
+  .readonly()
+  .describe("how the true value lies about a hand value") satisfies z.ZodType<ResultBand>;
 const lines = z.strictObject({ symbols: text, numbers: text, result: text }).readonly();
 const inputs = z.record(z.string().max(100), number).readonly();
 const terms = list(
@@ -21,7 +36,10 @@ const base = {
   uses: list(use).describe("what the entry stands on"),
   outOfDate: z.boolean().describe("true when something it stands on has changed since"),
 };
-const cell = z.union([text, z.strictObject({ value: shownForm, uses: list(use) }).readonly()]);
+const cell = z.union([
+  text,
+  z.strictObject({ value: shownForm, uses: list(use), band: z.exactOptional(band) }).readonly(),
+]);
 
 const form = z.discriminatedUnion("kind", [
   z.strictObject({
@@ -75,6 +93,7 @@ const form = z.discriminatedUnion("kind", [
     value: shownForm,
     description: text,
     governing: z.boolean(),
+    band: z.exactOptional(band),
   }),
   z.strictObject({
     ...base,

@@ -3,6 +3,7 @@
 import { type Draft, frozen, substance, symbolOf } from "./draft.ts";
 import { type CellRef, type Host, host } from "./host.ts";
 import type { Entry } from "./record.ts";
+import { bandUses } from "./values.ts";
 
 interface Stored {
   readonly draft: Draft;
@@ -116,7 +117,8 @@ export class EntryStore {
     const stored = this.#stored.get(id);
     if (stored === undefined) throw new Error(`there is no entry "${id}"`);
     const { draft, version, cell } = stored;
-    return Object.freeze({ ...draft, version, cell: this.#number(cell), outOfDate: this.#outOfDate(id) });
+    const outOfDate = this.#outOfDate(id) || bandUses(draft).some((use) => this.#changed(use));
+    return Object.freeze({ ...draft, version, cell: this.#number(cell), outOfDate });
   }
 
   /** Whether storing this draft can change what is out of date among the entries stored before. */

@@ -1,6 +1,7 @@
 // Every number a record shows, one after another, under names that hold from one run to the next.
 
-import type { Entry, ShownValue, TableEntry } from "./record.ts";
+import type { Draft } from "./draft.ts";
+import type { Entry, ResultBand, ShownValue, TableEntry } from "./record.ts";
 
 /** One shown number: the entry it stands in, and a name that is unique in its record. */
 export interface NamedValue {
@@ -25,6 +26,37 @@ export function valuesOf(entry: Entry): readonly NamedValue[] {
   return "value" in entry && entry.value !== undefined ? [{ id, name: id, value: entry.value }] : [];
 }
 
+/** One band: the entry it stands in, and the name of the value it is of. */
+export interface NamedBand {
+  readonly id: string;
+  readonly name: string;
+  readonly band: ResultBand;
+}
+
+/** The bands an entry shows: its own value's, or those of the cells of a table. */
+export function bandsOf(entry: Entry): readonly NamedBand[] {
+  const { id } = entry;
+  if (entry.kind === "table")
+    return entry.rows.flatMap((row, i) =>
+      row.flatMap((cell, j) =>
+        typeof cell === "string" || cell.band === undefined
+          ? []
+          : { id, name: cellName(entry, i, j), band: cell.band },
+      ),
+    );
+  return entry.kind === "result" && entry.band !== undefined ? [{ id, name: id, band: entry.band }] : [];
+}
+
+/** The numbers of a band, by name. */
+export function bandValues({ name, id, band }: NamedBand): readonly NamedValue[] {
+  const { low, high, least, greatest, bias } = band;
+  return Object.entries({ low, high, least, greatest, bias }).map(([which, value]) => ({
+    id,
+    name: `${name}, ${which} of its band`,
+    value,
+  }));
+}
+
 /** What a reader knows a cell of a table by: the words its row begins with, its column, and the table's caption. */
 export function cellNames(entry: TableEntry): ReadonlyMap<string, string> {
   const short = entry.caption.replace(/[:(].*$/s, "").trim();
@@ -40,13 +72,28 @@ export function cellNames(entry: TableEntry): ReadonlyMap<string, string> {
   return new Map(names);
 }
 
-/** Every use an entry names, those in the cells of a table included, each once. */
+/** Every use an entry names, those in the cells of a table and those of bands included, each once. */
 export function allUses(entry: Entry): readonly string[] {
+  return [...new Set([...valueUses(entry), ...bandUses(entry)])];
+}
+
+/** What an entry's values stand on, those in the cells of a table included, each once. */
+export function valueUses(entry: Entry): readonly string[] {
   const cells =
     entry.kind === "table"
       ? entry.rows.flatMap((row) => row.flatMap((cell) => (typeof cell === "string" ? [] : cell.uses)))
       : [];
   return [...new Set([...entry.uses, ...cells])];
+}
+
+/** The entries an entry's bands stand on, each once. */
+export function bandUses(entry: Entry | Draft): readonly string[] {
+  if (entry.kind === "result") return entry.band?.uses ?? [];
+  if (entry.kind !== "table") return [];
+  const cells = entry.rows
+    .flat()
+    .flatMap((cell) => (typeof cell === "string" ? [] : (cell.band?.uses ?? [])));
+  return [...new Set(cells)];
 }
 
 /** What a reader knows an entry by: its symbol, or its words. */

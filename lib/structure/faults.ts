@@ -75,6 +75,11 @@ export type StructureFault =
       readonly name: string;
       readonly known: readonly string[];
     }
+  | { readonly kind: "ratio key"; readonly key: string }
+  | { readonly kind: "ratio"; readonly key: string; readonly value: string }
+  | { readonly kind: "ratio twice"; readonly key: string; readonly member: string }
+  | { readonly kind: "ratio circle"; readonly keys: readonly string[] }
+  | { readonly kind: "ratio of unlike"; readonly key: string; readonly members: readonly string[] }
   | { readonly kind: "not held"; readonly what: string; readonly joint: string; readonly axis: string }
   | { readonly kind: "level load"; readonly what: string; readonly member: string; readonly per: string }
   | { readonly kind: "not a model"; readonly where: string; readonly found: string; readonly wanted: string };
@@ -147,6 +152,16 @@ function wordsOf(fault: StructureFault): string {
       return `member "${fault.member}" has no ${fault.missing}; ${fault.why}`;
     case "no such member":
       return `${fault.what} "${fault.name}" is no member and no group of members; there are ${list(fault.known)}`;
+    case "ratio key":
+      return `stiffness ratio "${fault.key}" cannot be read; write "I of beams / I of columns", "I of BC / I of AB" or "I of columns"`;
+    case "ratio":
+      return `stiffness ratio "${fault.key}" is ${fault.value}; a number more than zero is wanted, such as 2.5`;
+    case "ratio twice":
+      return `stiffness ratio "${fault.key}" sets the I of member "${fault.member}" a second time; keep one ratio for it`;
+    case "ratio circle":
+      return `stiffness ratios ${fault.keys.map((key) => `"${key}"`).join(" and ")} are measured by each other; measure both by a third`;
+    case "ratio of unlike":
+      return `stiffness ratio "${fault.key}" is measured by members of unlike I (${list(fault.members)}); name one of them`;
     case "not held":
       return `${fault.what} moves joint ${fault.joint} in ${fault.axis}, where no support holds it; support it there, or drop the movement`;
     case "level load":

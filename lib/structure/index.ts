@@ -34,6 +34,12 @@ export { modelSchema, type Schema } from "./model-schema.ts";
 export { type PanelGirderOptions, panelGirder } from "./panel-girder.ts";
 export { type Along, metresAlong, readPlace, snapToEnds } from "./place.ts";
 export { type Base, type PortalOptions, portal } from "./portal.ts";
+export {
+  membersCalled,
+  ratioSources,
+  type StiffnessRatios,
+  withRelativeStiffness,
+} from "./relative-stiffness.ts";
 export { withNames } from "./rename.ts";
 export { type SectionChoice, type Sections, withSections } from "./section.ts";
 export { type Cut, type Node, releasesOf, type Segment, type Skeleton, skeleton } from "./skeleton.ts";

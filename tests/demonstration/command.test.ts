@@ -31,9 +31,13 @@ describe("hingebook run boat-shed-frame.ipynb", () => {
     expect(plain.err).toBe("");
     expect(plain.code).toBe(0);
     expect(plain.files).toEqual(["boat-shed-frame.html"]);
-    expect(plain.out.match(/^ {2}cell +\d+ /gm)?.length).toBe(11);
+    expect(plain.out.match(/^ {2}cell +\d+ /gm)?.length).toBe(13);
     expect(plain.out).toContain("Boat shed, main frame on line 3: preliminary");
     expect(plain.out).toMatch(/M_B = −88\.1 kN·m/);
+    expect(plain.out).toMatch(/true value 90 % between −\d.* of this\), least −.*, greatest −.* kN·m, bias/);
+    expect(plain.out).toMatch(
+      /bands: of the stiffnesses tried; loads, geometry, cracking and second order not varied/,
+    );
     expect(plain.out).toMatch(/package: .*boat-shed-frame\.html/);
   });
 
@@ -60,6 +64,27 @@ describe("hingebook run boat-shed-frame.ipynb", () => {
     expect(cells.filter(({ uses }) => uses.length === 0)).toEqual([]);
     const unknown = [...numbers, ...cells].flatMap(({ uses }) => uses.filter((use) => !known.has(use)));
     expect(unknown).toEqual([]);
+  });
+
+  test("every hand result carries its band, in results and tables, and nothing else does", () => {
+    const results = record.entries.flatMap((entry) => (entry.kind === "result" ? [entry] : []));
+    expect(results.map(({ symbol, band }) => [symbol, band?.uses[0]])).toEqual(
+      ["M_B", "M_m", "N_A", "H_A"].map((symbol) => [symbol, "unknowns of frame ABCD@1"]),
+    );
+    const cells = (id: string) => record.entries.filter((entry) => entry.id === id).flatMap(cellsOf);
+    expect(cells("internal forces G + S").length).toBe(21);
+    expect(cells("internal forces G + S").every(({ band }) => band !== undefined)).toBe(true);
+    expect(cells("reactions G + S").map(({ band }) => band !== undefined)).toEqual([
+      true,
+      true,
+      true,
+      true,
+      false,
+      false,
+    ]);
+    expect(cells("load case G").some(({ band }) => band !== undefined)).toBe(false);
+    const spread = record.entries.find(({ id }) => id === "spread G + S");
+    expect(spread?.kind === "table" ? spread.rows.length : 0).toBe(16);
   });
 
   test("is the same to the byte on every run", () => {

@@ -95,7 +95,7 @@ const gravity = (sheet: Sheet, { length, spread }: Of): void => {
       [G],
       [
         hinge("BC", { from: "B", at: "0.12 L", because: "stiff beam" }),
-        hinge("BC", { from: "C", at: "0.12 L", because: "symmetry" }),
+        hinge("BC", { from: "C", at: "0.12 L", symmetry: true, because: "symmetry" }),
       ],
     ),
   );
@@ -199,7 +199,7 @@ describe("what a step stands on", () => {
         sheet.hinges(
           frame,
           [G],
-          (["B", "C"] as const).map((from) => hinge("BC", { from, at, because: "symmetry" })),
+          (["B", "C"] as const).map((from) => hinge("BC", { from, at, symmetry: true, because: "symmetry" })),
         );
       });
       return entries.get("hinge h1 (G)")?.uses ?? ["none"];

@@ -43,7 +43,7 @@ function twoHinges(sheet: Sheet, frame: Structure, at: `${number} L`, key = "G")
     [G],
     [
       hinge("BC", { from: "B", at, because: "beam about three times the columns" }),
-      hinge("BC", { from: "C", at, because: "symmetry of frame and load" }),
+      hinge("BC", { from: "C", at, symmetry: true, because: "symmetry of frame and load" }),
     ],
   );
 }
@@ -119,7 +119,7 @@ describe("sheet.hinges(pinned portal, gravity, two hinges in the beam)", () => {
       const before = sheet.entries();
       const same = [
         hinge("BC", { from: "B", at: "0.1 L", because: "as for gravity" }),
-        hinge("BC", { from: "C", at: "0.1 L", because: "as for gravity" }),
+        hinge("BC", { from: "C", at: "0.1 L", symmetry: true, because: "as for gravity" }),
       ];
       expect(() => sheet.hinges(frame, [X], same)).toThrow(
         /X with hinges h1 and h2: nothing resists sway: B and C move sideways together.* Give X a hinge set of its own/,
@@ -219,7 +219,7 @@ describe("sheet.freeBodies(pinned portal with two hinges)", () => {
     const S = sheet.loadCase("S", "snow", uniform("BC", "5 kN/m"));
     const pair = (at: `${number} L`) => [
       hinge("BC", { from: "B", at, because: "stiff beam" }),
-      hinge("BC", { from: "C", at, because: "symmetry" }),
+      hinge("BC", { from: "C", at, symmetry: true, because: "symmetry" }),
     ];
     const apart = sheet.freeBodies(
       sheet.hinges(frame, [G], pair("0.1 L")),

@@ -29,7 +29,7 @@ describe("figureBundle", () => {
 describe("drawFigureSpec", () => {
   it("drawFigureSpec(unknown kind) names the kinds there are", async () => {
     await expect(drawFigureSpec({ kind: "map" }, "f")).rejects.toThrow(
-      'figure kind "map" is unknown; kinds are structure, mechanism, free body, diagrams, self-stress, shape, deflection, line chart',
+      'figure kind "map" is unknown; kinds are structure, mechanism, free body, diagrams, self-stress, shape, deflection, ranges, line chart',
     );
   });
 });

@@ -245,6 +245,17 @@ const entries: readonly Entry[] = [
     value: kNm(176400, "176 kN·m"),
     description: "greatest moment, beam at midspan",
     governing: true,
+    band: {
+      low: kNm(149940, "150 kN·m"),
+      high: kNm(201096, "201 kN·m"),
+      least: kNm(141120, "141 kN·m"),
+      greatest: kNm(208152, "208 kN·m"),
+      measure: "ratio",
+      against: { low: 0.85, high: 1.14, least: 0.8, greatest: 1.18 },
+      bias: shown(-0.02, "pure number", "", "−2 %"),
+      words: "of the stiffnesses tried; loads, geometry, cracking and second order not varied",
+      uses: ["bases@1"],
+    },
   },
   {
     ...base("reactions", 8, []),
@@ -254,7 +265,21 @@ const entries: readonly Entry[] = [
     rows: [
       [
         "A",
-        { value: kN(24945.45, "24.9 kN"), uses: ["A_x@1"] },
+        {
+          value: kN(24945.45, "24.9 kN"),
+          uses: ["A_x@1"],
+          band: {
+            low: kN(20000, "20.0 kN"),
+            high: kN(31000, "31.0 kN"),
+            least: kN(19000, "19.0 kN"),
+            greatest: kN(32000, "32.0 kN"),
+            measure: "difference",
+            against: { low: -4945.45, high: 6054.55, least: -5945.45, greatest: 7054.55 },
+            bias: kN(500, "+0.50 kN"),
+            words: "of the stiffnesses tried; loads, geometry, cracking and second order not varied",
+            uses: ["bases@1"],
+          },
+        },
         { value: kN(89600, "89.6 kN"), uses: ["A_y@1"] },
         "inwards",
       ],

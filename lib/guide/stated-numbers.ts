@@ -1,0 +1,39 @@
+// Ranges stated in numbers the sheet knows, made into bare numbers and what they came from.
+
+import type { StatedText } from "../accuracy/index.ts";
+import { isQuantity } from "../quantity/index.ts";
+import { mergeSources } from "../structure/index.ts";
+import type { Sources } from "../structure/types.ts";
+import type { PureNumber, StatedRange, StatedRanges } from "./types.ts";
+
+/** A statement in words and bare numbers, and what its numbers came from. */
+export function plainStatement(stated: StatedRanges): { readonly plain: StatedText; readonly from: Sources } {
+  if (typeof stated !== "object" || stated === null)
+    throw new Error(
+      `unknowns: ${String(stated)} states nothing; write for example { "I of beam / I of columns": "1 to 4" }`,
+    );
+  const from: Sources[] = [];
+  const bare = (key: string, number: PureNumber): number => {
+    if (isQuantity(number)) from.push(number.from);
+    return plainNumber(key, number);
+  };
+  const plain = Object.entries(stated).map(([key, range]): [string, StatedText[string]] => {
+    if (typeof range === "string" || typeof range === "number") return [key, range];
+    if (isPair(range)) return [key, { least: bare(key, range[0]), most: bare(key, range[1]) }];
+    if (isQuantity(range)) return [key, bare(key, range)];
+    const [about, factor] = [bare(key, range.about), bare(key, range.within)];
+    return [key, { least: about / factor, most: about * factor }];
+  });
+  return { plain: Object.fromEntries(plain), from: mergeSources(...from) };
+}
+
+const isPair = (range: StatedRange): range is readonly [PureNumber, PureNumber] => Array.isArray(range);
+
+function plainNumber(key: string, number: PureNumber): number {
+  const value = isQuantity(number) ? (number.dimension === "pure number" ? number.si : Number.NaN) : number;
+  if (typeof value !== "number" || !Number.isFinite(value) || value < 0)
+    throw new Error(
+      `unknowns: "${key}" is ${String(number)}; a pure number, two of them or a range such as "1 to 4" is wanted`,
+    );
+  return value;
+}
