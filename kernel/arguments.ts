@@ -1,6 +1,7 @@
 // The command line's grammar: words in, what is asked for out.
 
 import { type AskedKernel, KERNEL_HELP, readKernelArguments } from "./jupyter/arguments.ts";
+import { type AskedNew, NEW_HELP, readNewArguments } from "./new/arguments.ts";
 import { type AskedRecord, RECORD_COMMANDS, RECORD_HELP, readRecordArguments } from "./record/arguments.ts";
 import { flagValue, nearest, splitFlag, UsageError } from "./usage.ts";
 
@@ -18,12 +19,14 @@ export type Asked =
       readonly sensitivity: boolean;
     }
   | AskedKernel
+  | AskedNew
   | AskedRecord;
 
 export { UsageError };
 
 export const HELP: string = `hingebook: approximate analysis of beams and frames as a traceable calculation
 
+${NEW_HELP}
   hingebook run FILE… [--out DIR] [--set SYMBOL="MEASURE"]…
       run notebooks from start to end and leave a calculation package, NAME.html, for each; a folder stands for
       the notebooks in it and leaves index.html, the register of the job
@@ -40,7 +43,7 @@ ${KERNEL_HELP}
 A cell that fails stops the run: what was calculated before is left as NAME.INCOMPLETE.html, the exit code is 1.
 `;
 
-const COMMANDS = ["run", ...RECORD_COMMANDS, "kernel"];
+const COMMANDS = ["new", "run", ...RECORD_COMMANDS, "kernel"];
 const RUN_FLAGS = ["--out", "--set", "--watch", "--sensitivity", "--help"];
 
 function addOverride(overrides: Map<string, string>, text: string): void {
@@ -93,6 +96,7 @@ export function readArguments(words: readonly string[]): Asked {
   if (command === undefined) throw new UsageError("say what to do, for example: hingebook run roof.ipynb");
   if (command === "--help" || command === "-h" || command === "help") return { command: "help" };
   if (command === "--version" || command === "-v") return { command: "version" };
+  if (command === "new") return readNewArguments(rest);
   if (command === "run") return readRun(rest);
   if (RECORD_COMMANDS.includes(command)) return readRecordArguments(command, rest);
   if (command === "kernel") return readKernelArguments(rest) ?? { command: "help" };

@@ -31,6 +31,8 @@ export interface Library {
   forgetLedger(): void;
   /** A record as a package, sealed. */
   renderPackage(record: CalculationRecord): Promise<string>;
+  /** What a template left to be written, in words; empty where nothing is left. */
+  promptsLeft(record: CalculationRecord): string;
 }
 
 /** Load the library. It is the same one for every caller and for the cells. */
@@ -51,6 +53,7 @@ export async function loadLibrary(): Promise<Library> {
     openLedger,
     forgetLedger,
     renderPackage: async (record: CalculationRecord) => report.sealed(await report.renderPackage(record)),
+    promptsLeft: report.promptsLeftWords,
   });
 }
 

@@ -41,6 +41,10 @@ export async function main(words: readonly string[], terminal: Terminal): Promis
   try {
     const asked = readArguments(words);
     if (asked.command === "run") return await run(asked, terminal);
+    if (asked.command === "new" || asked.command === "templates") {
+      const { newCommand } = await import("./new/index.ts");
+      return await newCommand(asked, terminal);
+    }
     if (asked.command === "issue" || asked.command === "changes" || asked.command === "verify") {
       const { recordCommand } = await import("./record/index.ts");
       return await recordCommand(asked, { library: loaded, versions: versions() }, terminal);

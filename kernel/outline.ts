@@ -14,7 +14,7 @@ function shortened(text: string): string {
 export function headingOf(markdown: string): string | undefined {
   const headings = [...markdown.matchAll(/^#{1,6}\s+(.+?)\s*#*$/gm)];
   const text = headings.at(-1)?.[1];
-  return text === undefined ? undefined : shortened(text.replace(/[*_`]/g, ""));
+  return text === undefined ? undefined : shortened(text.replace(/\\([^A-Za-z0-9\s])|[*_`]/g, "$1"));
 }
 
 /** A call as it is named in a line: `sheet.calc "M = q*L^2/8"`, with its first text if that comes first. */

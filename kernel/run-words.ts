@@ -1,5 +1,6 @@
 // What the headless runner says about a notebook.
 import { relative } from "node:path";
+import { bandText } from "../lib/sheet/band-words.ts";
 import type { CalculationRecord, Entry } from "../lib/sheet/index.ts";
 import type { CellFailure } from "./failure.ts";
 import type { Notebook } from "./notebook.ts";
@@ -38,18 +39,31 @@ export function unusedText(fileName: string, unused: readonly string[], entries:
   return `${fileName}: --set ${what} was not used; the givens are ${givens.join(", ") || "none"}. No package was written.`;
 }
 
-/** How a calculation came out: status, governing results, checks, and where its package lies. */
-export function summaryText({ head, entries }: CalculationRecord, file: string): string {
+/** What the bands of governing results stand for. */
+function bandNotes(entries: readonly Entry[]): readonly string[] {
+  const words = entries.flatMap((entry) =>
+    entry.kind === "result" && entry.governing && entry.band !== undefined ? [entry.band.words] : [],
+  );
+  return [...new Set(words)].map((text) => `    bands: ${text}`);
+}
+
+/** How a calculation came out: status, governing results, checks, what a template left to be written (in words, empty
+ *  for nothing), and where its package lies. */
+export function summaryText({ head, entries }: CalculationRecord, prompts: string, file: string): string {
   const checks = entries.filter((entry) => entry.kind === "check");
   const failed = checks.filter((entry) => !entry.passed);
   const lines = [`  ${head.title}: ${head.status}`];
   for (const entry of entries)
-    if (entry.kind === "result" && entry.governing)
+    if (entry.kind === "result" && entry.governing) {
       lines.push(`    ${entry.symbol} = ${entry.value.text}  ${entry.description}`);
+      if (entry.band !== undefined) lines.push(`      ${bandText(entry.band)}`);
+    }
+  lines.push(...bandNotes(entries));
   if (checks.length > 0)
     lines.push(`    checks: ${checks.length - failed.length} of ${checks.length} satisfied`);
   for (const entry of entries) if (entry.kind === "query") lines.push(`    OPEN QUERY: ${entry.text}`);
   for (const { formula, description } of failed) lines.push(`    NOT SATISFIED: ${formula}  ${description}`);
+  if (prompts !== "") lines.push(`    NOT FILLED IN: ${prompts}`);
   lines.push(`  package: ${shownPath(file)}`);
   return lines.map(line).join("");
 }

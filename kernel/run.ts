@@ -215,7 +215,7 @@ class NotebookRun {
     const full = (await this.#options.enrich?.(record, this.#notebook.path)) ?? record;
     await this.#write(library, good, full);
     await rm(incomplete, { force: true });
-    terminal.out(summaryText(full, good));
+    terminal.out(summaryText(full, library.promptsLeft(full), good));
     return "complete";
   }
 }

@@ -1,5 +1,5 @@
 // The grammar of the commands that deal with records: issue, changes, verify.
-import { flagValue, nearest, splitFlag, UsageError } from "../usage.ts";
+import { type Flags, readWords, UsageError } from "../usage.ts";
 
 export interface AskedIssue {
   readonly command: "issue";
@@ -51,40 +51,6 @@ export const RECORD_HELP = `  hingebook issue NOTEBOOK --rev P2 --why "REASON" [
 `;
 
 export const RECORD_COMMANDS: readonly string[] = ["issue", "changes", "verify"];
-
-/** What a flag takes, and what to say when it is missing; a flag without words takes nothing. */
-type Flags = Readonly<Record<string, string | undefined>>;
-
-interface Read {
-  readonly given: ReadonlyMap<string, string>;
-  readonly others: readonly string[];
-  readonly help: boolean;
-}
-
-function readWords(command: string, words: readonly string[], flags: Flags): Read {
-  const rest = [...words];
-  const given = new Map<string, string>();
-  const others: string[] = [];
-  for (let word = rest.shift(); word !== undefined; word = rest.shift()) {
-    if (word === "--") {
-      others.push(...rest);
-      break;
-    }
-    if (!word.startsWith("-")) {
-      others.push(word);
-      continue;
-    }
-    const { flag, inline } = splitFlag(word);
-    if (flag === "--help" || flag === "-h") return { given, others, help: true };
-    if (!Object.hasOwn(flags, flag))
-      throw new UsageError(`"${flag}" is not an option of ${command}; ${nearest(flag, Object.keys(flags))}`);
-    if (given.has(flag)) throw new UsageError(`${flag} is given twice`);
-    const what = flags[flag];
-    if (what === undefined && inline !== undefined) throw new UsageError(`${flag} takes no value`);
-    given.set(flag, what === undefined ? "" : flagValue(flag, inline, rest, what));
-  }
-  return { given, others, help: false };
-}
 
 const ISSUE: Flags = {
   "--rev": "a revision, for example --rev P2",

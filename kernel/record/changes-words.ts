@@ -83,6 +83,16 @@ export function changesText(before: CalculationRecord, after: CalculationRecord,
       ]),
     ),
     section(
+      "bands changed",
+      (changes.bands ?? []).map(({ name: line, before: was, after: is, governing }) => [
+        governing ? "governs" : "",
+        cut(line, 40),
+        cut(was, 120),
+        "->",
+        cut(is, 120),
+      ]),
+    ),
+    section(
       "words changed",
       changes.words.map((one) => [one.kind, cut(one.before), "->", cut(one.after)]),
     ),

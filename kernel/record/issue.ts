@@ -57,6 +57,11 @@ export async function issue(
     );
     return 1;
   }
+  const prompts = (await runner.library()).promptsLeft(run);
+  if (prompts !== "") {
+    terminal.err(line(`NOT ISSUED: ${place.notebook.fileName}: ${prompts}; write what stands in ‹…› first`));
+    return 1;
+  }
   const moves = asked.sensitivity ? await movements(asked.file, run, runner, terminal.out) : undefined;
   const record = issuedRecord(run, asked, place, today, earlier, moves);
   await freeze(record, place, asked, runner);

@@ -1,8 +1,11 @@
 // Whether a calculation run again gives what its record says: every value, every check, then everything else.
 import {
+  bandsOf,
+  bandValues,
   type CalculationRecord,
   canonicalJson,
   type Entry,
+  type NamedValue,
   readerName,
   valuesOf,
 } from "../../lib/sheet/index.ts";
@@ -36,17 +39,22 @@ export function reproduction(said: CalculationRecord, again: CalculationRecord):
   };
 }
 
+const shownIn = (entry: Entry): readonly NamedValue[] => [
+  ...valuesOf(entry),
+  ...bandsOf(entry).flatMap(bandValues),
+];
+
 const place = (entry: Entry): string => {
   const name = readerName(entry).replace(/\s+/g, " ");
   return `${entry.kind} "${name.length > 80 ? `${name.slice(0, 79)}…` : name}"`;
 };
 
 function compareEntry(said: Entry, again: Entry | undefined): Reproduction {
-  const own = valuesOf(said);
+  const own = shownIn(said);
   const count = own.length + (said.kind === "check" ? 1 : 0);
   if (again === undefined || again.kind !== said.kind)
     return { count, values: own.map(({ name }) => `${name}: not given by the run`), parts: missing(said) };
-  const found = new Map(valuesOf(again).map(({ name, value }) => [name, value]));
+  const found = new Map(shownIn(again).map(({ name, value }) => [name, value]));
   const values = own.flatMap(({ name, value }) => {
     const other = found.get(name);
     if (other === undefined) return [`${name}: not given by the run`];
