@@ -25,7 +25,7 @@ const code = [
   'const frame = portal({ span: L, height: h, bases: "pinned" });',
   "sheet.determinacy(frame)",
   'const G = sheet.loadCase("G", "permanent", uniform("BC", g)); const S = sheet.loadCase("S", "snow", uniform("BC", s));',
-  'const gravity = sheet.hinges(frame, [G, S], [hinge("BC", { from: "B", at: "0.115 L", because: "stiff beam" }), hinge("BC", { from: "C", at: "0.115 L", because: "symmetry" })]);\ngravity',
+  'const gravity = sheet.hinges(frame, [G, S], [hinge("BC", { from: "B", at: "0.115 L", because: "stiff beam" }), hinge("BC", { from: "C", at: "0.115 L", symmetry: true, because: "symmetry" })]);\ngravity',
   "const hand = sheet.freeBodies(gravity);",
   "sheet.reactions(hand)",
   'sheet.diagrams(hand, { moments: "tension side" })',

@@ -3,7 +3,7 @@
 import type { Library } from "../../kernel/library.ts";
 import type { Measure } from "../../lib/quantity/index.ts";
 import { isNamedDimension, someUnits } from "../../lib/quantity/index.ts";
-import { renderPackage } from "../../lib/report/index.ts";
+import { promptsLeftWords, renderPackage } from "../../lib/report/index.ts";
 import { attachHost, currentLedger, forgetLedger, type Ledger, openLedger } from "../../lib/sheet/index.ts";
 
 export const openSheet: typeof openLedger = openLedger;
@@ -32,5 +32,6 @@ export async function fixtureLibrary(): Promise<Library> {
     openLedger,
     forgetLedger,
     renderPackage,
+    promptsLeft: promptsLeftWords,
   };
 }

@@ -24,6 +24,10 @@ test("outline gives the heading above, else the first comment, else the calls", 
   ]);
 });
 
+test("headingOf an escaped mark is the mark itself", () => {
+  expect(headingOf("# Hall \\*7\\* of *the* \\_job\\_")).toBe("Hall *7* of the _job_");
+});
+
 test("headingOf a text without heading is nothing", () => {
   expect(headingOf("only words")).toBeUndefined();
 });

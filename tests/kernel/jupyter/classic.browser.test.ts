@@ -51,8 +51,8 @@ describe.skipIf(!(hasJupyter && hasBrowser))("hingebook in the classic Notebook"
     server = spawn(python, ["-m", "notebook", ...words, ...open], { env: jupyter.env, stdio: "ignore" });
     browser = await openBrowser();
     page = await browser.newPage({ viewport: { width: 1200, height: 1000 } });
-    page.setDefaultTimeout(15_000);
-    for (let tries = 0; tries < 100; tries++) {
+    page.setDefaultTimeout(60_000);
+    for (let tries = 0; tries < 400; tries++) {
       const there = await fetch(`${address}/api`).then(
         (answer) => answer.ok,
         () => false,
@@ -77,10 +77,11 @@ describe.skipIf(!(hasJupyter && hasBrowser))("hingebook in the classic Notebook"
       'window.Jupyter?.notebook?._fully_loaded && Jupyter.notebook.kernel?.name === "hingebook" && Jupyter.notebook.kernel.is_connected() && Jupyter.notebook.kernel.info_reply?.status === "ok"',
     );
   };
+  // A cell's prompt is set by the reply, which may overtake the cell's outputs: those are there once the kernel is idle.
   const settled = (): Promise<unknown> =>
-    page.waitForFunction(
-      'Jupyter.notebook.get_cells().every((c) => c.cell_type !== "code" || c.input_prompt_number !== "*")',
-    );
+    page.waitForFunction(`Jupyter.notebook.get_cells().every((c) =>
+      c.cell_type !== "code" ||
+      (c.input_prompt_number !== "*" && Jupyter.notebook.kernel._msg_callbacks[c.last_msg_id]?.iopub_done !== false))`);
   const outputs = (cell: number): Promise<Shown[]> =>
     page.evaluate(`Jupyter.notebook.get_cell(${cell}).output_area.outputs`);
   const write = (cell: number, code: string): Promise<unknown> =>
@@ -130,14 +131,15 @@ describe.skipIf(!(hasJupyter && hasBrowser))("hingebook in the classic Notebook"
   });
 
   test("an endless loop is interrupted by the button, and the names keep their values", async () => {
-    await write(3, "let turns = 0;\nwhile (true) turns++;");
+    await write(3, "let turns = 0;\nconsole.log('round and round');\nwhile (true) turns++;");
     await page.evaluate("Jupyter.notebook.execute_cells([3])");
-    await new Promise((done) => setTimeout(done, 500));
+    await page.waitForFunction("Jupyter.notebook.get_cell(3).output_area.outputs.length > 0");
     const begun = performance.now();
     await page.click('button[title="interrupt the kernel"]');
     await settled();
-    expect(performance.now() - begun).toBeLessThan(1500); // the browser's and the server's part of it included
-    expect((await outputs(3))[0]).toMatchObject({ output_type: "error", ename: "Interrupted" });
+    // The browser's and the server's part of it included; the kernel's own is held by protocol_suite.py.
+    expect(performance.now() - begun).toBeLessThan(5000);
+    expect((await outputs(3)).at(-1)).toMatchObject({ output_type: "error", ename: "Interrupted" });
     const [kept] = await run(4, "[w, turns > 0]");
     expect(kept?.data?.["text/plain"]).toBe("[ 5, true ]");
     await picture("interrupted");

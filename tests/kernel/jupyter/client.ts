@@ -5,6 +5,7 @@ import { mkdtempSync, rmSync, writeFileSync } from "node:fs";
 import { createServer } from "node:net";
 import { tmpdir } from "node:os";
 import { join } from "node:path";
+import { setTimeout as sleep } from "node:timers/promises";
 import { Dealer, Subscriber } from "zeromq";
 import { CHANNELS } from "../../../kernel/jupyter/connection.ts";
 import { kernelCommandLine } from "../../../kernel/jupyter/installation.ts";
@@ -30,6 +31,9 @@ async function freePorts(count: number): Promise<number[]> {
   );
 }
 
+/** Between two questions to a kernel that has not been heard yet. */
+const ASK_AGAIN_ms = 150;
+
 export interface Ran {
   readonly reply: Json;
   /** Messages about the request, in order, without its states. */
@@ -40,11 +44,14 @@ export class Client {
   readonly process: ChildProcess;
   readonly key: string;
   readonly ports: Readonly<Record<string, number>>;
-  readonly shell: Dealer = new Dealer({ linger: 0 });
+  readonly #shell = new Dealer({ linger: 0 });
   readonly #iopub = new Subscriber({ linger: 0 });
+  /** The last request given to the shell socket, which takes one at a time. */
+  #sent: Promise<void> = Promise.resolve();
   readonly #folder: string;
   readonly #writer: Writer;
   readonly #waiting = new Map<string, { outputs: Message[]; reply?: Json; done: (ran: Ran) => void }>();
+  readonly #gone: Promise<void>;
 
   private constructor(
     process: ChildProcess,
@@ -53,6 +60,7 @@ export class Client {
     folder: string,
   ) {
     this.process = process;
+    this.#gone = new Promise((settle) => process.once("exit", () => settle()));
     this.key = key;
     this.ports = ports;
     this.#folder = folder;
@@ -61,6 +69,16 @@ export class Client {
 
   /** Start a kernel in a folder and wait until it answers. */
   static async start(cwd: string): Promise<Client> {
+    for (let tries = 1; ; tries++) {
+      const client = await Client.#started(cwd);
+      if (await client.#isHeard()) return client;
+      await client.close();
+      // Another process may have taken a port between its being found free and the kernel's binding it.
+      if (tries === 3) throw new Error(`the kernel ended ${tries} times before it answered`);
+    }
+  }
+
+  static async #started(cwd: string): Promise<Client> {
     const folder = mkdtempSync(join(tmpdir(), "hingebook-client-"));
     const numbers = await freePorts(CHANNELS.length);
     const ports = Object.fromEntries(CHANNELS.map((channel, i) => [channel, numbers[i] ?? 0]));
@@ -77,18 +95,22 @@ export class Client {
     const client = new Client(kernel, key, ports, folder);
     client.#iopub.subscribe();
     client.#iopub.connect(`tcp://127.0.0.1:${ports.iopub}`);
-    client.shell.connect(`tcp://127.0.0.1:${ports.shell}`);
-    void client.#listen(client.shell, "reply");
+    client.#shell.connect(`tcp://127.0.0.1:${ports.shell}`);
+    void client.#listen(client.#shell, "reply");
     void client.#listen(client.#iopub, "output");
-    for (let heard = false; !heard; ) heard = await client.#hears();
     return client;
   }
 
-  /** Whether the kernel's outputs reach this client yet. */
-  async #hears(): Promise<boolean> {
-    const asked = this.request("kernel_info_request", {}).then(() => true);
-    const late = new Promise<boolean>((settle) => setTimeout(() => settle(false), 150));
-    return Promise.race([asked, late]);
+  /** Ask until an answer comes, however long the kernel takes to start: outputs sent before it knew of this client are
+   *  lost, so one question may not be enough. False when the kernel has ended. */
+  async #isHeard(): Promise<boolean> {
+    const ended = this.#gone.then(() => false);
+    for (let heard: boolean | undefined; ; ) {
+      const asked = this.request("kernel_info_request", {}).then(() => true);
+      asked.catch(() => undefined); // an unanswered question is given up with the socket
+      heard = await Promise.race([asked, ended, this.#sent.then(() => sleep(ASK_AGAIN_ms, undefined))]);
+      if (heard !== undefined) return heard;
+    }
   }
 
   async #listen(socket: Dealer | Subscriber, kind: "reply" | "output"): Promise<void> {
@@ -117,9 +139,9 @@ export class Client {
   request(type: string, content: Json, metadata: Json = {}): Promise<Ran> {
     const frames = this.#writer.frames({ identities: [], type, parent: {}, content, metadata });
     const { msg_id } = JSON.parse(String(frames[2])) as { msg_id: string };
-    return new Promise((done) => {
+    return new Promise((done, fail) => {
       this.#waiting.set(msg_id, { outputs: [], done });
-      void this.shell.send(frames);
+      this.#sent = this.#sent.then(() => this.#shell.send(frames)).catch(fail);
     });
   }
 
@@ -137,16 +159,19 @@ export class Client {
 
   /** Ask the kernel to end; settles when its process is gone. */
   async close(): Promise<void> {
-    const gone = new Promise((settle) => this.process.once("exit", settle));
     const control = new Dealer({ linger: 500 });
     control.connect(`tcp://127.0.0.1:${this.ports.control}`);
-    const content = { restart: false };
-    await control.send(
-      this.#writer.frames({ identities: [], type: "shutdown_request", parent: {}, content }),
-    );
-    if (this.process.exitCode === null) await gone;
+    const frames = this.#writer.frames({
+      identities: [],
+      type: "shutdown_request",
+      parent: {},
+      content: { restart: false },
+    });
+    const asked = control.send(frames).catch(() => undefined); // of no use where the kernel has ended by itself
+    await this.#gone;
     control.close();
-    this.shell.close();
+    await asked;
+    this.#shell.close();
     this.#iopub.close();
     rmSync(this.#folder, { recursive: true, force: true });
   }

@@ -140,11 +140,12 @@ describe("a kernel under messages no front end sends", () => {
 
   test("frames larger than any notebook's end the connection they come over, and nothing else", async () => {
     const socket = new Dealer({ linger: 0 });
+    const cutOff = new Promise((settle) => socket.events.on("disconnect", settle));
     socket.connect(`tcp://127.0.0.1:${client.ports.shell}`);
     const huge = new Uint8Array(70 * 1024 * 1024);
     randomFillSync(huge.subarray(0, 1024));
     await socket.send([DELIMITER, huge]);
-    await new Promise((done) => setTimeout(done, 300));
+    await cutOff;
     socket.close();
     await alive();
   });

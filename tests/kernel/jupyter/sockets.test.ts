@@ -1,5 +1,5 @@
 // Contract: what kernel/jupyter/sockets.ts leans on in zeromq.
-
+import { setTimeout as sleep } from "node:timers/promises";
 import { afterEach, describe, expect, test } from "vitest";
 import { Dealer, Subscriber } from "zeromq";
 import type { Channel, Connection } from "../../../kernel/jupyter/connection.ts";
@@ -46,10 +46,18 @@ describe("openPort(connection, channel)", () => {
     closing.push(listener);
     listener.subscribe();
     listener.connect(address);
-    await new Promise((done) => setTimeout(done, 200));
+    let joined = false;
+    const heard = listener.receive().then(() => {
+      joined = true;
+    });
+    while (!joined) {
+      port.send(["joining"]);
+      await Promise.race([heard, sleep(20)]);
+    }
     for (let i = 0; i < 5000; i++) port.send(["topic", String(i)]);
     let next = 0;
-    for await (const [, number] of listener) {
+    for await (const [topic, number] of listener) {
+      if (String(topic) === "joining") continue;
       expect(String(number)).toBe(String(next));
       if (++next === 5000) break;
     }
