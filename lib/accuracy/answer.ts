@@ -68,7 +68,7 @@ export function answered(
       const alone: Group = { combination, readings: reading === undefined ? [] : [reading], places: [0] };
       bands[k] = bandOf(
         hand,
-        Float64Array.from(draws.rowOf, (row) => rows[row] ?? Number.NaN),
+        picked(rows, draws.rowOf),
         extremesOf(solved, alone, rows, seen),
         nominal[k] ?? Number.NaN,
         scales[scaleOf(hand.wanted)],
@@ -79,6 +79,13 @@ export function answered(
     bands: Object.freeze(bands),
     corners: draws.allCorners ? draws.corners : new Set([...seen, ...draws.drawn]).size,
   };
+}
+
+/** The values of a list of rows. A plain loop: this runs for every result of every sample. */
+function picked(rows: Float64Array, rowOf: ArrayLike<number>): Float64Array {
+  const found = new Float64Array(rowOf.length);
+  for (let i = 0; i < found.length; i++) found[i] = rows[rowOf[i] as number] as number; // rowOf holds rows
+  return found;
 }
 
 /** Least and greatest of a result over all frames solved, and over the corners it is followed to where not all are among them. */
