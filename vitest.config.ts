@@ -14,14 +14,20 @@ const LONG: readonly string[] = [
   "kernel/jupyter/fuzz",
   "report/package.browser",
   "exact/equilibrium",
-  "record/verify",
   "record/issue",
+  "templates/package.browser",
+  "demonstration/watch",
+  "statics/invariants",
+  "record/verify",
   "kernel/jupyter/classic.browser",
   "kernel/semantics",
   "drawing/draw.browser",
   "exact/beams.python",
   "kernel/run",
   "record/changes",
+  "templates/units",
+  "record/trace",
+  "demonstration/package.browser",
 ];
 
 class LongestFirst extends BaseSequencer {

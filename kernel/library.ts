@@ -9,7 +9,14 @@ import { ownFolder } from "./folders.ts";
 export interface OpenLedger {
   text(cell: CellRef, markdown: string): unknown;
   endCell(cellId: string): void;
-  entry(id: string): { readonly version: number; readonly outOfDate: boolean } | undefined;
+  entry(id: string):
+    | {
+        readonly version: number;
+        readonly outOfDate: boolean;
+        readonly cell?: number;
+        readonly uses?: readonly string[];
+      }
+    | undefined;
   unusedOverrides(): readonly string[];
   record(about: {
     readonly complete: boolean;

@@ -35,8 +35,20 @@ export function failureText({ fileName, cells }: Notebook, failure: CellFailure)
 /** The refusal of overrides nothing takes up. */
 export function unusedText(fileName: string, unused: readonly string[], entries: readonly Entry[]): string {
   const givens = entries.flatMap((entry) => (entry.kind === "given" ? [entry.symbol] : []));
+  const assumed = entries.flatMap((entry) =>
+    entry.kind === "assumption" && entry.value !== undefined ? [entry.symbol ?? `"${entry.id}"`] : [],
+  );
   const what = unused.map((symbol) => `"${symbol}"`).join(", ");
-  return `${fileName}: --set ${what} was not used; the givens are ${givens.join(", ") || "none"}. No package was written.`;
+  const also = assumed.length === 0 ? "" : `; assumptions with a value can be set too: ${some(assumed)}`;
+  return `${fileName}: --set ${what} was not used; the givens are ${givens.join(", ") || "none"}${also}. No package was written.`;
+}
+
+const most = 12;
+
+/** Names in a row, the first dozen of many. */
+function some(names: readonly string[]): string {
+  const more = names.length - most;
+  return `${names.slice(0, most).join(", ")}${more > 0 ? ` and ${more} more` : ""}`;
 }
 
 /** What the bands of governing results stand for. */

@@ -1,6 +1,7 @@
 // The syntax tree of a cell, and what its top level declares and imports. Offsets are UTF-16 units from 0.
 import type { Directive, ImportDeclaration, Node, Program, Statement } from "oxc-parser";
 import { parseSync, visitorKeys } from "oxc-parser";
+import { kept } from "./kept.ts";
 
 export interface SyntaxFault {
   readonly message: string;
@@ -22,8 +23,15 @@ export interface ImportedName {
   readonly typeOnly: boolean;
 }
 
-/** Parse a cell or module. Faults are what makes it unusable, in the order they stand. */
-export function parse(source: string, lang: "ts" | "js" = "ts"): Tree {
+const MOST_KEPT = 300;
+const ofTypeScript = kept(MOST_KEPT, (source) => parsed(source, "ts"));
+
+/** Parse a cell or module; the tree is shared and must not be changed. Faults are what makes it unusable, in the order
+ *  they stand. */
+export const parse = (source: string, lang: "ts" | "js" = "ts"): Tree =>
+  lang === "ts" ? ofTypeScript(source) : parsed(source, lang);
+
+function parsed(source: string, lang: "ts" | "js"): Tree {
   const result = parseSync(lang === "ts" ? "cell.ts" : "cell.js", source, {
     lang,
     sourceType: "module",

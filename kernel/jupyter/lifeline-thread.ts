@@ -103,13 +103,25 @@ async function heartbeat(port: Port): Promise<void> {
   for await (const frames of port.receive()) port.send(frames);
 }
 
+function isAlive(process_id: number): boolean {
+  try {
+    process.kill(process_id, 0);
+    return true;
+  } catch (error) {
+    return (error as NodeJS.ErrnoException).code !== "ESRCH";
+  }
+}
+
 /** A kernel whose front end is gone ends too, if the front end has asked for it as Jupyter's do. */
 function watchParent(): void {
-  if (process.env.JPY_PARENT_PID === undefined) return;
+  const asked = Number(process.env.JPY_PARENT_PID);
+  if (!Number.isInteger(asked) || asked <= 0) return;
   const parent = process.ppid;
+  // A front end that went while this process was starting has left it to another parent.
+  const wasGone = parent !== asked && !isAlive(asked);
   timers.push(
     setInterval(() => {
-      if (process.ppid !== parent) shutdown();
+      if (wasGone || process.ppid !== parent) shutdown();
     }, LOOK_ms),
   );
 }

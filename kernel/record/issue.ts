@@ -47,7 +47,7 @@ export async function issue(
   runner: Runner,
   terminal: Terminal,
 ): Promise<number> {
-  const place = await placeFor(asked);
+  const place = await placeFor(asked, today);
   const earlier = place.before === undefined ? undefined : await earlierRecord(place, place.before, runner);
   const { record: run, said } = await runForRecord(asked.file, new Map(), runner, terminal.out);
   if (run === undefined) {
@@ -69,7 +69,7 @@ export async function issue(
   return 0;
 }
 
-async function placeFor({ file, rev, out }: AskedIssue): Promise<Place> {
+async function placeFor({ file, rev, out, date }: AskedIssue, today: string): Promise<Place> {
   const notebook = readNotebook(file);
   const folder = out ?? issuedFolder(notebook.folder);
   const register = await readRegister(join(folder, REGISTER_FILE));
@@ -83,7 +83,12 @@ async function placeFor({ file, rev, out }: AskedIssue): Promise<Place> {
     throw new Error(
       `${shownPath(path)} is there but not in the register: an issue that was broken off, or another file. An issue is never overwritten: give another revision, or move the file away if nobody has it`,
     );
-  return { notebook, file: path, register, before: latestIssue(register.rows, notebook.fileName) };
+  const before = latestIssue(register.rows, notebook.fileName);
+  if (before !== undefined && (date ?? today) < before.date)
+    throw new Error(
+      `${rev} would be dated ${date ?? today}, before ${before.revision} of ${before.date}, which it supersedes; ${date === undefined ? "today's date is earlier: give" : "give"} --date ${before.date} or a later one`,
+    );
+  return { notebook, file: path, register, before };
 }
 
 /** The record of the issue before, its file held against the register. */
@@ -182,10 +187,9 @@ function issueWords(record: CalculationRecord, { notebook, file, before }: Place
   const lines = [`issued: ${head.title}, revision ${head.revision}, ${head.date}`];
   if (failed > 0) lines.push(`  WARNING: ${failed} of its checks DO NOT HOLD; the cover says so`);
   for (const entry of entries) if (entry.kind === "query") lines.push(`  OPEN QUERY: ${entry.text}`);
-  if (before !== undefined)
-    lines.push(
-      `  supersedes ${before.revision} of ${before.date}${since && isUnchanged(since.changes) ? "; nothing changed since" : ""}`,
-    );
+  if (before !== undefined) lines.push(`  supersedes ${before.revision} of ${before.date}`);
+  if (since !== undefined && isUnchanged(since.changes))
+    lines.push(`  WARNING: nothing changed since ${since.revision}; the package says so`);
   lines.push(`  file: ${shownPath(file)}`, `  register: ${shownPath(join(file, "..", REGISTER_FILE))}`);
   if (notebook.cells.length === 0) lines.push("  the notebook has no cells");
   return lines.map(line).join("");

@@ -3,6 +3,7 @@
 // checker's business.) Functions are set before anything else runs, `var` is declared in front, imports are awaited
 // lookups, and the last statement, when it is an expression, is shown.
 import type { Function as FunctionNode, Node, VariableDeclaration } from "oxc-parser";
+import { kept } from "../kept.ts";
 import { declaredNames, parse, varNames, walk } from "../syntax.ts";
 import { RUNNER } from "./names.ts";
 import {
@@ -131,8 +132,12 @@ function rewriteLast({ program, text }: Draft): void {
   text.appendRight(last.expression.end, "))");
 }
 
+const MOST_KEPT = 300;
+
 /** Rewrite one cell for V8's REPL mode. Throws `SyntaxRefusal` for text that is not TypeScript or cannot run here. */
-export function rewriteCell(source: string): Rewritten {
+export const rewriteCell: (source: string) => Rewritten = kept(MOST_KEPT, rewritten);
+
+function rewritten(source: string): Rewritten {
   const tree = parse(source);
   const edit = draft(strip(tree, { keepImports: true }));
   const taken = [RUNNER, "babelHelpers"].find((name) => declaredNames(tree.program).has(name));

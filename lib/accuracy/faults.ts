@@ -3,6 +3,7 @@
 export type AccuracyFault =
   | { readonly kind: "bad range"; readonly what: string; readonly least: number; readonly most: number }
   | { readonly kind: "bad fixity"; readonly joint: string; readonly least: number; readonly most: number }
+  | { readonly kind: "bad words"; readonly key: string; readonly written: string; readonly wanted: string }
   | { readonly kind: "no such group"; readonly group: string; readonly known: readonly string[] }
   | { readonly kind: "varied twice"; readonly member: string; readonly what: string }
   | {
@@ -75,6 +76,8 @@ function wordsOf(fault: AccuracyFault): string {
       return `${fault.what} is to lie between ${fault.least} and ${fault.most} times its nominal value; two numbers more than zero, the smaller first, are wanted`;
     case "bad fixity":
       return `the fixity at ${fault.joint} is to lie between ${fault.least} and ${fault.most}; two numbers from 0 (free to turn) to 1 (fixed), the smaller first, are wanted`;
+    case "bad words":
+      return `"${fault.key}" is stated as ${fault.written}; wanted: ${fault.wanted}`;
     case "no such group":
       return `"${fault.group}" is no group and no member; there are ${fault.known.join(", ")}`;
     case "varied twice":

@@ -32,4 +32,4 @@ export {
   within,
 } from "./unknowns.ts";
 export type { Wanted, WantedForce, WantedReaction } from "./wanted.ts";
-export { covers } from "./words.ts";
+export { covers, notVaried } from "./words.ts";

@@ -26,7 +26,12 @@ export function readRatioRange(key: string, stated: Stated, usual: Between): Rat
   const { nominal = 1, range } = found;
   const [least, most] = [nominal * range.least, nominal * range.most];
   if (!(least > 0 && least <= most && most < Number.POSITIVE_INFINITY))
-    throw new AccuracyError({ kind: "bad range", what: key, least, most });
+    throw new AccuracyError({
+      kind: "bad words",
+      key,
+      written: writtenText(stated),
+      wanted: "numbers more than zero, of two the smaller first, a factor of 1 or more",
+    });
   return found;
 }
 
@@ -69,8 +74,20 @@ export function readFixityRange(key: string, stated: Stated): Between | undefine
   if (range === undefined) throw new AccuracyError({ kind: "not a fixity", key, value: String(stated) });
   const { least, most } = range;
   if (!(least >= 0 && most <= 1 && least <= most))
-    throw new AccuracyError({ kind: "bad fixity", joint: key, least, most });
+    throw new AccuracyError({
+      kind: "bad words",
+      key,
+      written: writtenText(stated),
+      wanted: "numbers from 0 (pinned, free to turn) to 1 (fixed), of two the smaller first",
+    });
   return range;
+}
+
+/** What was stated, as it was written. */
+function writtenText(stated: Stated): string {
+  if (typeof stated === "string") return `"${stated}"`;
+  const short = (x: number): string => String(Number(x.toPrecision(6)));
+  return typeof stated === "number" ? short(stated) : `${short(stated.least)} to ${short(stated.most)}`;
 }
 
 function fixities(stated: Stated): Between | undefined {

@@ -33,25 +33,28 @@ function rowOf({ name, kind, least, most, ratio, byDefault }: Unknown): UnknownR
   return { name, measure, nominal, least: nominal * least, most: nominal * most, law: laws.multiple, stated };
 }
 
-/** Nominal I and A of each part as multiples of those of the first, one line each: "beams: I 2, A 1.4 times those of columns". */
+/** Nominal I and A of each part beside those of the first, one line each: "I of beams 2 times I of columns, A of beams 1.4 times
+ *  A of columns". */
 export function nominalLines({ members }: Structure, parts: readonly Part[]): readonly string[] {
   const kinds = members.every(isBar) ? (["A"] as const) : (["I", "A"] as const);
   const [first] = parts;
   const measure = first?.members[0] ?? 0;
-  const shares = (part: Part): readonly string[] =>
-    kinds.map((kind) => {
-      const values = part.members.map((i) => rigidity(members[i], kind) / rigidity(members[measure], kind));
-      const [least, most] = [short(Math.min(...values)), short(Math.max(...values))];
-      return `${kind} ${least === most ? least : `${least} to ${most}`}`;
-    });
-  const alike = first !== undefined && shares(first).every((text) => text.endsWith(" 1"));
+  const shareOf = (part: Part, kind: "I" | "A"): string => {
+    const values = part.members.map((i) => rigidity(members[i], kind) / rigidity(members[measure], kind));
+    const [least, most] = [short(Math.min(...values)), short(Math.max(...values))];
+    return least === most ? least : `${least} to ${most}`;
+  };
+  const alike = first !== undefined && kinds.every((kind) => shareOf(first, kind) === "1");
   const to = alike ? first.name : (members[measure]?.name ?? "");
-  const lines = parts.map((part) => {
-    if (part === first && alike)
-      return `${part.name}: ${parts.length > 1 ? "the measure of the others" : "all alike"}`;
-    return `${part.name}: ${shares(part).join(", ")} times ${kinds.length > 1 ? "those" : "that"} of ${to}`;
-  });
-  return Object.freeze(lines);
+  if (alike && parts.length === 1) return Object.freeze([`${kinds.join(" and ")} of ${to} all alike`]);
+  const ofPart = (part: Part): string =>
+    kinds
+      .map((kind) => {
+        const share = shareOf(part, kind);
+        return `${kind} of ${part.name} ${share === "1" ? "equal to" : `${share} times`} ${kind} of ${to}`;
+      })
+      .join(", ");
+  return Object.freeze(parts.filter((part) => !(alike && part === first)).map(ofPart));
 }
 
 function rigidity(member: Member | undefined, kind: "I" | "A"): number {

@@ -3,8 +3,11 @@
 import type { Spread } from "./band.ts";
 import type { Unknown } from "./unknowns.ts";
 
+/** What no band covers. */
+export const notVaried = "loads, geometry, cracking and second order not varied";
+
 /** What a band covers and what it does not. */
-export const covers = "of the stiffnesses tried; loads, geometry, cracking and second order not varied";
+export const covers: string = `of the stiffnesses tried; ${notVaried}`;
 
 /** One sentence for a band; numbers of a difference in N or N·m. */
 export function bandWords(measure: "ratio" | "difference", s: Spread): string {

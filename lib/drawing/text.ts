@@ -20,7 +20,7 @@ interface Run {
 }
 
 const SUBSCRIPT =
-  /(?<![A-Za-z0-9_])([A-Za-zα-ωΑ-Ω]{1,2})_(?:\{([^{}]*)\}|([A-Za-z0-9]+(?:,[A-Za-z0-9]+(?!_))*))/gu;
+  /(?<![A-Za-z0-9_])([A-Za-zα-ωΑ-Ω]{1,2}\d{0,3})_(?:\{([^{}]*)\}|([A-Za-z0-9]+(?:,[A-Za-z0-9]+(?!_))*))/gu;
 
 /** A text split at its subscripts: "A_x = 3" and "X_{h1}" lower x and h1; "roof_beam" stays as it is. */
 export function runs(text: string): readonly Run[] {

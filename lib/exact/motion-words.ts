@@ -1,17 +1,14 @@
 // A free motion in words.
 
-import type { Mechanism } from "../results/index.ts";
+import { type Mechanism, rigidMotionWords, stillMotion as still } from "../results/index.ts";
 import type { Skeleton, Structure } from "../structure/index.ts";
 
 type Moved = Mechanism["points"][number];
 
-/** Displacements below this part of the largest are none. */
-const still = 1e-6;
-
 /** One line without a full stop: "B and C move sideways together", "D drops, member CD turns", "joint E turns alone". */
 export function motionWords(
   structure: Structure,
-  { nodes, segments }: Skeleton,
+  skeleton: Skeleton,
   points: readonly Moved[],
   turns: Mechanism["turns"],
   spins: readonly string[],
@@ -19,11 +16,13 @@ export function motionWords(
   const sideways = points.filter((p) => Math.abs(p.ux) > still);
   const upright = points.filter((p) => Math.abs(p.uy) > still);
   if (sideways.length === 0 && upright.length === 0) return spinWords(structure, spins);
-  const whole = rigidWords(nodes, segments, points, turns);
+  const whole = rigidMotionWords(skeleton, points, turns);
   if (whole !== undefined) return whole;
   const turning = [
     ...new Set(
-      segments.flatMap((s, i) => (Math.abs(turns[i]?.rotation ?? 0) * s.length > still ? [s.member] : [])),
+      skeleton.segments.flatMap((s, i) =>
+        Math.abs(turns[i]?.rotation ?? 0) * s.length > still ? [s.member] : [],
+      ),
     ),
   ];
   return [
@@ -41,33 +40,6 @@ function spinWords(structure: Structure, spins: readonly string[]): string {
   const joints = structure.joints.filter((j) => spins.includes(j.name)).map((j) => j.name);
   const names = joints.length === 0 ? spins : joints;
   return `${names.length === 1 ? "joint" : "joints"} ${list(names)} ${verb(names, "turn")} without moving`;
-}
-
-function rigidWords(
-  nodes: Skeleton["nodes"],
-  segments: Skeleton["segments"],
-  points: readonly Moved[],
-  turns: Mechanism["turns"],
-): string | undefined {
-  const size = Math.max(...segments.map((s) => s.length));
-  const rotation = turns[0]?.rotation ?? 0;
-  if (turns.some((t) => Math.abs(t.rotation - rotation) * size > still)) return undefined;
-  const [first, at] = [points[0], nodes[0]];
-  if (first === undefined || at === undefined) return undefined;
-  const rigid = points.every((p, i) => {
-    const [dx, dy] = [(nodes[i]?.x ?? 0) - at.x, (nodes[i]?.y ?? 0) - at.y];
-    return Math.hypot(p.ux - first.ux + rotation * dy, p.uy - first.uy - rotation * dx) <= still;
-  });
-  if (!rigid) return undefined;
-  if (Math.abs(rotation) * size <= still) {
-    if (Math.abs(first.uy) <= still) return "the whole structure slides sideways";
-    return Math.abs(first.ux) <= still
-      ? "the whole structure moves up or down"
-      : "the whole structure slides at a slope";
-  }
-  const [x, y] = [at.x - first.uy / rotation, at.y + first.ux / rotation];
-  const centre = nodes.find((n) => Math.hypot(n.x - x, n.y - y) <= still * size);
-  return `the whole structure turns about ${centre?.name ?? `the point x = ${number(x)} m, y = ${number(y)} m`}`;
 }
 
 function sidewaysWords(points: readonly Moved[]): string {
@@ -107,4 +79,3 @@ function list(names: readonly string[]): string {
 }
 
 const verb = (names: readonly string[], word: string): string => (names.length === 1 ? `${word}s` : word);
-const number = (x: number): number => Number(x.toPrecision(4));

@@ -9,17 +9,26 @@ import { actualLoads } from "./actual-loads.ts";
 import { type Origin, originOf } from "./origin.ts";
 import { shownBand } from "./shown-band.ts";
 import { geometrySources, loadSources } from "./sources.ts";
+import { triedOf } from "./tried.ts";
 import { truthOf } from "./truth.ts";
-import type { Hand } from "./types.ts";
+import type { Hand, HingeSet } from "./types.ts";
 import type { UnknownFrame } from "./unknown-frame.ts";
 
 /** What is taken as unknown of a frame: the entry that says so, and what it means for the frame in hand; or why no band is
  *  worked out for it. */
-export type Taken = { readonly use: string; readonly unknown: UnknownFrame } | { readonly none: string };
+export type Taken =
+  | {
+      readonly use: string;
+      readonly unknown: UnknownFrame;
+      /** Nobody stated any of it; the set it starts from, where hinges of that were placed by ratios. */
+      readonly byDefault?: true;
+      readonly about?: string;
+    }
+  | { readonly none: string };
 
 export interface BandBook {
-  /** What is taken of a frame; recorded by default where nothing was stated. */
-  taken(frame: Structure): Taken;
+  /** What is taken of a frame; recorded by default where nothing was stated, about the ratios `sets` were placed by. */
+  taken(frame: Structure, sets: readonly HingeSet[]): Taken;
   /** The bands of values, in order; undefined for those that are no hand results, and where the frame has none. */
   of(values: readonly Quantity[]): readonly (ResultBand | undefined)[];
   /** The bands of results of one hand as accuracy gives them, SI; undefined where the frame has none. */
@@ -32,9 +41,14 @@ export interface BandBook {
 }
 
 /** The bands of one sheet. `taken` says what is unknown of a frame. */
-export function bandBook(taken: (frame: Structure) => Taken): BandBook {
+export function bandBook(taken: BandBook["taken"]): BandBook {
+  const takenOf = ({ frame, solved }: Hand): Taken =>
+    taken(
+      frame,
+      solved.map(({ set }) => set),
+    );
   const uses = (hand: Hand): readonly string[] => {
-    const found = taken(hand.frame);
+    const found = takenOf(hand);
     const sections = hand.frame.members.flatMap(({ section, from }) => (section === undefined ? [] : [from]));
     return "none" in found
       ? []
@@ -46,7 +60,7 @@ export function bandBook(taken: (frame: Structure) => Taken): BandBook {
         );
   };
   const raw: BandBook["raw"] = (hand, asked) => {
-    const found = taken(hand.frame);
+    const found = takenOf(hand);
     return "none" in found ? undefined : truthOf(hand, found.unknown).bandsOf(asked);
   };
   const ofHand = (group: readonly Known[]): readonly (ResultBand | undefined)[] => {
@@ -57,11 +71,12 @@ export function bandBook(taken: (frame: Structure) => Taken): BandBook {
       group.map(({ origin, handValue }) => ({ wanted: origin.wanted, value: handValue.si })),
     );
     const on = uses(hand);
+    const tried = triedOf(takenOf(hand));
     return group.map(({ value, factor }, i) => {
       const band = found?.[i];
       return band === undefined
         ? undefined
-        : shownBand(band, value, factor, { members: hand.members, uses: on });
+        : shownBand(band, value, factor, { members: hand.members, uses: on, tried });
     });
   };
   const of: BandBook["of"] = (values) => {

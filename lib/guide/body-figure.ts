@@ -4,6 +4,7 @@ import type { FreeBodyFigure } from "../drawing/index.ts";
 import { printValue, quantity } from "../quantity/index.ts";
 import type { Action, FreeBody, Point } from "../results/types.ts";
 import type { Load, Structure } from "../structure/types.ts";
+import { loadsOn, structureAround } from "./around-body.ts";
 import { forceQuantity, forceText, type Named } from "./equation.ts";
 import { loadTexts, plainLoadName } from "./load-words.ts";
 import { and } from "./words.ts";
@@ -18,6 +19,7 @@ export function bodyFigure(
 ): FreeBodyFigure {
   const known = new Map(named.solution.steps.slice(0, firstStep).map((step) => [step.unknown, step.result]));
   const actions = body.actions.map((action) => asKnown(action, known));
+  const on = loadsOn(structure, loads, actions);
   const texts = actions.map((action) => actionText(action, named, loads));
   return {
     kind: "free body",
@@ -28,9 +30,9 @@ export function bodyFigure(
       texts,
       sought.map((force) => forceText(force, named)),
     ),
-    structure,
-    loads,
-    body: { ...body, actions },
+    structure: structureAround(structure, body),
+    loads: on.loads,
+    body: { ...body, actions: on.actions },
     texts,
     resultants: actions.map((action) => resultantText(action, named, loads)),
     sought,

@@ -9,7 +9,7 @@ import { dimensionLines } from "./dimension-lines.ts";
 import { loadTexts } from "./load-words.ts";
 import { shownAs, sketchBundle } from "./shown.ts";
 import { geometrySources } from "./sources.ts";
-import { counted, structureName } from "./words.ts";
+import { capital, counted, structureName } from "./words.ts";
 
 export interface DeterminacyOptions {
   /** Draw the states of self-stress as well, three of them at most; otherwise they are only counted. */
@@ -138,8 +138,4 @@ export function structureFigure(
     loadTexts: loadTexts(loads),
     dimensions: dimensionLines(structure),
   };
-}
-
-function capital(text: string): string {
-  return text.charAt(0).toUpperCase() + text.slice(1);
 }

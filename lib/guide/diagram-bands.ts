@@ -5,6 +5,7 @@ import type { DiagramBand, ForceQuantity } from "../drawing/index.ts";
 import { type Side, valueAt } from "../results/index.ts";
 import type { MemberForces } from "../results/types.ts";
 import type { BandBook } from "./band-book.ts";
+import { triedOf } from "./tried.ts";
 import type { Hand } from "./types.ts";
 
 export interface DiagramBands {
@@ -22,7 +23,14 @@ const quantities: readonly ForceQuantity[] = ["N", "V", "M"];
 /** Between what 90 % of the true values lie along every member of a small frame; where they all agree, no line is drawn. */
 export function diagramBands(bands: BandBook, hand: Hand): DiagramBands {
   const none = { bands: [], words: "" };
-  if ("none" in bands.taken(hand.frame)) return none;
+  if (
+    "none" in
+    bands.taken(
+      hand.frame,
+      hand.solved.map(({ set }) => set),
+    )
+  )
+    return none;
   if (hand.members.length > mostMembers)
     return { bands: [], words: "; the bands stand in the table of internal forces" };
   const lines = hand.members.flatMap((forces) => quantities.map((quantity) => placesOf(forces, quantity)));
@@ -38,7 +46,18 @@ export function diagramBands(bands: BandBook, hand: Hand): DiagramBands {
     const open = low.some((value, i) => (high[i] ?? value) - value > 1e-6 * size);
     return open ? [{ quantity, member, at, low, high }] : [];
   });
-  if (drawn.length === 0) return { bands: [], words: "; the true values are the same in every frame tried" };
+  if (drawn.length === 0) {
+    const { single } = triedOf(
+      bands.taken(
+        hand.frame,
+        hand.solved.map(({ set }) => set),
+      ),
+    );
+    const words = single
+      ? "; true values of the one frame tried stand in the tables"
+      : "; the true values are the same in every frame tried";
+    return { bands: [], words };
+  }
   const words =
     "; dotted, where drawn: between these two lines lie 90 % of the true values, of the stiffnesses tried";
   return { bands: drawn, words };

@@ -12,6 +12,7 @@ import { closureLines, equationText, forceQuantity, idleLines, type Named, stepL
 import { handOf } from "./hand.ts";
 import { loadNames } from "./load-words.ts";
 import { isNought } from "./nought.ts";
+import { queryRatios } from "./set-ratios.ts";
 import { withBandShown } from "./shown-result.ts";
 import { coordinateSources, geometrySources, jointSources, loadSources } from "./sources.ts";
 import type { Hand, HingeSet, SolvedSet } from "./types.ts";
@@ -23,11 +24,28 @@ import { and, structureName } from "./words.ts";
 export function recordFreeBodies(ledger: Ledger, bands: BandBook, sets: readonly HingeSet[]): Hand {
   const [first] = sets;
   if (first === undefined) throw new Error("freeBodies: no hinge set; give what sheet.hinges answered");
-  const taken = bands.taken(first.frame);
+  refuseTwice(sets);
+  const taken = bands.taken(first.frame, sets);
   if ("none" in taken) recordWithout(ledger, first.frame, taken.none);
   const solved = sets.map((set) => recordSet(ledger, set));
   queryUnreleased(ledger, sets);
+  queryRatios(ledger, bands, sets);
   return handOf(solved, (value) => withBandShown(value, bands));
+}
+
+/** Throws when a load case comes in more than one of the sets, whose results would count it more than once. */
+function refuseTwice(sets: readonly HingeSet[]): void {
+  const before = new Map<string, HingeSet>();
+  for (const set of sets)
+    for (const { key } of set.cases) {
+      const other = before.get(key);
+      if (other !== undefined)
+        throw new Error(
+          `freeBodies: load case ${key} comes ${other === set ? `twice, in hinge set ${set.name}` : `in hinge set ${other.name} and again in ${set.name}`}; results of the sets are added, so it would count twice. ` +
+            "Give one set for each load case; alternatives are shown by sheet.beside(chosen, other)",
+        );
+      before.set(key, set);
+    }
 }
 
 /** That hand results of a frame stand without bands, and why. */
@@ -54,6 +72,7 @@ function recordSet(ledger: Ledger, set: HingeSet): SolvedSet {
   const solution = freeBodies(set.hinged, loads);
   const book: SetBook = { ledger, set, loads, named: { solution, loadNames: loadNames(loads) }, entries: [] };
   let current = -1;
+  const drawn = new Set<number>();
   for (let i = 0; i < solution.steps.length; i++) {
     const idle = idleRun(solution.steps, i);
     if (idle !== undefined) {
@@ -64,8 +83,12 @@ function recordSet(ledger: Ledger, set: HingeSet): SolvedSet {
     }
     const step = solution.steps[i];
     if (step === undefined) continue;
-    if (drawnBody(step) !== current) recordBody(book, step, i);
+    // one equation more of a body that stands drawn above needs no second figure
+    const alone =
+      drawnBody(solution.steps[i + 1] ?? step) !== drawnBody(step) || i + 1 === solution.steps.length;
+    if (drawnBody(step) !== current && !(alone && drawn.has(drawnBody(step)))) recordBody(book, step, i);
     current = drawnBody(step);
+    drawn.add(current);
     recordStep(book, step, i);
   }
   for (const closure of solution.closures) recordClosure(book, closure);

@@ -31,7 +31,8 @@ export interface Cuts {
   readonly ends: readonly CutEnd[];
 }
 
-/** Two conditions for every beam, less one for each end that turns freely, and one for every column that has no such end:
+/** Two conditions for every beam, less one for each end that turns freely, and one for every column that has no such end, none for
+ *  an overhang:
  *  with the floors held against sway that is as many as statics needs. */
 export function cutsOf(net: Net, m: EndMomentArray, parts: Parts | undefined): Cuts {
   const scale = Math.max(1e-3, ...m.map(Math.abs));
@@ -39,6 +40,7 @@ export function cutsOf(net: Net, m: EndMomentArray, parts: Parts | undefined): C
   const lines = new Map(lineBeams(net).map((line) => [line.member, line]));
   const cuts = net.members.map((member, i): Cuts => {
     const line = lines.get(i);
+    if (member.overhang) return { hinges: [], ends: [] };
     const free = Number(member.freeStart) + Number(member.freeEnd);
     const needed = Math.max(0, (member.column ? 1 : 2) - free);
     if (needed === 0) return { hinges: [], ends: [] };

@@ -146,8 +146,9 @@ function checkedNet(frame: Structure, loads: readonly Load[]): Net {
 function balanced(found: GravityMoments): GravityMoments {
   const { net, ends } = found;
   const scale = Math.max(1e-3, ...ends.map(Math.abs));
-  for (const { name, held, ends: meeting } of net.joints) {
-    const sum = meeting.reduce((total, { member, end }) => total + (ends[2 * member + end] ?? 0), 0);
+  for (const { name, held, couple, ends: meeting } of net.joints) {
+    const own = meeting.length === 0 ? 0 : -couple;
+    const sum = meeting.reduce((total, { member, end }) => total + (ends[2 * member + end] ?? 0), own);
     if (!held && Math.abs(sum) > 1e-9 * scale)
       throw new Error(
         `gravity: at joint ${name} the end moments of ${meeting.map(({ member }) => net.members[member]?.name ?? "").join(", ")} do not balance and no column takes the rest; place the hinges of this frame by sheet.hinges`,

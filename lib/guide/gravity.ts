@@ -4,8 +4,9 @@
 import { quantity } from "../quantity/index.ts";
 import { type Ledger, shownValue } from "../sheet/index.ts";
 import { determinacy } from "../statics/index.ts";
-import { checkLoads, mergeSources, type StiffnessRatios, withHinges } from "../structure/index.ts";
+import { mergeSources, type StiffnessRatios, withHinges } from "../structure/index.ts";
 import type { Hinge, Structure } from "../structure/types.ts";
+import { checkCases } from "./case-loads.ts";
 import { floorsOf, holdingSupports } from "./floors.ts";
 import { solvedQuietly } from "./free-bodies.ts";
 import { cutsOf } from "./gravity-cuts.ts";
@@ -22,6 +23,7 @@ import { hingeId, setName } from "./hinge-names.ts";
 import { endsOf, judge, outsideWords, recordRanges } from "./hinge-ranges.ts";
 import { recordVerdict } from "./hinge-verdict.ts";
 import { endMomentsOf, heldFloors, recordRelease } from "./release.ts";
+import { givenRatios } from "./set-ratios.ts";
 import { geometrySources, loadSources } from "./sources.ts";
 import type { StiffnessOf } from "./stiffness.ts";
 import type { GravitySet, HingesOptions, LoadCase } from "./types.ts";
@@ -48,7 +50,7 @@ export function recordGravity(
   const name = setName("gravity", cases, options);
   if (typeof because !== "string" || because.trim() === "")
     throw new Error('gravity: the reason is missing; say why the hinges lie there, because: "…"');
-  for (const { loads } of cases) checkLoads(frame, loads);
+  checkCases(frame, cases);
   const loads = cases.flatMap((loadCase) => loadCase.loads);
   const floors = floorsOf(frame);
   const read = setParts(ledger, name, readGravityPlace(place));
@@ -98,6 +100,7 @@ export function recordGravity(
     entries,
     holding: [],
     couples,
+    ...givenRatios([ratios]),
     release: undefined,
   };
   // a hinge set from outside has left the moments of the method
@@ -120,6 +123,7 @@ function setParts(ledger: Ledger, set: string, written: ReadPlace): SetPlace {
       `${which} hinges (${set})`,
       quantity(written.parts[which], "pure number"),
       spanPart(written.parts[which]),
+      quantity(1, "pure number"),
     ).si;
   const parts = { outer: part("outer"), inner: part("inner") };
   for (const [which, value] of Object.entries(parts))
@@ -141,7 +145,8 @@ function withSetHinges(
 ): Structure {
   const places = plain.hinges.map((one) => {
     const written = quantity(one.at, "length");
-    const at = ledger.setFromOutside(hingeId(one.name, set), written, lengthText(one.at));
+    const span = quantity(endsOf(plain, one.member).length, "length");
+    const at = ledger.setFromOutside(hingeId(one.name, set), written, lengthText(one.at), span);
     return at === written ? undefined : at;
   });
   const moved: Structure = places.every((at) => at === undefined)

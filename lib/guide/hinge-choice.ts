@@ -2,6 +2,7 @@
 // mirror image of another.
 
 import {
+  beyondEnds,
   hingeByStiffness,
   momentsByStiffness,
   placement,
@@ -106,8 +107,10 @@ function byFixity(
 ): PlacedChoice {
   const { member, from } = choice;
   const [near, far] = [numberOf(fixity.near), numberOf(fixity.far)];
-  const { distance } = placement(frame, loads, { member, from, fixity: { near, far } });
-  const own = loads.filter((load) => load.kind !== "joint" && load.member === member);
+  const { distance, known = [] } = placement(frame, loads, { member, from, fixity: { near, far } });
+  const beyond =
+    known.length === 0 ? [] : beyondEnds(frame, loads, memberNamed(frame, member, "hinge")).loads;
+  const own = [...loads.filter((load) => load.kind !== "joint" && load.member === member), ...beyond];
   const sources = mergeSources(
     sourcesOf(fixity.near),
     sourcesOf(fixity.far),
@@ -118,7 +121,7 @@ function byFixity(
     choice,
     at: quantity(distance, "length"),
     sources,
-    how: `the point of inflection of the isolated span for end fixities ${near} at ${from} and ${far} at the far end (0 free to turn, 1 fixed)`,
+    how: `the point of inflection of the isolated span for end fixities ${near} at ${from} and ${far} at the far end (0 free to turn, 1 fixed)${known.map((joint) => `, the moment at ${joint} known by statics`).join("")}`,
   };
 }
 

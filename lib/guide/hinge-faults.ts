@@ -30,17 +30,25 @@ export function refuseTooFew(
   );
 }
 
-/** Throws when a case is not balanced by the hinges, naming the motion; says which cases are. */
-export function refuseUnbalanced(hinged: Structure, cases: readonly LoadCase[]): void {
-  const found = cases.map(({ key, loads }) => ({ key, ...balance(hinged, loads) }));
+/** Throws when a case is not balanced by the hinges, naming the motion and, by `why`, what it comes from; says which cases are, and
+ *  how many hinges the others can have. */
+export function refuseUnbalanced(
+  hinged: Structure,
+  cases: readonly LoadCase[],
+  degree: number,
+  why: (loadCase: LoadCase) => string,
+): void {
+  const found = cases.map((one) => ({ key: one.key, own: one, ...balance(hinged, one.loads) }));
   const bad = found.filter(({ balanced }) => !balanced);
   if (bad.length === 0) return;
   const good = found.filter(({ balanced }) => balanced).map(({ key }) => key);
   const names = and(hinged.hinges.map(({ name }) => name));
-  const why = bad.map(({ key, words }) => `${key} with hinges ${names}: ${words}`).join("; ");
+  const what = bad
+    .map(({ key, words, own }) => `${key} with hinges ${names}: ${words}${why(own)}`)
+    .join("; ");
   const keys = and(bad.map(({ key }) => key));
   const keep = good.length > 0 ? ` ${and(good)} can keep these hinges.` : "";
   throw new Error(
-    `${why}. Give ${keys} a hinge set of ${bad.length === 1 ? "its" : "their"} own: sheet.hinges(frame, [${bad.map(({ key }) => key).join(", ")}], […]).${keep}`,
+    `${what}. Give ${keys} a hinge set of ${bad.length === 1 ? "its" : "their"} own, with no more than ${counted(degree, "hinge")}, the degree of the structure: sheet.hinges(frame, [${bad.map(({ key }) => key).join(", ")}], […]).${keep}`,
   );
 }

@@ -1,6 +1,6 @@
 // Hinges beside the range of the isolated span: a table of all, and a query for each that lies outside.
 
-import { type Placement, placement } from "../inflection/index.ts";
+import { beyondEnds, type Placement, placement } from "../inflection/index.ts";
 import { quantity } from "../quantity/index.ts";
 import { memberLoads } from "../results/index.ts";
 import { type Ledger, shownValue, type TableCell } from "../sheet/index.ts";
@@ -50,10 +50,14 @@ export function outsideWords(name: string, set: string, judged: Placement | unde
   );
 }
 
-/** What the range of an isolated span stands on: the member's length and the loads on it. */
+/** What the range of an isolated span stands on: the member's length and the loads on it, and overhangs beyond its ends with theirs. */
 export function rangeSources(structure: Structure, loads: readonly Load[], { member }: Hinge): Sources {
   const own = memberLoads(structure, loads, member).loads.flatMap((i) => loads[i] ?? []);
-  return mergeSources(memberSources(structure, member), loadSources(own));
+  const beyond = beyondEnds(structure, loads, memberNamed(structure, member, "hinge"));
+  return mergeSources(
+    ...[member, ...beyond.members].map((name) => memberSources(structure, name)),
+    loadSources([...own, ...beyond.loads]),
+  );
 }
 
 /** Records places and ranges of hinges in a table; `verdicts` say something else of hinges that have no range. */

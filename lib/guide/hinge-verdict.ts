@@ -11,7 +11,7 @@ import { mostHinges } from "./dimension-lines.ts";
 import { shownAs, sketchBundle } from "./shown.ts";
 import { geometrySources, loadSources } from "./sources.ts";
 import type { HingeSet } from "./types.ts";
-import { counted, structureName } from "./words.ts";
+import { capital, counted, structureName } from "./words.ts";
 
 /** Records them; answers with the set, which shows itself by them. `further` are lines of the finding. */
 export function recordVerdict<S extends HingeSet>(
@@ -28,7 +28,7 @@ export function recordVerdict<S extends HingeSet>(
     kind: "figure",
     id: `figure hinges ${name}`,
     uses: mergeSources(uses, loadSources(loads)),
-    caption: `${structureName(hinged)} with the hinges taken under ${name}`,
+    caption: `${capital(structureName(hinged))} with the hinges taken under ${name}`,
     alternative: spec.description,
     spec,
   });

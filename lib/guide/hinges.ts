@@ -4,17 +4,19 @@ import type { Placement } from "../inflection/index.ts";
 import { quantity } from "../quantity/index.ts";
 import { type Ledger, shownValue } from "../sheet/index.ts";
 import { determinacy } from "../statics/index.ts";
-import { checkLoads, mergeSources, withHinges } from "../structure/index.ts";
+import { mergeSources, withHinges } from "../structure/index.ts";
 import type { Hinge, Structure } from "../structure/types.ts";
+import { checkCases } from "./case-loads.ts";
 import { type PlacedChoice, placedChoices } from "./hinge-choice.ts";
 import { refuseTooFew, refuseUnbalanced } from "./hinge-faults.ts";
 import { hingeId, setName } from "./hinge-names.ts";
 import { endsOf, judge, outsideWords, recordRanges } from "./hinge-ranges.ts";
 import { recordVerdict } from "./hinge-verdict.ts";
 import { mirroredChoices } from "./mirrored-hinges.ts";
+import { givenRatios } from "./set-ratios.ts";
 import { hingeSources } from "./sources.ts";
 import type { StiffnessOf } from "./stiffness.ts";
-import { symmetryWords } from "./symmetry.ts";
+import { checkSymmetry, symmetryWords, unlikeWords } from "./symmetry.ts";
 import type { HingeChoice, HingeSet, HingesOptions, LoadCase } from "./types.ts";
 import { lengthText, spanPart } from "./words.ts";
 
@@ -30,7 +32,7 @@ export function recordHinges(
   options: HingesOptions = {},
 ): HingeSet {
   const name = setName("hinges", cases, options);
-  for (const { loads } of cases) checkLoads(frame, loads);
+  checkCases(frame, cases);
   const loads = cases.flatMap((loadCase) => loadCase.loads);
   const before = determinacy(frame);
   const own = placedChoices(frame, loads, choices, find);
@@ -40,8 +42,9 @@ export function recordHinges(
   const placed = places === own ? chosen : placedBy(frame, mirroredChoices(frame, choices, places));
   const after = determinacy(placed);
   refuseTooFew(name, frame, before, after, choices);
-  refuseUnbalanced(placed, cases);
-  const symmetry = symmetryWords(name, placed, cases, before, after, choices);
+  const mirror = checkSymmetry(name, placed, before, after, choices);
+  refuseUnbalanced(placed, cases, before.selfStress, (one) => unlikeWords(placed, one, mirror));
+  const symmetry = mirror === undefined ? undefined : symmetryWords(name, placed, cases, mirror);
   const first = frame.hinges.length;
   const judged = placed.hinges.slice(first).map((one) => judge(frame, loads, one));
   const uses = placed.hinges.slice(first).map((one, i) => {
@@ -66,7 +69,15 @@ export function recordHinges(
   });
   recordRanges(ledger, name, hinged, loads, hinged.hinges.slice(first), judged);
   const entries = Object.freeze(cases.map(({ entry }) => entry));
-  const set = { name, frame, hinged, cases: Object.freeze([...cases]), determinacy: after, entries };
+  const set = {
+    name,
+    frame,
+    hinged,
+    cases: Object.freeze([...cases]),
+    determinacy: after,
+    entries,
+    ...givenRatios(choices.map(({ ratios }) => ratios)),
+  };
   return recordVerdict(ledger, set, loads, before, symmetry === undefined ? [] : [symmetry]);
 }
 
@@ -90,7 +101,8 @@ function setPlaces(
     const [one, choice] = [placed.hinges[first + i], choices[i]];
     if (place === undefined || one === undefined || choice === undefined) return place;
     const written = quantity(distanceFrom(placed, one, choice.from), "length");
-    const at = ledger.setFromOutside(hingeId(one.name, set), written, String(choice.at ?? written));
+    const span = quantity(endsOf(placed, one.member).length, "length");
+    const at = ledger.setFromOutside(hingeId(one.name, set), written, String(choice.at ?? written), span);
     return at === written ? place : { choice, at, sources: [], how: "" };
   });
   return places.every((place, i) => place === own[i]) ? own : places;

@@ -9,7 +9,7 @@ import { loadSources } from "./sources.ts";
 import type { LoadCase } from "./types.ts";
 
 /** Records a load case as a table of its loads; answers with it. `releases` is the hinge set whose holding forces it lets go.
- *  Throws on a key that is no short word and on a case without loads. */
+ *  Throws on a key that is no short word or that another cell has given to a case, and on a case without loads. */
 export function recordLoadCase(
   ledger: Ledger,
   key: string,
@@ -23,18 +23,23 @@ export function recordLoadCase(
     );
   if (loads.length === 0)
     throw new Error(`load case ${key} has no loads; give some, such as uniform("BC", "5.2 kN/m")`);
-  const { id, version } = ledger.put({
-    kind: "table",
-    id: `load case ${key}`,
-    uses: loadSources(loads),
-    caption: `Load case ${key}: ${title}`,
-    columns: ["on", "load", "value", "acts"],
-    rows: loads.map(row),
-  });
+  const called = `load case ${key}`;
+  const { id, version } = ledger.put(
+    {
+      kind: "table",
+      id: called,
+      uses: loadSources(loads),
+      caption: `Load case ${key}: ${title}`,
+      columns: ["on", "load", "value", "acts"],
+      rows: loads.map(row),
+    },
+    // the key of a case that lets forces go is made from a set's name, and the set's own entries are numbered
+    releases === undefined ? { called, change: "key" } : undefined,
+  );
   const lines = loads.map((load) =>
     row(load).map((cell) => (typeof cell === "string" ? cell : cell.value.text)),
   );
-  const text = [`load case ${key}: ${title}`, ...lines.map((line) => `  ${line.join(", ")}`)].join("\n");
+  const text = [`${called}: ${title}`, ...lines.map((line) => `  ${line.join(", ")}`)].join("\n");
   const found = { entry: `${id}@${version}`, key, title, loads: Object.freeze([...loads]) };
   return shownAs(releases === undefined ? found : { ...found, releases }, () => ({ "text/plain": text }));
 }

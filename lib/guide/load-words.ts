@@ -74,7 +74,7 @@ function directionText(x: number, y: number): string {
   return "inclined";
 }
 
-/** Where a load acts: "BC, whole length", "BC, 0.500 L to 1.000 L", "BC, at 3.20 m", "joint B". */
+/** Where a load acts: "BC, whole length", "BC, 0.500 L to its end", "BC, at 3.20 m", "joint B". */
 export function whereText(load: Load): string {
   if (load.kind === "joint") return `joint ${load.joint}`;
   if (load.kind === "member point") return `${load.member}, at ${placeText(load.at)}`;
@@ -87,7 +87,9 @@ function isFraction(place: Place, value: number): boolean {
 }
 
 function placeText(place: Place): string {
-  return "fraction" in place ? spanPart(place.fraction) : lengthText(place.metres);
+  if (!("fraction" in place)) return place.metres === 0 ? "its start" : lengthText(place.metres);
+  if (place.fraction === 0 || place.fraction === 1) return place.fraction === 0 ? "its start" : "its end";
+  return spanPart(place.fraction);
 }
 
 /** What kind of load it is: "uniform", "linearly varying", "force", "couple". */

@@ -100,7 +100,11 @@ function column(reactions: readonly SupportReaction[], component: Component): re
   const { parts, total } = footing(forces);
   let next = 0;
   const cells = values.map((value) => ({ value, text: value === undefined ? undefined : parts[next++] }));
-  const sum = forces.reduce((a, b) => a + b.si, 0);
+  const largest = Math.max(...forces.map(({ si }) => Math.abs(si)));
+  const sum = closedSum(
+    forces.reduce((a, b) => a + b.si, 0),
+    largest,
+  );
   const from = mergeSources(...forces.map((force) => force.from));
   return [...cells, { value: quantity(sum, "force", { from }), text: total }];
 }

@@ -101,7 +101,7 @@ export function recordRelease(
       release === undefined
         ? []
         : [
-            `let go as load case ${release.key}: give it a lateral method or a hinge set of its own and add the two, sheet.freeBodies(…, …); until then results under ${name} leave the sway out`,
+            `let go as load case ${release.key}: a lateral method or hinges of its own find the sway they make, to be added to results under ${name}; until then these leave the sway out`,
           ],
   });
   return release;

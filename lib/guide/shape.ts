@@ -6,6 +6,7 @@ import { quantity } from "../quantity/index.ts";
 import { type Ledger, shownValue, type TableCell } from "../sheet/index.ts";
 import { axisOf, memberNamed, mergeSources } from "../structure/index.ts";
 import type { Structure } from "../structure/types.ts";
+import { checkCases } from "./case-loads.ts";
 import { shownAs, sketchBundle } from "./shown.ts";
 import { geometrySources, loadSources, memberSources } from "./sources.ts";
 import type { LoadCase } from "./types.ts";
@@ -17,6 +18,7 @@ export function recordShape(ledger: Ledger, structure: Structure, cases: readonl
     throw new Error("shape: no load case; the shape belongs to the loads that bend the structure");
   const loads = cases.flatMap((loadCase) => loadCase.loads);
   const name = cases.map(({ key }) => key).join(" + ");
+  checkCases(structure, cases);
   const found = probableShape(structure, loads);
   const uses = mergeSources(geometrySources(structure), loadSources(loads));
   const spec: ShapeFigure = {

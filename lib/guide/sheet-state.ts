@@ -4,6 +4,7 @@ import type { StatedText } from "../accuracy/index.ts";
 import type { Quantity } from "../quantity/index.ts";
 import type { Host, Ledger } from "../sheet/index.ts";
 import type { Structure } from "../structure/types.ts";
+import type { HingeSet } from "./types.ts";
 
 /** What is taken as unknown of a frame, and the entry that says so. */
 export interface Statement {
@@ -11,8 +12,8 @@ export interface Statement {
   readonly id: string;
   readonly use: string;
   readonly stated: StatedText;
-  /** Taken by default, by which run of which cell. */
-  readonly byDefault?: { readonly run: Host; readonly cell: number };
+  /** Taken by default, by which run of which cell, and about the ratios of which hinge set. */
+  readonly byDefault?: { readonly run: Host; readonly cell: number; readonly about?: string };
 }
 
 /** Why bands cannot be worked out for a frame: whatever is stated, or as long as nothing is. */
@@ -25,6 +26,8 @@ export interface SheetState {
   /** By frame; undefined where bands can be worked out. */
   readonly without: Map<string, Without | undefined>;
   readonly statements: Map<string, Statement>;
+  /** By frame, then by name: the hinge sets made. */
+  readonly sets: Map<string, Map<string, HingeSet>>;
   /** By symbol: the value a result was recorded from. */
   readonly results: Map<string, Quantity>;
 }
@@ -33,7 +36,12 @@ const states = new WeakMap<Ledger, SheetState>();
 
 /** The state of a sheet, by its ledger: opened again the sheet has the same. */
 export function stateOf(ledger: Ledger): SheetState {
-  const found = states.get(ledger) ?? { statements: new Map(), results: new Map(), without: new Map() };
+  const found = states.get(ledger) ?? {
+    statements: new Map(),
+    sets: new Map(),
+    results: new Map(),
+    without: new Map(),
+  };
   states.set(ledger, found);
   return found;
 }

@@ -13,12 +13,15 @@ import { shownByEntries, shownEntry } from "./entries-shown.ts";
 import { type ExactRow, recordExact } from "./exact-beside.ts";
 import { recordFreeBodies } from "./free-bodies.ts";
 import { type GravityOptions, recordGravity } from "./gravity.ts";
+import { guarded } from "./guard.ts";
 import { recordHinges } from "./hinges.ts";
 import { recordLoadCase } from "./load-case.ts";
 import { recordReactions, type SupportReaction } from "./reactions.ts";
 import { recordResult } from "./result.ts";
+import { rememberSet } from "./set-ratios.ts";
 import { recordShape } from "./shape.ts";
 import { stateOf } from "./sheet-state.ts";
+import { shownAs } from "./shown.ts";
 import { recordSpread, type SpreadOptions, type SpreadTable } from "./spread.ts";
 import { bandsOn } from "./statements.ts";
 import { stiffnessOn } from "./stiffness.ts";
@@ -118,15 +121,23 @@ export function openSheet(head: Head, options: { readonly figures?: number } = {
     loadCase: (key, title, ...loads) => recordLoadCase(ledger, key, title, loads),
     shape: (structure, cases) => recordShape(ledger, structure, cases),
     hinges: (structure, cases, choices, given = {}) =>
-      recordHinges(ledger, stiffness, structure, cases, choices, given),
+      rememberSet(state, recordHinges(ledger, stiffness, structure, cases, choices, given)),
     gravity: (structure, cases, given) =>
-      shownByEntries(ledger, (listening) => recordGravity(listening, stiffness, structure, cases, given)),
+      shownByEntries(ledger, (listening) =>
+        rememberSet(state, recordGravity(listening, stiffness, structure, cases, given)),
+      ),
     beside: (...sets) =>
       shownByEntries(ledger, (listening) => recordBeside(listening, bandsOn(listening, state), sets)),
     freeBodies: (...sets) =>
       shownByEntries(ledger, (listening) => recordFreeBodies(listening, bandsOn(listening, state), sets)),
     reactions: (hand) => shownByEntries(ledger, (listening) => recordReactions(listening, bands, hand)),
     note: (text) => shownEntry(ledger.note(text)),
+    notConsidered: (...sentences) => {
+      const said = ledger.notConsidered(...sentences);
+      return shownAs(said, () => ({
+        "text/plain": ["not considered:", ...said.map((one) => `  ${one}`)].join("\n"),
+      }));
+    },
     conclude: (text) => shownEntry(ledger.conclude(text)),
     diagrams: (hand, given = {}) => recordDiagrams(ledger, bands, hand, given),
     spread: (hand, given = {}) => recordSpread(ledger, { state, bands }, hand, given),
@@ -138,5 +149,5 @@ export function openSheet(head: Head, options: { readonly figures?: number } = {
     head: { get: () => ledger.head, enumerable: true },
     figures: { get: () => ledger.figures, enumerable: true },
   };
-  return Object.freeze(Object.defineProperties({ ...own, ...verbs }, fields)) as Sheet;
+  return Object.freeze(Object.defineProperties({ ...own, ...guarded(verbs) }, fields)) as Sheet;
 }

@@ -1,10 +1,11 @@
 // A band as the record keeps it: its numbers with the units and figures of the value beside it.
 
-import { type Band, covers } from "../accuracy/index.ts";
+import type { Band } from "../accuracy/index.ts";
 import { printValue, type Quantity, quantity } from "../quantity/index.ts";
 import type { MemberForces } from "../results/types.ts";
 import { type ResultBand, type ShownValue, shownValue } from "../sheet/index.ts";
 import { largestOf } from "./largest.ts";
+import type { Tried } from "./tried.ts";
 
 const four = ["low", "high", "least", "greatest"] as const;
 type Four = Readonly<Record<(typeof four)[number], number>>;
@@ -15,7 +16,15 @@ export function shownBand(
   { measure, truth, spread, bias }: Band,
   value: Quantity,
   factor: number,
-  { members, uses }: { readonly members: readonly MemberForces[]; readonly uses: readonly string[] },
+  {
+    members,
+    uses,
+    tried,
+  }: {
+    readonly members: readonly MemberForces[];
+    readonly uses: readonly string[];
+    readonly tried: Tried;
+  },
 ): ResultBand {
   const nought = 1e-9 * Math.abs(factor) * largestOf(members, value.dimension === "moment" ? "M" : "force");
   const clean = (si: number): number => (Math.abs(si) <= nought ? 0 : si);
@@ -34,7 +43,8 @@ export function shownBand(
     bias: ratio
       ? percent(bias)
       : Object.freeze({ ...shownValue(bare), text: signed(printValue(bare), bare.si) }),
-    words: covers,
+    ...(tried.single ? { single: true as const } : {}),
+    words: tried.words,
     uses,
   });
 }

@@ -6,24 +6,26 @@ import type { SpreadRow } from "./spread.ts";
 import type { SpreadResult } from "./spread-results.ts";
 import type { Hand } from "./types.ts";
 
-/** Bars from the result at one end of each cause's range to that at the other. */
+/** Bars from the result at one end of each cause's range to that at the other; `rows` are those that move it. */
 export function spreadFigure(
   hand: Hand,
   results: readonly SpreadResult[],
   rows: readonly SpreadRow[],
 ): RangesFigure {
+  const moves = (one: SpreadResult): boolean => rows.some(({ result }) => result === one.name);
   const spoken = results.map(({ name, value }) => {
     const own = rows.filter(({ result }) => result === name);
-    const moves = own.map(
+    if (own.length === 0) return `${name} as chosen ${printValue(value)}, hardly moved`;
+    const moved = own.map(
       ({ cause, least, greatest }) => `${printValue(least)} to ${printValue(greatest)} by ${cause}`,
     );
-    return `${name} as chosen ${printValue(value)}: ${moves.join(", ")}`;
+    return `${name} as chosen ${printValue(value)}: ${moved.join(", ")}`;
   });
   return {
     kind: "ranges",
     title: `How results under ${hand.name} move`,
     description: `${spoken.join("; ")}.`,
-    panels: results.map(({ name, description, value }) => ({
+    panels: results.filter(moves).map(({ name, description, value }) => ({
       heading: description === "" ? name : `${name}, ${description}`,
       chosen: value.si,
       chosenText: `${printValue(value)} as chosen`,

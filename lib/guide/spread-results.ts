@@ -20,6 +20,8 @@ export interface SpreadResult {
   readonly factor: number;
   /** The same of another hand, standing on `from` too. */
   readonly asked: (hand: Hand, from: readonly string[]) => Quantity;
+  /** A value of it without the last binary digits where they are all there is. */
+  readonly nought: (value: Quantity) => Quantity;
 }
 
 /** The results meant, otherwise the governing ones recorded from this hand. Throws on one that is none of this hand, and when there
@@ -97,15 +99,20 @@ function resultOf(name: string, description: string, value: Quantity): SpreadRes
     factor,
     asked: (hand: Hand, from: readonly string[]) => {
       const found = askedOf(origin, hand);
-      // what is nought but for the last binary digits is printed as nought
-      const largest = largestOf(hand.members, found.dimension === "moment" ? "M" : "force");
-      const si = Math.abs(found.si) <= 1e-9 * largest ? 0 : found.si * factor;
-      return quantity(si, found.dimension, {
+      const own = quantity(found.si * factor, found.dimension, {
         unit: value.unit,
         from: mergeSources(found.from, from),
       });
+      return withoutRounding(own, hand, factor);
     },
+    nought: (found: Quantity) => withoutRounding(found, origin.hand, factor),
   });
+}
+
+/** What is nought but for the last binary digits, beside the largest of its kind, is printed as nought. */
+function withoutRounding(value: Quantity, { members }: Hand, factor: number): Quantity {
+  const largest = largestOf(members, value.dimension === "moment" ? "M" : "force") * Math.abs(factor);
+  return Math.abs(value.si) <= 1e-9 * largest ? quantity(0, value.dimension, value) : value;
 }
 
 /** The result of a hand whose hinges were moved; one moved onto a held base leaves no moment there. */

@@ -9,8 +9,10 @@ import { handOf } from "./hand.ts";
 import { rangeSources } from "./hinge-ranges.ts";
 import { type HingeMove, hingeMoves } from "./moved-hinges.ts";
 import type { HandBook } from "./result.ts";
+import { standingSets } from "./set-ratios.ts";
 import { spreadFigure } from "./spread-figure.ts";
 import { type SpreadResult, spreadResults } from "./spread-results.ts";
+import { isStill, stillWords } from "./spread-still.ts";
 import { rangeText } from "./statement.ts";
 import { truthOf } from "./truth.ts";
 import type { Hand, SolvedSet } from "./types.ts";
@@ -47,35 +49,48 @@ export function recordSpread(
 ): SpreadTable {
   const results = spreadResults(ledger, state, hand, options.results);
   const moves = hand.solved.flatMap(({ set }) => hingeMoves(set));
-  const rows = [...hingeRows(hand, results, moves), ...unknownRows(bands, hand, results)];
+  const named = namedBySet(hand.solved.length > 1 || standingSets(ledger, state) > 1);
+  const rows = [...hingeRows(hand, results, moves, named), ...unknownRows(bands, hand, results)];
   const byResult = results.flatMap(({ name }) => rows.filter(({ result }) => result === name));
-  const left = moves.flatMap(({ cause, range, solved }) =>
-    "none" in solved ? [Object.freeze({ cause, range, why: solved.none })] : [],
+  const left = moves.flatMap((move) =>
+    "none" in move.solved
+      ? [Object.freeze({ cause: named(move), range: move.range, why: move.solved.none })]
+      : [],
   );
   const spread: SpreadTable = Object.freeze({ rows: Object.freeze(byResult), left: Object.freeze(left) });
   const uses = mergeSources(...byResult.flatMap(({ least, chosen }) => [least.from, chosen.from]));
+  const moving = byResult.filter((row) => !isStill(row));
+  const still = stillWords(byResult);
+  const unmoved = still === "" ? "" : `; ${still}`;
   ledger.put({
     kind: "table",
     id: `spread ${hand.name}`,
     uses,
-    caption: `How results under ${hand.name} move: hinges through their isolated-span ranges, the others staying, solved anew by statics; unknowns through their ranges, the others nominal, true values`,
-    columns: ["result", "what moves", "through", "at least", "as chosen", "at greatest"],
+    caption: `How results under ${hand.name} move: hinges through their isolated-span ranges, the others staying, solved anew by statics; unknowns through their ranges, the others nominal, true values${unmoved}`,
+    columns: ["result", "what moves", "through", "at lower end", "as chosen or nominal", "at upper end"],
     rows: [
-      ...byResult.map(tableRow),
+      ...moving.map(tableRow),
       ...left.map(({ cause, range, why }) => ["every result", cause, range, `not moved: ${why}`, "", ""]),
     ],
   });
-  const spec = spreadFigure(hand, results, byResult);
+  if (moving.length === 0) return spread;
+  const spec = spreadFigure(hand, results, moving);
   ledger.put({
     kind: "figure",
     id: `figure spread ${hand.name}`,
     uses,
-    caption: `How results under ${hand.name} move: each bar from its value at one end of a range to that at the other, hinges hatched aslant, unknowns upright; the heavy stroke is the value as chosen`,
+    caption: `How results under ${hand.name} move: each bar from its value at one end of a range to that at the other, hinges hatched aslant, unknowns upright; the heavy stroke is the value as chosen${unmoved}`,
     alternative: spec.description,
     spec,
   });
   return spread;
 }
+
+/** What is moved, with its set where the sheet has more than one: "hinge h1 (S)". */
+const namedBySet =
+  (several: boolean) =>
+  ({ set, cause }: HingeMove): string =>
+    several ? `${cause} (${set.name})` : cause;
 
 function tableRow({ result, cause, range, ...values }: SpreadRow): readonly TableCell[] {
   const cell = (value: Quantity): TableCell => ({ value: shownValue(value), uses: value.from });
@@ -86,8 +101,10 @@ function hingeRows(
   hand: Hand,
   results: readonly SpreadResult[],
   moves: readonly HingeMove[],
+  named: (move: HingeMove) => string,
 ): readonly SpreadRow[] {
-  return moves.flatMap(({ set, cause, hinges, range, solved }) => {
+  return moves.flatMap((move) => {
+    const { set, hinges, range, solved } = move;
     if ("none" in solved) return [];
     const [least, greatest] = [solved.least, solved.greatest].map((moved) => handWith(hand, moved));
     if (least === undefined || greatest === undefined) return [];
@@ -99,7 +116,7 @@ function hingeRows(
       return {
         result: one.name,
         kind: "hinge",
-        cause,
+        cause: named(move),
         range,
         least: asked(least),
         chosen: one.value,
@@ -119,7 +136,10 @@ function unknownRows(
   hand: Hand,
   results: readonly SpreadResult[],
 ): readonly SpreadRow[] {
-  const taken = bands.taken(hand.frame);
+  const taken = bands.taken(
+    hand.frame,
+    hand.solved.map(({ set }) => set),
+  );
   if ("none" in taken) return [];
   const { structure, unknowns, rows } = taken.unknown;
   const loads = actualLoads(hand.solved.map(({ set }) => set));
@@ -131,7 +151,9 @@ function unknownRows(
     const range = rows.find((row) => row.name === unknown.name);
     return results.map((one, i): SpreadRow => {
       const value = (si: number | undefined): Quantity =>
-        quantity((si ?? Number.NaN) * one.factor, one.value.dimension, { unit: one.value.unit, from });
+        one.nought(
+          quantity((si ?? Number.NaN) * one.factor, one.value.dimension, { unit: one.value.unit, from }),
+        );
       const [least, greatest] = truth[i] ?? [];
       return {
         result: one.name,

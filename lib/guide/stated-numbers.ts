@@ -31,9 +31,20 @@ const isPair = (range: StatedRange): range is readonly [PureNumber, PureNumber] 
 
 function plainNumber(key: string, number: PureNumber): number {
   const value = isQuantity(number) ? (number.dimension === "pure number" ? number.si : Number.NaN) : number;
-  if (typeof value !== "number" || !Number.isFinite(value) || value < 0)
+  if (typeof value !== "number" || !Number.isFinite(value))
     throw new Error(
       `unknowns: "${key}" is ${String(number)}; a pure number, two of them or a range such as "1 to 4" is wanted`,
     );
+  const base = /^bases?\b/.test(key);
+  if (base ? value < 0 || value > 1 : value <= 0)
+    throw new Error(
+      `unknowns: "${key}" is stated by ${String(number)}${sourceText(number)}; ${base ? "a number from 0 (free to turn) to 1 (fixed)" : "a number more than zero"} is wanted`,
+    );
   return value;
+}
+
+/** " (r_I)": the entry a number came from. */
+function sourceText(number: PureNumber): string {
+  const names = isQuantity(number) ? number.from.map((use) => use.replace(/@\d+$/, "")) : [];
+  return names.length === 0 ? "" : ` (${names.join(", ")})`;
 }

@@ -8,16 +8,18 @@ import { samples, seed } from "./truth.ts";
 import { type UnknownFrame, unknownFrame } from "./unknown-frame.ts";
 import { structureName } from "./words.ts";
 
-/** Records the assumption and its table; answers with the ranges too. */
+/** Records the assumption and its table; answers with the ranges too. `byDefault` when nobody stated any of it. */
 export function recordStatement(
   ledger: Ledger,
   frame: Structure,
   stated: StatedText,
   because: string,
-  from: Sources = [],
+  { from = [], byDefault = false }: { readonly from?: Sources; readonly byDefault?: boolean } = {},
 ): Statement & { readonly rows: readonly UnknownRow[] } {
   const name = structureName(frame);
-  const unknown = unknownFrame(frame, stated);
+  const found = unknownFrame(frame, stated);
+  const rows = found.rows.map((row) => ({ ...row, stated: row.stated && !byDefault }));
+  const unknown = { ...found, rows };
   const { id, version } = ledger.put({
     kind: "assumption",
     id: `unknowns of ${name}`,

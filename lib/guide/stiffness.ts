@@ -9,6 +9,7 @@ import {
   withRelativeStiffness,
 } from "../structure/index.ts";
 import type { Sources, Structure } from "../structure/types.ts";
+import { ratioWords } from "./set-ratios.ts";
 import type { SheetState } from "./sheet-state.ts";
 import { statementFor } from "./statements.ts";
 import { unknownFrame } from "./unknown-frame.ts";
@@ -45,14 +46,10 @@ export function knownStiffness(
 }
 
 function byRatios(frame: Structure, ratios: StiffnessRatios | undefined): Stiffness | undefined {
-  const stated = Object.entries(ratios ?? {});
-  if (ratios === undefined || stated.length === 0) return undefined;
-  const words = stated.map(
-    ([key, ratio]) => `${key} = ${short(typeof ratio === "number" ? ratio : ratio.si)}`,
-  );
+  if (ratios === undefined || Object.keys(ratios).length === 0) return undefined;
   return {
     structure: withRelativeStiffness(frame, ratios),
-    words: words.join(", "),
+    words: ratioWords(ratios),
     from: ratioSources(ratios),
   };
 }
@@ -76,5 +73,3 @@ function alike(frame: Structure): Stiffness | undefined {
   if (frame.members.some(({ section }) => section !== undefined)) return undefined;
   return { structure: withRelativeStiffness(frame, {}), words: "I alike in all members", from: [] };
 }
-
-const short = (x: number): string => String(Number(x.toPrecision(3)));

@@ -68,6 +68,8 @@ export interface HingeSet {
   readonly holding?: readonly Holding[];
   /** Loads that only the free bodies have: pairs of couples at cut ends whose moment is taken as known; nothing on the frame. */
   readonly couples?: readonly Load[];
+  /** The ratios of stiffness its hinges were placed by, where some were given; more than one where hinges differ. */
+  readonly ratios?: readonly StiffnessRatios[];
 }
 
 /** A hinge set of a building frame under gravity, and the holding forces let go as a load case; none where they are nought. */

@@ -24,7 +24,7 @@ export function recordUnknowns(
     );
   refuseLate(ledger, state, frame);
   const { plain, from } = plainStatement(stated);
-  const { rows, ...statement } = recordStatement(ledger, frame, plain, because, from);
+  const { rows, ...statement } = recordStatement(ledger, frame, plain, because, { from });
   for (const key of frameKeys(frame)) state.statements.set(key, statement);
   return rows;
 }

@@ -40,7 +40,7 @@ export function balanceOne(
 export function shareOverColumns(net: Net, m: EndMomentArray): void {
   const { members, joints } = net;
   members.forEach((member, i) => {
-    if (member.column) [m[2 * i], m[2 * i + 1]] = [0, 0];
+    if (member.column && !member.overhang) [m[2 * i], m[2 * i + 1]] = [0, 0];
   });
   for (const joint of joints) if (!joint.held) balanceOne(members, joint, m, (member) => member.column);
   carryToHeld(net, m);
@@ -51,5 +51,6 @@ function carryToHeld({ joints, members }: Net, m: EndMomentArray): void {
   for (const joint of joints)
     if (joint.held)
       for (const { member, end } of joint.ends)
-        if (members[member]?.column === true) m[2 * member + end] = (m[2 * member + 1 - end] ?? 0) / 2;
+        if (members[member]?.column === true && members[member]?.overhang !== true)
+          m[2 * member + end] = (m[2 * member + 1 - end] ?? 0) / 2;
 }

@@ -16,10 +16,10 @@ export interface LineBeam {
 
 export type EndPlace = "outer" | "first" | "inner";
 
-/** All beams of a net with the places of their ends. */
+/** All beams of a net with the places of their ends; an overhang is no beam of the line. */
 export function lineBeams(net: Net): readonly LineBeam[] {
   return net.members.flatMap((member, i): LineBeam[] => {
-    if (member.column) return [];
+    if (member.column || member.overhang) return [];
     const [before, after] = [neighbour(net, i, 0), neighbour(net, i, 1)];
     const place = (here?: number, there?: number): EndPlace =>
       here === undefined ? "outer" : there === undefined ? "first" : "inner";
@@ -44,5 +44,9 @@ function isEndBay(net: Net, beam: number): boolean {
 function neighbour({ joints, members }: Net, beam: number, end: 0 | 1): number | undefined {
   const member = members[beam];
   const joint = joints[(end === 0 ? member?.start : member?.end) ?? -1];
-  return joint?.ends.find((e) => e.member !== beam && members[e.member]?.column === false)?.member;
+  const other = joint?.ends.find(({ member: i }) => {
+    const found = members[i];
+    return i !== beam && found?.column === false && !found.overhang;
+  });
+  return other?.member;
 }

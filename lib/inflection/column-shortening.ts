@@ -21,17 +21,18 @@ export function withShortening(net: Net): Net {
 
 function sunk({ fixed, k, freeStart, freeEnd }: NetMember, slope: number): readonly [number, number] {
   const m = (freeStart || freeEnd ? 3 : 6) * k * slope;
-  return [freeStart ? 0 : fixed[0] + m, freeEnd ? 0 : fixed[1] + m];
+  return [freeStart ? fixed[0] : fixed[0] + m, freeEnd ? fixed[1] : fixed[1] + m];
 }
 
-/** How far every joint sinks as its columns shorten, m where EA is in N (else a ratio), down positive. */
+/** How far every joint sinks as its columns shorten, m where EA is in N (else a ratio), down positive; the tip of an overhang with
+ *  its root. */
 export function columnSinking(net: Net): readonly number[] {
   const columns = net.joints.map((): { readonly below: number[]; readonly above: number[] } => ({
     below: [],
     above: [],
   }));
   net.members.forEach((member, i) => {
-    if (!member.column) return;
+    if (!member.column || member.overhang) return;
     const [low, high] = member.sense === 1 ? [member.start, member.end] : [member.end, member.start];
     columns[high]?.below.push(i);
     columns[low]?.above.push(i);
@@ -50,6 +51,8 @@ export function columnSinking(net: Net): readonly number[] {
   const sinkingOf = (joint: number): number => {
     const found = known[joint];
     if (found !== undefined) return found;
+    const root = rootBelow(net, joint);
+    if (root !== undefined) return sinkingOf(root);
     const [column] = columns[joint]?.below ?? [];
     const member = net.members[column ?? -1];
     if (column === undefined || member === undefined)
@@ -60,4 +63,10 @@ export function columnSinking(net: Net): readonly number[] {
     return sinking;
   };
   return net.joints.map((_, j) => sinkingOf(j));
+}
+
+/** The joint an overhang hangs on, seen from its tip. */
+function rootBelow({ members }: Net, joint: number): number | undefined {
+  const own = members.find((m) => m.overhang && (m.freeStart ? m.start : m.end) === joint);
+  return own === undefined ? undefined : own.freeStart ? own.end : own.start;
 }

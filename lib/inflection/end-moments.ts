@@ -40,6 +40,37 @@ export function momentsBetween(span: Span, fixities: Fixities): Piecewise {
   return add(simpleMoments(span), piecewise([0, span.length], [[left, (right - left) / span.length]]));
 }
 
+/** Moments statics tells at the ends of a span, N·m, hogging negative: beside an overhang or under a couple. At least one. */
+export interface KnownEnds {
+  readonly left?: number;
+  readonly right?: number;
+}
+
+/** End moments of a span with the moment known at an end and the other, unless known too, restrained by a fixity, N·m, hogging
+ *  negative:
+ *    M_A = r_A (m_A - M_B/2). */
+export function endMomentsBeside(span: Span, { left, right }: KnownEnds, fixity: number): EndMoments {
+  checkFixity(left === undefined ? "the left end" : "the right end", fixity);
+  const m = proppedMoments(span);
+  const other = (propped: number, known = 0): number => fixity * (propped - known / 2) + 0;
+  return Object.freeze({ left: left ?? other(m.left, right), right: right ?? other(m.right, left) });
+}
+
+/** End moments of a span restrained by fixities, N·m, hogging negative, with those told by statics as they are. */
+export function endMomentsGiven(
+  span: Span,
+  told: { readonly start: number | undefined; readonly end: number | undefined },
+  fixities: Fixities,
+): EndMoments {
+  const { start, end } = told;
+  if (start === undefined && end === undefined) return endMoments(span, fixities);
+  const known = {
+    ...(start === undefined ? {} : { left: start }),
+    ...(end === undefined ? {} : { right: end }),
+  };
+  return endMomentsBeside(span, known, start === undefined ? fixities.left : fixities.right);
+}
+
 /** Fixity of an end held by a rotational stiffness k, from its ratio to that of the span: k L / EI. r = k / (k + 3EI/L).
  *  A column framing in gives 3 (far end pinned) or 4 (fixed) times (EI of column / h) / (EI / L). */
 export function endFixity(restraint: number): number {

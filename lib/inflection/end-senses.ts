@@ -14,6 +14,8 @@ export interface EndSense {
   /** How many joints away from a load. */
   readonly level: number;
   readonly why: string;
+  /** The bending moment where statics tells it, N·m. */
+  readonly moment?: number;
   /** True where the rules leave the sense open. */
   readonly doubt?: true;
 }

@@ -33,7 +33,7 @@ export function exteriorRestraint(net: Net): EndMomentArray {
       else if (!(end === 0 ? beam.freeStart : beam.freeEnd) && joints[joint]?.held !== true) {
         const S = columnRestraint(net, joint);
         const kept = S / (S + (alone ? beamShare.single : beamShare.several) * beam.k);
-        const lost = (fixed[2 * i + end] ?? 0) * (1 - kept);
+        const lost = outOfBalance(net, joint, fixed) * (1 - kept);
         m[2 * i + end] = (m[2 * i + end] ?? 0) - lost;
         if (!alone) m[2 * i + 1 - end] = (m[2 * i + 1 - end] ?? 0) - carried * lost;
       }
@@ -47,11 +47,23 @@ export function exteriorRestraint(net: Net): EndMomentArray {
   return m;
 }
 
+/** What the beam and the overhangs of an outer joint bring it. */
+function outOfBalance({ members, joints }: Net, joint: number, m: EndMomentArray): number {
+  const at = joints[joint];
+  return (at?.ends ?? []).reduce(
+    (sum, { member, end }) =>
+      members[member]?.column === true && members[member]?.overhang !== true
+        ? sum
+        : sum + (m[2 * member + end] ?? 0),
+    -(at?.couple ?? 0),
+  );
+}
+
 /** Weighted stiffness of the columns at a joint. */
 function columnRestraint({ members, joints }: Net, joint: number): number {
   return (joints[joint]?.ends ?? []).reduce((sum, { member, end, far }) => {
     const column = members[member];
-    if (column?.column !== true) return sum;
+    if (column?.column !== true || column.overhang) return sum;
     const weight = farIsFree(column, end) ? 0.75 : joints[far]?.held === true ? 1 : storeyBeyond;
     return sum + weight * column.k;
   }, 0);

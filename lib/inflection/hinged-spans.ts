@@ -15,15 +15,21 @@ export function hingesFromEndMoments(span: Span, ends: EndMoments): readonly num
   return crossings(momentsWithEnds(span, ends));
 }
 
-/** End moments of a span whose moment is zero at two different places, m from its left end; an end free to turn is a place:
+/** End moments of a span whose moment is zero, or `moments` in N·m, at two different places, m from its left end; an end free to
+ *  turn is a place:
  *    M0(x) + M_A (1 - x/L) + M_B x/L = 0 at both. */
-export function endMomentsFromHinges(span: Span, first: number, second: number): EndMoments {
+export function endMomentsFromHinges(
+  span: Span,
+  first: number,
+  second: number,
+  moments: readonly [atFirst: number, atSecond: number] = [0, 0],
+): EndMoments {
   const L = span.length;
   if (!(first >= 0 && second <= L && first < second))
     throw new NetError({ kind: "places", first, second, length: L });
   const M0 = simpleMoments(span);
-  const [p, q] = [valueAt(M0, first), valueAt(M0, second)];
-  const slope = (p - q) / (second - first); // of the closing line, which is -M0 at both places
+  const [p, q] = [valueAt(M0, first) - moments[0], valueAt(M0, second) - moments[1]];
+  const slope = (p - q) / (second - first); // of the closing line, which is -p and -q at the places
   const left = -p - slope * first;
   return Object.freeze({ left: left + 0, right: left + slope * L + 0 });
 }

@@ -34,6 +34,7 @@ export {
   netOf,
 } from "./net.ts";
 export { NetError, type NetFault } from "./net-faults.ts";
+export { beyondEnds } from "./overhangs.ts";
 export { type Placement, type PlacementChoice, placement } from "./placement.ts";
 export {
   kneeHinge,

@@ -15,7 +15,7 @@ export function jointRotations(net: Net, passes = 1): EndMomentArray {
   const fixed = heldMoments(net);
   const U = joints.map((joint) => unbalanced(joint, fixed));
   let turns = joints.map((joint, j) =>
-    joint.held || joint.ends.length === 0 ? 0 : -(U[j] ?? 0) / guess(net, j),
+    joint.held || guess(net, j) === 0 ? 0 : -(U[j] ?? 0) / guess(net, j),
   );
   for (let pass = 0; pass < passes; pass++) turns = corrected(net, U, turns);
   const m = fixed.slice();
@@ -51,6 +51,6 @@ function corrected({ members, joints }: Net, U: readonly number[], turns: readon
       stiff += endStiffness(found, end);
       if (!farIsFree(found, end)) rest -= 2 * found.k * (turns[far] ?? 0);
     }
-    return rest / stiff;
+    return stiff === 0 ? 0 : rest / stiff;
   });
 }

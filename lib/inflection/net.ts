@@ -6,6 +6,7 @@ import { integralOver, memberLoads, piecewise, product } from "../results/index.
 import { axisOf, calledBy, type Load, type Structure } from "../structure/index.ts";
 import { fixedEndMoments } from "./end-moments.ts";
 import { NetError } from "./net-faults.ts";
+import { knownCouple, type Overhang, overhangsOf } from "./overhangs.ts";
 import type { Span } from "./span.ts";
 
 export interface NetMember {
@@ -15,20 +16,23 @@ export interface NetMember {
   readonly end: number;
   readonly column: boolean;
   readonly length: number;
-  /** EI/L, N·m or a ratio. */
+  /** EI/L, N·m or a ratio; none of an overhang, which holds no joint. */
   readonly k: number;
   /** EA/L, N/m, in the unit of k over that of lengths squared. */
   readonly stretch: number;
   /** 1 when it runs to the right (a beam) or up (a column), else -1. */
   readonly sense: 1 | -1;
-  /** Forces down on its joints as a simple beam; none from columns. */
+  /** Forces down on its joints as a simple beam, or all at the root of an overhang; none from columns. */
   readonly down: readonly [start: number, end: number];
-  /** Whether that end passes no moment on: released, or alone at a support that lets it turn. */
+  /** Hangs on the rest by one end: its moments are known by statics. */
+  readonly overhang: boolean;
+  /** Whether statics alone tells the moment of that end, mostly none: released, at a support that lets it turn, with nothing else
+   *  there or overhangs only, or at the tip of an overhang. */
   readonly freeStart: boolean;
   readonly freeEnd: boolean;
   /** The span and its loads. */
   readonly span: Span;
-  /** End moments with every joint held against turning; free ends have none and raise the other end's. */
+  /** End moments with every joint held against turning; free ends have the moment statics tells and raise the other end's. */
   readonly fixed: readonly [start: number, end: number];
 }
 
@@ -49,7 +53,9 @@ export interface NetJoint {
   readonly carried: boolean;
   /** Force down at the joint itself, N. */
   readonly down: number;
-  /** Members that pass moment on to it. */
+  /** Couple of the loads at the joint itself, N·m, counter-clockwise. */
+  readonly couple: number;
+  /** Members that share in what turns it, and the overhangs rooted there; none where only one end could. */
   readonly ends: readonly NetEnd[];
 }
 
@@ -68,16 +74,7 @@ export function netOf(structure: Structure, loads: readonly Load[]): Net {
     throw new NetError({ kind: "hinged", hinges: structure.hinges.map((h) => h.name) });
   const index = new Map(structure.joints.map((j, i) => [j.name, i]));
   const held = new Set(structure.supports.filter((s) => s.holds.rotation).map((s) => s.joint));
-  const passing = new Map<string, number>();
-  const count = (joint: string, released: boolean): void => {
-    if (!released) passing.set(joint, (passing.get(joint) ?? 0) + 1);
-  };
-  for (const m of structure.members) {
-    count(m.start, m.releases.start.moment);
-    count(m.end, m.releases.end.moment);
-  }
-  const loose = (joint: string, released: boolean): boolean =>
-    released || (!held.has(joint) && (passing.get(joint) ?? 0) < 2);
+  const overhangs = overhangsOf(structure, loads);
   const members = structure.members.map((m): NetMember => {
     const axis = axisOf(structure, m);
     const called = calledBy(axis);
@@ -85,21 +82,29 @@ export function netOf(structure: Structure, loads: readonly Load[]): Net {
     if (m.section === undefined) throw new NetError({ kind: "no stiffness", member: m.name });
     const span = memberLoads(structure, loads, m.name);
     const sense = (called === "column" ? axis.s : axis.c) > 0 ? 1 : -1;
-    const ends = [loose(m.start, m.releases.start.moment), loose(m.end, m.releases.end.moment)] as const;
-    return Object.freeze({
+    const own = {
       name: m.name,
       start: index.get(m.start) ?? -1,
       end: index.get(m.end) ?? -1,
       column: called === "column",
       length: axis.length,
-      k: (m.section.E * m.section.I) / axis.length,
       stretch: (m.section.E * m.section.A) / axis.length,
       sense,
-      down: called === "column" ? ([0, 0] as const) : simpleReactions(span, sense),
-      freeStart: ends[0],
-      freeEnd: ends[1],
       span,
-      fixed: fixedMoments(span, ends[0], ends[1]),
+    } as const;
+    const overhang = overhangs.members.get(m.name);
+    if (overhang !== undefined) return Object.freeze({ ...own, ...hanging(overhang) });
+    const known = (["start", "end"] as const).map((end) =>
+      m.releases[end].moment ? 0 : knownCouple(structure, overhangs, m, end),
+    );
+    return Object.freeze({
+      ...own,
+      overhang: false,
+      k: (m.section.E * m.section.I) / axis.length,
+      down: called === "column" ? ([0, 0] as const) : simpleReactions(span, sense),
+      freeStart: known[0] !== undefined,
+      freeEnd: known[1] !== undefined,
+      fixed: fixedMoments(span, known[0], known[1]),
     });
   });
   const carried = new Set(structure.supports.filter((s) => s.holds.y).map((s) => s.joint));
@@ -109,6 +114,7 @@ export function netOf(structure: Structure, loads: readonly Load[]): Net {
       held: held.has(name),
       carried: carried.has(name),
       down: loads.reduce((sum, l) => (l.kind === "joint" && l.joint === name ? sum - l.fy : sum), 0),
+      couple: loads.reduce((sum, l) => (l.kind === "joint" && l.joint === name ? sum + l.couple : sum), 0),
       ends: Object.freeze(endsAt(members, j)),
     }),
   );
@@ -116,10 +122,28 @@ export function netOf(structure: Structure, loads: readonly Load[]): Net {
 }
 
 function endsAt(members: readonly NetMember[], joint: number): NetEnd[] {
-  return members.flatMap((m, member): NetEnd[] => [
+  const ends = members.flatMap((m, member): NetEnd[] => [
     ...(m.start === joint && !m.freeStart ? [{ member, end: 0 as const, far: m.end }] : []),
     ...(m.end === joint && !m.freeEnd ? [{ member, end: 1 as const, far: m.start }] : []),
   ]);
+  return ends.every(({ member }) => members[member]?.overhang === true) ? [] : ends;
+}
+
+/** An overhang of the net: no stiffness, its end moments as known, what it weighs on its root. */
+function hanging({
+  root,
+  couples,
+  down,
+}: Overhang): Pick<NetMember, "overhang" | "k" | "down" | "freeStart" | "freeEnd" | "fixed"> {
+  const atStart = root === "start";
+  return {
+    overhang: true,
+    k: 0,
+    down: atStart ? [down, 0] : [0, down],
+    freeStart: !atStart,
+    freeEnd: atStart,
+    fixed: atStart ? [couples.root, couples.tip] : [couples.tip, couples.root],
+  };
 }
 
 /** What a simple beam gives its joints, down positive; one drawn to the left has its loads turned round. */
@@ -133,13 +157,17 @@ function simpleReactions({ length: L, across, points }: Span, sense: 1 | -1): re
   return [(sense * about) / L, sense * (total - about / L)];
 }
 
-/** A free end has no moment, and half of what it would have had goes to the other with the sign turned. */
-function fixedMoments(span: Span, freeStart: boolean, freeEnd: boolean): readonly [number, number] {
+/** A free end has the moment known, and half of what that differs by goes to the other end. */
+function fixedMoments(
+  span: Span,
+  atStart: number | undefined,
+  atEnd: number | undefined,
+): readonly [number, number] {
   const { left, right } = fixedEndMoments(span);
   const [m1, m2] = [0 - left, right];
-  if (freeStart && freeEnd) return [0, 0];
-  if (freeStart) return [0, m2 - m1 / 2];
-  return freeEnd ? [m1 - m2 / 2, 0] : [m1, m2];
+  if (atStart !== undefined && atEnd !== undefined) return [atStart, atEnd];
+  if (atStart !== undefined) return [atStart, m2 + (atStart - m1) / 2];
+  return atEnd === undefined ? [m1, m2] : [m1 + (atEnd - m2) / 2, atEnd];
 }
 
 /** Whether the far end of a member, seen from one end, is free to turn by itself. */
@@ -152,9 +180,11 @@ export function endStiffness(member: NetMember, end: 0 | 1): number {
   return (farIsFree(member, end) ? 3 : 4) * member.k;
 }
 
-/** What is out of balance at a joint: the sum of the end moments that meet there. */
-export function unbalanced({ ends }: NetJoint, m: EndMomentArray): number {
-  return ends.reduce((sum, { member, end }) => sum + (m[2 * member + end] ?? 0), 0);
+/** What is out of balance at a joint: the sum of the end moments that meet there, less the couple that acts on it. */
+export function unbalanced({ ends, couple }: NetJoint, m: EndMomentArray): number {
+  return ends.length === 0
+    ? 0
+    : ends.reduce((sum, { member, end }) => sum + (m[2 * member + end] ?? 0), -couple);
 }
 
 /** End moments with every joint held. */

@@ -13,9 +13,11 @@ import {
   type Structure,
   snapToEnds,
 } from "../structure/index.ts";
+import { endHolds } from "./end-holds.ts";
+import type { KnownEnds } from "./end-moments.ts";
 import { InflectionError } from "./faults.ts";
-import { type End, inflectionPoints, type Range } from "./inflection-points.ts";
-import { type Judged, rangeOf } from "./member-range.ts";
+import { type End, inflectionPoints, inflectionPointsBeside, type Range } from "./inflection-points.ts";
+import { type Judged, knownMoments, rangeOf } from "./member-range.ts";
 import { isLoaded } from "./span.ts";
 
 export interface PlacementChoice {
@@ -24,7 +26,8 @@ export interface PlacementChoice {
   readonly from: string;
   /** Distance from that end: a length, or a part of the member's length such as "0.125 L". */
   readonly at?: Along;
-  /** Or the fixities of both ends, 0 free to turn to 1 fixed; the hinge goes to the point of inflection they give. */
+  /** Or the fixities of both ends, 0 free to turn to 1 fixed; the hinge goes to the point of inflection they give. An end whose
+   *  moment statics tells, beside an overhang, has that moment whatever its fixity. */
   readonly fixity?: { readonly near: number; readonly far: number };
 }
 
@@ -40,6 +43,8 @@ export interface Placement {
   readonly range?: Range;
   /** Whether the hinge lies in the range. */
   readonly inside?: boolean;
+  /** End joints whose moment was taken from statics instead of their fixity. */
+  readonly known?: readonly string[];
   /** What the distance was made from. */
   readonly sources: Sources;
   /** One sentence: where it is, why there, and how it lies to the range. */
@@ -67,13 +72,18 @@ export function placement(structure: Structure, loads: readonly Load[], choice: 
     throw new InflectionError({ kind: "both or neither", member: member.name });
   const near: End = from === member.start ? "left" : "right";
   const own = memberLoads(structure, loads, member.name);
-  const { distance, sources } = distanceOf(own, choice, near, length);
+  const told = choice.fixity === undefined ? undefined : knownMoments(endHolds(structure, loads, member));
+  const { distance, sources } = distanceOf(own, choice, near, length, told);
   if (!(distance > 0 && distance < length))
     throw new InflectionError({ kind: "outside", member: member.name, distance, length });
   const judged = rangeOf(structure, loads, member, near, own);
   const inside = judged.range === undefined ? undefined : isInside(distance, judged.range, length);
   const at = near === "left" ? distance : length - distance;
-  const words = wordsOf(choice, distance, length, judged, inside);
+  const known = [
+    ...(told?.left === undefined ? [] : [member.start]),
+    ...(told?.right === undefined ? [] : [member.end]),
+  ];
+  const words = wordsOf(choice, known, distance, length, judged, inside);
   const hinge: HingeAt = { member: member.name, from, at: choice.at ?? `${distance} m`, sources };
   const found = {
     member: member.name,
@@ -82,6 +92,7 @@ export function placement(structure: Structure, loads: readonly Load[], choice: 
     at,
     length,
     sources,
+    ...(known.length === 0 ? {} : { known: Object.freeze(known) }),
     words,
     hinge: Object.freeze(hinge),
   };
@@ -95,17 +106,18 @@ function distanceOf(
   choice: PlacementChoice,
   near: End,
   length: number,
+  told: KnownEnds | undefined,
 ): { readonly distance: number; readonly sources: Sources } {
   if (choice.at !== undefined) {
     const { place, from } = readPlace(choice.at, `hinge in ${choice.member}`);
     return { distance: snapToEnds(metresAlong(place, length), length), sources: from };
   }
   const { near: rNear = 1, far: rFar = 1 } = choice.fixity ?? {};
-  if (!isLoaded(own)) throw new InflectionError({ kind: "unloaded" });
-  const points = inflectionPoints(
-    own,
-    near === "left" ? { left: rNear, right: rFar } : { left: rFar, right: rNear },
-  );
+  if (told === undefined && !isLoaded(own)) throw new InflectionError({ kind: "unloaded" });
+  const points =
+    told === undefined
+      ? inflectionPoints(own, near === "left" ? { left: rNear, right: rFar } : { left: rFar, right: rNear })
+      : inflectionPointsBeside(own, told, told[near] === undefined ? rNear : rFar);
   const point = near === "left" ? points[0] : points[points.length - 1];
   if (point === undefined) throw new InflectionError({ kind: "no inflection", end: choice.from });
   return { distance: near === "left" ? point : length - point, sources: [] };
@@ -117,6 +129,7 @@ function isInside(distance: number, { least, most }: Range, length: number): boo
 
 function wordsOf(
   { member, from, fixity }: PlacementChoice,
+  known: readonly string[],
   distance: number,
   length: number,
   { range, why }: Judged,
@@ -126,7 +139,7 @@ function wordsOf(
   const chosen =
     fixity === undefined
       ? ""
-      : `, the point of inflection for end fixities ${fixity.near} at ${from} and ${fixity.far} at the far end`;
+      : `, the point of inflection for end fixities ${fixity.near} at ${from} and ${fixity.far} at the far end${known.map((joint) => `, the moment at ${joint} known by statics`).join("")}`;
   const place = `hinge in ${member} ${Number(distance.toPrecision(4))} m (${part(distance)}) from ${from}${chosen}`;
   if (range === undefined) return `${place}; ${why}`;
   const span = `${range.least === 0 ? "0" : part(range.least)} to ${part(range.most)} (${why})`;

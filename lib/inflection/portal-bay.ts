@@ -1,4 +1,4 @@
-// A net that is one bay of one storey: two columns and the beam on them, loaded on the beam only.
+// A net that is one bay of one storey: two columns and the beam on them, loaded on the beam and on overhangs at the knees only.
 
 import type { EndMomentArray, Net, NetMember } from "./net.ts";
 import { type PortalSide, portalMoments } from "./portal-gravity.ts";
@@ -11,8 +11,10 @@ export interface PortalBay {
   /** EI/L of the beam. */
   readonly k: number;
   readonly sides: readonly [left: PortalSide, right: PortalSide];
-  /** Fixed-end moments of the beam, left and right, hogging negative. */
+  /** What the knees are turned by: fixed-end moments of the beam, left and right, hogging negative, less those of overhangs. */
   readonly fixedEnds: { readonly left: number; readonly right: number };
+  /** End moments of the overhangs rooted at the knees, counter-clockwise on them. */
+  readonly beside: { readonly left: number; readonly right: number };
   /** Equal columns and bases, and a load alike from both ends. */
   readonly symmetric: boolean;
 }
@@ -20,9 +22,10 @@ export interface PortalBay {
 /** The bay, when the net is one whose knees pass all moment on and whose columns bear no load across them. */
 export function bayOf(net: Net): PortalBay | undefined {
   const { members, joints } = net;
-  if (members.length !== 3 || joints.length !== 4) return undefined;
-  const beam = members.findIndex(({ column }) => !column);
-  const columns = [0, 1, 2].filter((i) => members[i]?.column === true);
+  const own = members.flatMap(({ overhang }, i) => (overhang ? [] : [i]));
+  if (own.length !== 3 || joints.length !== 4 + members.length - own.length) return undefined;
+  const beam = own.find((i) => members[i]?.column === false) ?? -1;
+  const columns = own.filter((i) => members[i]?.column === true);
   const level = members[beam];
   if (level === undefined || columns.length !== 2 || level.freeStart || level.freeEnd) return undefined;
   const [leftJoint, rightJoint] = level.sense === 1 ? [level.start, level.end] : [level.end, level.start];
@@ -32,13 +35,21 @@ export function bayOf(net: Net): PortalBay | undefined {
   if (left === undefined || right === undefined || left === right) return undefined;
   const [a, b] = [sideOf(net, left, leftJoint), sideOf(net, right, rightJoint)];
   if (a === undefined || b === undefined) return undefined;
-  const [m1, m2] = level.fixed;
-  const fixedEnds = level.sense === 1 ? { left: 0 - m1, right: m2 } : { left: m2, right: 0 - m1 };
+  const [m1, m2] = level.sense === 1 ? level.fixed : [level.fixed[1], level.fixed[0]];
+  const beside = { left: hungOn(net, leftJoint), right: hungOn(net, rightJoint) };
+  const fixedEnds = { left: 0 - m1 - beside.left, right: m2 + beside.right };
   const like = (x: number, y: number): boolean =>
     Math.abs(x - y) <= 1e-9 * Math.max(Math.abs(x), Math.abs(y));
   const symmetric =
     like(a.k, b.k) && like(a.height, b.height) && a.base === b.base && like(fixedEnds.left, fixedEnds.right);
-  return { beam, columns: [left, right], k: level.k, sides: [a, b], fixedEnds, symmetric };
+  return { beam, columns: [left, right], k: level.k, sides: [a, b], fixedEnds, beside, symmetric };
+}
+
+function hungOn({ members, joints }: Net, joint: number): number {
+  return (joints[joint]?.ends ?? []).reduce((sum, { member, end }) => {
+    const found = members[member];
+    return found?.overhang === true ? sum + found.fixed[end] : sum;
+  }, 0);
 }
 
 /** A column below the beam, held at its foot. */
@@ -56,14 +67,14 @@ function sideOf({ members, joints }: Net, column: number, knee: number): PortalS
   return { k: member.k, height: member.length, base: foot.held ? "fixed" : "pinned" };
 }
 
-/** End moments of the bay's members on the net, and the knee moments, tension on the inside positive. */
+/** End moments of the bay's members on the net, and the moments at the heads of the columns, tension on the inside positive. */
 export function portalEnds(
   net: Net,
-  { beam, columns, k, sides, fixedEnds }: PortalBay,
+  { beam, columns, k, sides, fixedEnds, beside }: PortalBay,
 ): { readonly ends: EndMomentArray; readonly knees: readonly [number, number] } {
   const moments = portalMoments(k, sides, fixedEnds);
   const { left, right } = moments;
-  const ends = new Float64Array(2 * net.members.length);
+  const ends = Float64Array.from(net.members.flatMap(({ overhang, fixed }) => (overhang ? fixed : [0, 0])));
   const put = (i: number, inside: 1 | -1, upper: number, lower: number): void => {
     const member = net.members[i];
     if (member === undefined) return;
@@ -75,6 +86,10 @@ export function portalEnds(
   const onFibre = (i: number, side: 1 | -1): 1 | -1 =>
     side * (net.members[i] as NetMember).sense === 1 ? 1 : -1;
   put(beam, onFibre(beam, 1), right.knee, left.knee);
+  const leftEnd = 2 * beam + (net.members[beam]?.sense === 1 ? 0 : 1);
+  const rightEnd = 4 * beam + 1 - leftEnd;
+  ends[leftEnd] = (ends[leftEnd] ?? 0) - beside.left;
+  ends[rightEnd] = (ends[rightEnd] ?? 0) - beside.right;
   put(columns[0], onFibre(columns[0], 1), left.knee, left.base);
   put(columns[1], onFibre(columns[1], -1), right.knee, right.base);
   return { ends, knees: [left.knee, right.knee] };

@@ -4,16 +4,16 @@
 //
 // Rules, common practice:
 //   1 a loaded span hogs at an end that is held against turning and has one point of inflection near it
-//   2 an end free to turn has no moment; a cantilever hogs from its tip to its root
+//   2 an end free to turn has no moment; a cantilever hogs from its tip to its root, and the span beside it has at that end the
+//     moment it brings, which is statics
 //   3 at a joint, members without load hold against what the loaded ones bring; where two loaded spans hold one another
 //     the others stay nearly straight
 //   4 a member without load, turned at one end and held at the other, has one point of inflection, within the third of its
 //     length at the held end; free at the other end it has none
 //   5 pushed sideways, columns and beams held at both ends bend in double curvature, with a point of inflection near the middle
 
-import { extremes, type MemberLoads, magnitude, memberLoads, valueAt } from "../results/index.ts";
+import { crossings, type MemberLoads, memberLoads, type Piecewise, valueAt } from "../results/index.ts";
 import {
-  axisOf,
   checkLoads,
   deepFreeze,
   inGlobalAxes,
@@ -21,10 +21,11 @@ import {
   type Member,
   type Structure,
 } from "../structure/index.ts";
-import { endMoments, momentsBetween } from "./end-moments.ts";
-import { type EndSense, endKey, holdOf, type Known, onJoint, spread } from "./end-senses.ts";
-import { inflectionPoints } from "./inflection-points.ts";
-import { isLoaded, simpleMoments } from "./span.ts";
+import { endMomentsGiven } from "./end-moments.ts";
+import { type EndSense, endKey, type Known } from "./end-senses.ts";
+import { gravitySenses } from "./gravity-senses.ts";
+import { momentsWithEnds } from "./hinged-spans.ts";
+import { isLoaded } from "./span.ts";
 import { swaySenses } from "./sway-senses.ts";
 
 export interface ProbableShape {
@@ -83,85 +84,6 @@ function pushesSideways(load: Load): boolean {
   return load.kind === "distributed" ? Math.abs(load.direction[0]) > 1e-12 : load.fx !== 0;
 }
 
-function gravitySenses(
-  structure: Structure,
-  loads: readonly Load[],
-  own: ReadonlyMap<string, MemberLoads>,
-): Known | string {
-  if (loads.some((load) => load.kind === "joint" && load.couple !== 0))
-    return "a couple acts at a joint: its sense alone does not tell how the members share it";
-  const known: Known = new Map();
-  const net = new Map<string, number[]>();
-  for (const member of structure.members) {
-    const span = own.get(member.name);
-    if (span === undefined || !isLoaded(span)) continue;
-    const sag = sagOf(structure, member, span);
-    if (typeof sag === "string") return sag;
-    for (const [joint, moment] of loadedEnds(structure, member, span, sag, known))
-      net.set(joint, [...(net.get(joint) ?? []), moment]);
-  }
-  const unbalanced = new Map<string, number>();
-  for (const [joint, moments] of net) {
-    const sum = moments.reduce((a, b) => a + b, 0);
-    const largest = Math.max(...moments.map(Math.abs));
-    unbalanced.set(joint, Math.abs(sum) < 0.1 * largest ? 0 : sum);
-  }
-  spread(structure, known, unbalanced);
-  return known;
-}
-
-/** +1 where the loads bend the simple span towards its reference fibre, -1 away from it. */
-function sagOf(structure: Structure, member: Member, span: MemberLoads): 1 | -1 | string {
-  const { s } = axisOf(structure, member);
-  if (Math.abs(s) > 1e-9) return `${member.name} is loaded and not level: the rules are for level spans`;
-  const { greatest, least } = extremes(simpleMoments(span));
-  const [up, down] = [greatest.value, -least.value];
-  if (Math.min(up, down) > 0.05 * Math.max(up, down))
-    return `the loads on ${member.name} bend it both ways: the rules are for loads of one sense`;
-  return up > down ? 1 : -1;
-}
-
-/** Sets the senses of a loaded member's ends; answers with the moments it brings to its joints. */
-function loadedEnds(
-  structure: Structure,
-  member: Member,
-  span: MemberLoads,
-  sag: 1 | -1,
-  known: Known,
-): readonly (readonly [joint: string, moment: number])[] {
-  const holds = { start: holdOf(structure, member, "start"), end: holdOf(structure, member, "end") };
-  const tip = holds.start === "free" || holds.end === "free";
-  const restrained = (end: "start" | "end"): boolean => holds[end] === "fixed" || holds[end] === "joined";
-  const fixities = { left: restrained("start") ? 1 : 0, right: restrained("end") ? 1 : 0 };
-  const moments = endMoments(span, fixities);
-  const total = magnitude(simpleMoments(span)) * 4; // of the order of a cantilever's
-  return (["start", "end"] as const).flatMap((end) => {
-    const sense = (restrained(end) ? -sag : 0) as EndSense["sense"];
-    const joint = member[end];
-    const why = tip
-      ? `a cantilever hogs from its tip to ${joint}`
-      : sense === 0
-        ? `${joint} is free to turn`
-        : `the span is loaded and held against turning at ${joint}`;
-    const fixity = sense === 0 ? 0 : fixityAt(structure, member, end);
-    known.set(endKey(member.name, end), { sense, fixity, level: 0, why });
-    if (holds[end] !== "joined") return [];
-    const size = tip ? -sag * total : end === "start" ? moments.left : moments.right;
-    return [[joint, onJoint(end) * size] as const];
-  });
-}
-
-/** Fully held by a fixed support or by a span across the support; about half by columns or a span without load. */
-function fixityAt(structure: Structure, member: Member, end: "start" | "end"): number {
-  if (holdOf(structure, member, end) === "fixed") return 1;
-  const { c } = axisOf(structure, member);
-  const across = structure.members.some(
-    (m) =>
-      m !== member && [m.start, m.end].includes(member[end]) && Math.abs(axisOf(structure, m).c - c) < 1e-9,
-  );
-  return across ? 0.8 : 0.5;
-}
-
 function shapeOf(
   structure: Structure,
   member: Member,
@@ -182,7 +104,9 @@ function shapeOf(
   }
   if (start === undefined || end === undefined)
     return unknownMember(member, `no rule reaches ${member.name}`);
-  if (loaded) return loadedShape(structure, member, span, start, end);
+  const outweighed = [start, end].find((e) => loaded && e.doubt === true);
+  if (outweighed !== undefined) return unknownMember(member, outweighed.why);
+  if (loaded) return loadedShape(member, span, start, end);
   return plainShape(member, start, end);
 }
 
@@ -211,35 +135,25 @@ function plainShape({ name, start: a, end: b }: Member, start: EndSense, end: En
   };
 }
 
-function loadedShape(
-  structure: Structure,
-  member: Member,
-  span: MemberLoads,
-  start: EndSense,
-  end: EndSense,
-): ProbableMember {
-  const sag = sagOf(structure, member, span);
-  const curvature = (sense: number): "sagging" | "hogging" => (sense > 0 ? "sagging" : "hogging");
-  const whole = typeof sag === "string" ? 1 : sag;
-  if (["start", "end"].some((e) => holdOf(structure, member, e as "start" | "end") === "free"))
-    return {
-      member: member.name,
-      pieces: [{ from: 0, to: 1, curvature: curvature(-whole) }],
-      inflections: [],
-    };
+function loadedShape(member: Member, span: MemberLoads, start: EndSense, end: EndSense): ProbableMember {
   const fixities = { left: start.fixity, right: end.fixity };
-  const places = inflectionPoints(span, fixities).map((x) => x / span.length);
+  const ends = endMomentsGiven(span, { start: start.moment, end: end.moment }, fixities);
+  const moments = momentsWithEnds(span, ends);
+  const places = crossings(moments).map((x) => x / span.length);
   const stops = [0, ...places, 1];
-  const moments = momentsBetween(span, fixities);
   const inflections = places.map((at, i) => {
     const first = i === 0 && start.sense !== 0;
-    const { why, fixity } = first ? start : end;
+    const { why, fixity, moment } = first ? start : end;
     const degree = fixity === 1 ? "fully" : fixity > 0.5 ? "nearly fully" : "about half";
-    return { at, why: `${why}; placed for an end ${degree} fixed, isolated span` };
+    const placed = moment === undefined ? `an end ${degree} fixed` : "that moment, known by statics";
+    return { at, why: `${why}; placed for ${placed}, isolated span` };
   });
   const pieces = stops.slice(0, -1).map((from, i) => {
     const to = stops[i + 1] ?? 1;
-    return { from, to, curvature: curvature(valueAt(moments, ((from + to) / 2) * span.length)) };
+    return { from, to, curvature: curvatureOf(moments, ((from + to) / 2) * span.length) };
   });
   return { member: member.name, pieces, inflections };
 }
+
+const curvatureOf = (moments: Piecewise, x: number): "sagging" | "hogging" =>
+  valueAt(moments, x) > 0 ? "sagging" : "hogging";

@@ -74,9 +74,19 @@ function ofBeam(net: Net): StiffnessMoments {
       words: (name) => twoSpanWords(two, name),
     };
   const ends = momentDistribution(net, cycles);
-  const k = ratioList(net.members.map((member) => member.k));
-  const words = `moment distribution, ${cycles} cycles (H. Cross 1932, from memory), EI/L of ${net.members.map(({ name }) => name).join(", ")} as ${k}`;
+  const spans = net.members.filter(({ overhang }) => !overhang);
+  const k = ratioList(spans.map((member) => member.k));
+  const ratios = `EI/L of ${spans.map(({ name }) => name).join(", ")} as ${k}`;
+  const words = `moment distribution, ${cycles} cycles (H. Cross 1932, from memory), ${ratios}${overhangWords(net)}`;
   return { net, ends, formula: "moment distribution", words: () => words };
+}
+
+/** That the moments of overhangs are statics. */
+function overhangWords({ members }: Net): string {
+  const names = members.filter(({ overhang }) => overhang).map(({ name }) => name);
+  if (names.length === 0) return "";
+  const plural = names.length > 1;
+  return `; overhang${plural ? "s" : ""} ${names.join(", ")}: no stiffness, the moment${plural ? "s" : ""} known by statics`;
 }
 
 type TwoSpanNet = readonly [NetMember, NetMember];
@@ -86,6 +96,7 @@ function twoSpansOf({ members, joints }: Net): TwoSpanNet | undefined {
   const [a, b, ...more] = members;
   if (a === undefined || b === undefined || more.length > 0) return undefined;
   if (!(a.freeStart && !a.freeEnd && b.freeEnd && !b.freeStart && a.end === b.start)) return undefined;
+  if (a.overhang || b.overhang || joints.some(({ couple }) => couple !== 0)) return undefined;
   if (joints[a.end]?.held === true || [a, b].every((member) => uniformLoad(member) === 0)) return undefined;
   return [a, b].every((member) => uniformLoad(member) !== undefined) ? [a, b] : undefined;
 }
@@ -113,18 +124,20 @@ function twoSpanWords(two: TwoSpanNet, name: string): string {
 
 function ofPortal(net: Net, bay: PortalBay): StiffnessMoments {
   const { ends, knees } = portalEnds(net, bay);
+  const hung = net.members.some(({ overhang }) => overhang);
+  const less = hung ? `, FEM less the moment of the overhang at each knee${overhangWords(net)}` : "";
   const [left, right] = bay.sides;
   const ks = [left, right].map(({ k }) => bay.k / k);
   if (bay.symmetric) {
     const m = left.base === "fixed" ? 4 : 3;
     const share = m / (m + 2 * (ks[0] ?? 0));
-    const words = `k = (I of beam/L)/(I of column/h) = ${short(ks[0] ?? 0)}: M = FEM m/(m + 2k) = ${short(share)} FEM at the knees, m = ${m} for ${left.base} bases (A. Kleinlogel, from memory)`;
+    const words = `k = (I of beam/L)/(I of column/h) = ${short(ks[0] ?? 0)}: M = FEM m/(m + 2k) = ${short(share)} FEM at the knees, m = ${m} for ${left.base} bases (A. Kleinlogel, from memory)${less}`;
     return { net, ends, formula: "symmetric portal", words: () => words };
   }
   const kept = knees.map((M, i) => M / ((i === 0 ? bay.fixedEnds.left : bay.fixedEnds.right) || 1));
   const words =
     `k = (I of beam/L)/(I of column/h) = ${short(ks[0] ?? 0)} left and ${short(ks[1] ?? 0)} right: two turning knees held against sway, ` +
-    `then the holding force let go and shared by column stiffness; the knees keep ${short(kept[0] ?? 0)} and ${short(kept[1] ?? 0)} of the fixed-end moments`;
+    `then the holding force let go and shared by column stiffness; the knees keep ${short(kept[0] ?? 0)} and ${short(kept[1] ?? 0)} of the fixed-end moments${less}`;
   return { net, ends, formula: "portal", words: () => words };
 }
 
@@ -141,16 +154,17 @@ function ofFrame(net: Net): StiffnessMoments {
 function jointWords(net: Net, name: string): string {
   const own = net.members.find((member) => member.name === name);
   if (own === undefined) return "joint turns";
+  if (own.overhang) return `${name} is an overhang: its moment is known by statics`;
   const across = own.column ? "beams" : "columns";
   const at = [own.start, own.end].flatMap((j) => {
     const joint = net.joints[j];
     const others = joint?.ends.filter((end) => net.members[end.member]?.column === !own.column) ?? [];
-    if (joint === undefined || joint.held || others.length === 0) return [];
     const sum = others.reduce((total, end) => total + (net.members[end.member]?.k ?? 0), 0);
+    if (joint === undefined || joint.held || sum === 0) return [];
     return [`${short(own.k / sum)} at ${joint.name}`];
   });
   const ratio = at.length === 0 ? "" : `, I/L of ${name} to that of the ${across} = ${at.join(" and ")}`;
-  return `turns of the joints by slope-deflection, guessed and once corrected, no sway${ratio}`;
+  return `turns of the joints by slope-deflection, guessed and once corrected, no sway${ratio}${overhangWords(net)}`;
 }
 
 const short = (x: number): string => String(Number(x.toPrecision(3)));

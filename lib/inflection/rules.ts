@@ -3,6 +3,7 @@
 
 import { shareOverColumns } from "./balance-joints.ts";
 import { type EndPlace, type LineBeam, lineBeams } from "./beam-lines.ts";
+import type { EndMoments } from "./end-moments.ts";
 import { endMomentsFromHinges } from "./hinged-spans.ts";
 import type { EndMomentArray, Net, NetMember } from "./net.ts";
 import { NetError } from "./net-faults.ts";
@@ -30,25 +31,34 @@ export const usualPlaces: Readonly<Record<"tenth" | "fixed ends" | "propped", Us
 /** End moments on all members with two hinges in every beam, at parts of its span from an outer and from an inner end; what the
  *  beams leave at the joints is shared over the columns by EI/h, no sway. A beam end free to turn is its own hinge. With `alike`
  *  each end moment is that of a beam with the same hinge at both ends, as the rules are often worked: the moment is then not zero at
- *  the hinges of an end bay. */
+ *  the hinges of an end bay. Overhangs have the moments of statics. */
 export function hingedBeams(
   net: Net,
   parts: { readonly outer: number; readonly inner: number; readonly alike?: boolean },
 ): EndMomentArray {
   const part = (place: EndPlace): number => (place === "outer" ? parts.outer : parts.inner);
   return fromBeams(net, (beam, { start, end }) => {
-    const a = beam.freeStart ? 0 : part(start) * beam.length;
-    const b = beam.freeEnd ? 0 : part(end) * beam.length;
-    const L = beam.length;
+    const [a, b] = [part(start) * beam.length, part(end) * beam.length];
+    const both = (first: number, second: number): EndMoments => betweenHinges(beam, first, second);
     if (parts.alike !== true) {
-      const { left, right } = endMomentsFromHinges(beam.span, a, L - b);
+      const { left, right } = both(a, b);
       return [left, right];
     }
-    return [
-      endMomentsFromHinges(beam.span, a, L - (beam.freeEnd ? 0 : a)).left,
-      endMomentsFromHinges(beam.span, beam.freeStart ? 0 : b, L - b).right,
-    ];
+    return [both(a, a).left, both(b, b).right];
   });
+}
+
+/** End moments of a beam with hinges at distances from its ends, or with the moment known at an end instead of a hinge near it. */
+function betweenHinges(beam: NetMember, fromStart: number, fromEnd: number): EndMoments {
+  const { span, length: L, freeStart, freeEnd } = beam;
+  const { left, right } = knownEnds(beam);
+  const [first, second] = [freeStart ? 0 : fromStart, L - (freeEnd ? 0 : fromEnd)];
+  return endMomentsFromHinges(span, first, second, [freeStart ? left : 0, freeEnd ? right : 0]);
+}
+
+/** What statics tells of the moments at free ends, as bending moments. */
+function knownEnds({ fixed }: NetMember): EndMoments {
+  return { left: 0 - fixed[0], right: fixed[1] };
 }
 
 /** Moment coefficients of a uniform load w on beams of several bays, hogging, as parts of wL²: 1/16 at outer ends that columns
@@ -73,7 +83,8 @@ export function coefficientMoments(net: Net): EndMomentArray {
     const wL2 = uniformLoad(beam) * beam.length ** 2;
     const part = (place: EndPlace): number =>
       momentCoefficients[place === "first" && paired ? "first of two" : place];
-    return [beam.freeStart ? 0 : -part(start) * wL2, beam.freeEnd ? 0 : -part(end) * wL2];
+    const { left, right } = knownEnds(beam);
+    return [beam.freeStart ? left : -part(start) * wL2, beam.freeEnd ? right : -part(end) * wL2];
   });
 }
 
@@ -99,7 +110,7 @@ function fromBeams(
   net: Net,
   bending: (beam: NetMember, places: LineBeam) => readonly [left: number, right: number],
 ): EndMomentArray {
-  const m = new Float64Array(2 * net.members.length);
+  const m = Float64Array.from(net.members.flatMap(({ overhang, fixed }) => (overhang ? fixed : [0, 0])));
   for (const places of lineBeams(net)) {
     const beam = net.members[places.member];
     if (beam === undefined) continue;

@@ -8,7 +8,7 @@ import { unbroken } from "./words.ts";
 
 /** Ends of numbers that belong together stay on one line: "−132 and", "least −140". */
 const bound = (text: string): string =>
-  unbroken(text).replace(/(least|greatest|bias|between|and|to|of) (?=[−+\d])/g, "$1\u00a0");
+  unbroken(text).replace(/(least|greatest|middle|between|and|to|of) (?=[−+\d])/g, "$1\u00a0");
 
 /** A band beneath its value, in one sentence. */
 export const bandLine = (band: ResultBand): Html => h`<p class="band">${bound(bandText(band))}</p>`;
@@ -31,7 +31,10 @@ export const noteOnBands = (bands: readonly ResultBand[]): Part =>
   bands[0] === undefined ? "" : h`<p class="band">${tableBandNote(bands[0].words)}.</p>`;
 
 /** What the bands on the cover stand for, once for all of them. */
-export function bandsOnCover(bands: readonly ResultBand[]): Part {
+export function bandsOnCover(book: Book, bands: readonly ResultBand[]): Part {
   const words = [...new Set(bands.map((band) => band.words))];
-  return words.length === 0 ? "" : h`<p class="band tried">Bands: ${words.join("; ")}.</p>`;
+  if (words.length === 0) return "";
+  const grounds = [...new Set(bands.flatMap(({ uses }) => uses.slice(0, 1)))].map((use) => book.ground(use));
+  const by = grounds.length === 0 ? "" : h`; unknowns: ${groundLinks(book, grounds)}`;
+  return h`<p class="band tried">Bands: ${words.join("; ")}${by}.</p>`;
 }

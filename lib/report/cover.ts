@@ -1,6 +1,6 @@
 // The first page: what is calculated, by whom, how far it may be relied on, and what came out.
 
-import type { CheckEntry, Head, QueryEntry, ResultEntry } from "../sheet/index.ts";
+import type { CheckEntry, Head, QueryEntry } from "../sheet/index.ts";
 import { isClosure } from "./arrange.ts";
 import { bandLine, bandsOnCover } from "./bands.ts";
 import { type Book, type Item, lineAnchor } from "./book.ts";
@@ -51,8 +51,8 @@ ${where}<p>What follows was worked out before that. It is not a result and must 
 `;
 }
 
-function governing(items: readonly Of<ResultEntry>[]): Html {
-  const rows = items.filter((i) => i.entry.governing);
+function governing(book: Book): Html {
+  const rows = ofKind(book, "result").filter((i) => i.entry.governing);
   if (rows.length === 0) return h`<p class="none">No result is named as governing.</p>`;
   return h`<ul class="ledger">${rows.map(
     ({
@@ -60,7 +60,10 @@ function governing(items: readonly Of<ResultEntry>[]): Html {
       label,
     }) => h`<li><a class="no" href="#${lineAnchor(entry.id)}" aria-label="line ${label}">${label}</a>
 <p class="value">${maths(entry.tex)} = ${numberLink(entry.id, entry.value.text)}</p><p>${unbroken(entry.description)}</p>${entry.band === undefined ? "" : bandLine(entry.band)}</li>`,
-  )}</ul>${bandsOnCover(rows.flatMap(({ entry }) => entry.band ?? []))}`;
+  )}</ul>${bandsOnCover(
+    book,
+    rows.flatMap(({ entry }) => entry.band ?? []),
+  )}`;
 }
 
 /** The engineer's own checks and every check that fails, each by itself; then one line on the equations that close. */
@@ -123,7 +126,7 @@ function prompts(book: Book): Part {
 
 /** The cover. */
 export function cover(book: Book): Html {
-  const { head, notConsidered } = book.record;
+  const { head, notConsidered = [] } = book.record;
   const failing = ofKind(book, "check").filter((c) => !c.entry.passed).length;
   const count = failing === 0 ? "" : h` <strong class="fails">(${failing} DO NOT HOLD)</strong>`;
   return h`<header class="cover">
@@ -134,11 +137,11 @@ ${titleBlock(head)}
 </header>
 ${stopped(book)}<section class="summary" aria-labelledby="outcome"><h2 id="outcome">Outcome</h2>
 ${prompts(book)}${outdated(book)}
-<section><h3>Governing results</h3>${governing(ofKind(book, "result"))}</section>
+<section><h3>Governing results</h3>${governing(book)}</section>
 <section><h3>Checks${count}</h3>${checks(book)}</section>
 <section><h3>Open queries</h3>${queries(ofKind(book, "query"))}</section>
 ${outside(book)}
-<section><h3>Not considered</h3><ul class="plain">${(notConsidered ?? NOT_CONSIDERED).map((t) => h`<li>${t}</li>`)}</ul></section>
+<section><h3>Not considered</h3><ul class="plain">${[...notConsidered, ...NOT_CONSIDERED].map((t) => h`<li>${t}</li>`)}</ul></section>
 <section class="cautions"><h3>Read with care</h3><ul class="plain">${CAUTIONS.map((t) => h`<li>${t}</li>`)}</ul></section>
 </section>
 `;

@@ -17,12 +17,23 @@ const KINDS: readonly FigureSpec["kind"][] = [
 const isFigureSpec = (spec: { readonly kind: string }): spec is FigureSpec =>
   (KINDS as readonly string[]).includes(spec.kind);
 
+const draw = async (spec: FigureSpec, prefix: string): Promise<string> =>
+  spec.kind === "line chart" ? drawLineChart(spec, prefix) : drawSketch(spec, prefix);
+
+/** Drawings by prefix and content: a notebook is run again and again, and most of its figures stay. */
+const drawn = new Map<string, string>();
+const KEPT = 200;
+
 /** A figure as one SVG element; every id in it starts with `prefix`. Throws on an unknown kind, naming those there are. */
 export async function drawFigureSpec(spec: { readonly kind: string }, prefix: string): Promise<string> {
   if (!isFigureSpec(spec)) {
     throw new Error(`figure kind "${spec.kind}" is unknown; kinds are ${KINDS.join(", ")}`);
   }
-  return spec.kind === "line chart" ? drawLineChart(spec, prefix) : drawSketch(spec, prefix);
+  const key = `${prefix} ${JSON.stringify(spec)}`;
+  const svg = drawn.get(key) ?? (await draw(spec, prefix));
+  if (!drawn.has(key) && drawn.size >= KEPT) drawn.clear();
+  drawn.set(key, svg);
+  return svg;
 }
 
 /** Internal forces of a frame too large for one page are drawn on one per quantity; every other figure is one drawing. */

@@ -7,8 +7,12 @@ export interface Html {
 
 export type Part = string | number | Html | undefined | readonly Part[];
 
+/** Letters, figures and signs that need no escaping: most texts are nothing else. */
+const PLAIN = /^[\t\n\r !#-%(-;=?-~\u00a0-\ud7ff]*$/;
+
 /** Text made safe for HTML, in attributes too; control characters HTML forbids become U+FFFD. */
 export function escapeHtml(text: string): string {
+  if (PLAIN.test(text)) return text;
   return (
     text
       // biome-ignore lint/suspicious/noControlCharactersInRegex: these are the characters HTML forbids

@@ -1,6 +1,13 @@
 // What an issue says of itself: why it was issued, what changed since the one before, and what each assumption moves.
 
-import type { Changes, Movement, ValueChange } from "../sheet/index.ts";
+import {
+  bandInShort,
+  type Changes,
+  condensed,
+  type Movement,
+  type ValueChange,
+  wordDifference,
+} from "../sheet/index.ts";
 import { type Book, lineAnchor } from "./book.ts";
 import { type Html, h, type Part } from "./html.ts";
 import { itemLinks, nameOf } from "./references.ts";
@@ -75,6 +82,7 @@ function grounds(book: Book, changes: Changes): Part {
 }
 
 function changed(book: Book, changes: Changes): readonly Part[] {
+  const { single, groups } = condensed(changes, book.record.entries, percentText);
   const plain = (list: Changes["added"]): readonly (readonly Part[])[] =>
     list.map(({ id, name, kind }) => [lineName(book, id, name), kind]);
   return [
@@ -98,21 +106,36 @@ function changed(book: Book, changes: Changes): readonly Part[] {
     table(
       "Results changed",
       [{ heading: "line" }, ...VALUES],
-      changes.results.map(({ id, name, value }) => [lineName(book, id, name), ...valueCells(value)]),
+      single.map(({ id, name, value }) => [lineName(book, id, name), ...valueCells(value)]),
     ),
     table(
-      "Bands changed",
+      "Numbers of tables and equations changed",
+      [{ heading: "line" }, { heading: "how many" }, { heading: "by how much" }],
+      groups.map(({ id, name, changed: many, of, most }) => [
+        id === undefined ? name : lineName(book, id, name),
+        `${many} of ${of}`,
+        unbroken(most),
+      ]),
+    ),
+    table(
+      "Bands changed: where 90 % lie (least to greatest)",
       [{ heading: "line" }, { heading: "before" }, { heading: "now" }],
       (changes.bands ?? []).map(({ id, name, before, after }) => [
         lineName(book, id, name),
-        unbroken(before),
-        unbroken(after),
+        unbroken(bandInShort(before)),
+        unbroken(bandInShort(after)),
       ]),
     ),
     table(
       "Words changed",
       [{ heading: "line" }, { heading: "before" }, { heading: "now" }],
-      changes.words.map(({ id, name, before, after }) => [lineName(book, id, name), before, after]),
+      changes.words.flatMap((one) => {
+        const found = wordDifference(one);
+        const more = found === undefined || found.more === 0 ? "" : ` and ${found.more} more`;
+        return found === undefined
+          ? []
+          : [[lineName(book, one.id, one.name), found.before, `${found.after}${more}`]];
+      }),
     ),
     table("Lines added", [{ heading: "line" }, { heading: "kind" }], plain(changes.added)),
     table("Lines removed", [{ heading: "line" }, { heading: "kind" }], plain(changes.removed)),

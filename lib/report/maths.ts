@@ -3,33 +3,33 @@
 import { type FormulaLines, toMathML } from "../sheet/index.ts";
 import { type Html, h, joined, raw } from "./html.ts";
 
-const set = new Map<string, Html>();
-const KEPT = 2000;
-
 /** TeX whose subscripts of several names are upright throughout: M_{\mathrm{BC},B} is M_{\mathrm{BC,B}}. */
 export const uprightSubscripts = (tex: string): string =>
   tex.replace(/_\{((?:\\mathrm\{[^{}]*\}|\w+)(?:,(?:\\mathrm\{[^{}]*\}|\w+))+)\}/g, (_, inside: string) => {
     return `_{\\mathrm{${inside.replace(/\\mathrm\{([^{}]*)\}/g, "$1")}}}`;
   });
 
-const written = (tex: string, display: boolean): Html =>
-  // Sums of forces are small signs in a line of text; only fractions need the height of a displayed formula.
-  raw(toMathML(uprightSubscripts(tex), { display: display && /\\frac\b/.test(tex) }));
+const set = new Map<string, Html>();
+const KEPT = 4000;
 
-/** A formula as MathML, `display` with fractions in full size; the text itself where TeX cannot be read. */
-export function maths(tex: string, display = false): Html {
+function written(tex: string, display: boolean): Html {
   const key = `${display} ${tex}`;
   const known = set.get(key);
   if (known) return known;
-  let made: Html;
-  try {
-    made = written(tex, display);
-  } catch {
-    made = h`<code>${tex}</code>`;
-  }
+  // Sums of forces are small signs in a line of text; only fractions need the height of a displayed formula.
+  const made = raw(toMathML(uprightSubscripts(tex), { display: display && /\\frac\b/.test(tex) }));
   if (set.size >= KEPT) set.clear();
   set.set(key, made);
   return made;
+}
+
+/** A formula as MathML, `display` with fractions in full size; the text itself where TeX cannot be read. */
+export function maths(tex: string, display = false): Html {
+  try {
+    return written(tex, display);
+  } catch {
+    return h`<code>${tex}</code>`;
+  }
 }
 
 /** TeX shorter than this is set in one piece. */

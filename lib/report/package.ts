@@ -15,7 +15,7 @@ import { issueSection, movesSection } from "./issue-section.ts";
 import { type DrawnFigure, type Figures, line } from "./lines.ts";
 import { RECHECK_CLIENT, recheckLine } from "./recheck-client.ts";
 import { pageStyle } from "./style.ts";
-import { why } from "./why.ts";
+import { whyFolded } from "./why.ts";
 
 export interface PackageOptions {
   /** Language of the page, as in HTML's lang attribute; "en" otherwise. */
@@ -118,7 +118,7 @@ export async function renderPackage(given: CalculationRecord, options: PackageOp
 <body>
 <a class="skip" href="#calculation">Skip to the calculation</a>
 ${banner}<main>
-${cover(book)}${recheckLine}${issueSection(book)}${CONTENTS}${section("givens", "Givens", kept(book, "given", figures))}${section("assumptions", "Assumptions", kept(book, "assumption", figures))}${movesSection(book)}${section("calculation", "Calculation", calculation(book, figures))}${section("provenance", "What stands on what", why(book))}${section("notebook", "Notebook", h`<details><summary>Source of ${record.notebook.name}</summary><pre tabindex="0">${record.notebook.source}</pre></details>\n`)}${colophon(record, await sha256(json))}</main>
+${cover(book)}${recheckLine}${issueSection(book)}${CONTENTS}${section("givens", "Givens", kept(book, "given", figures))}${section("assumptions", "Assumptions", kept(book, "assumption", figures))}${movesSection(book)}${section("calculation", "Calculation", calculation(book, figures))}${section("provenance", "What stands on what", whyFolded(book))}${section("notebook", "Notebook", h`<details><summary>Source of ${record.notebook.name}</summary><pre tabindex="0">${record.notebook.source}</pre></details>\n`)}${colophon(record, await sha256(json))}</main>
 ${PANEL}<script type="application/json" id="record">${raw(embedded(json))}</script>
 <script>${raw(SCRIPT)}</script>
 </body>

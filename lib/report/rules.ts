@@ -99,12 +99,13 @@ caption { text-align: left; font-size: .85rem; padding-bottom: .3rem; }
 th, td { padding: .28rem .6rem; text-align: left; border-top: 1px solid var(--rule); vertical-align: baseline; } th { font-size: .82rem; font-weight: 600; } thead th { border-top: 0; }
 .figures { white-space: nowrap; }
 
+.on-paper { display: none; margin-left: var(--left); }
 .why { margin-left: var(--left); columns: 2; column-gap: 2rem; font-size: .86rem; line-height: 1.38; }
 .why li { position: relative; break-inside: avoid; padding: .3rem 0 .3rem 2rem; border-top: 1px solid var(--rule); }
 .why .no { position: absolute; left: 0; top: .3rem; min-width: 1.5rem; } .why .what { font-weight: 600; }
 .why p:not(.what) { display: inline; } .why p:not(.what)::after { content: "  "; white-space: pre; }
 .why li:target, .line:target > .matter { background: var(--wash); }
-details { margin-left: var(--left); } summary { cursor: pointer; padding: .3rem 0; } details pre { border: 1px solid var(--rule); padding: .7rem; margin-top: .5rem; }
+details { margin-left: var(--left); } details > .why { margin-left: 0; } summary { cursor: pointer; padding: .3rem 0; } details pre { border: 1px solid var(--rule); padding: .7rem; margin-top: .5rem; }
 .colophon { margin: 2.5rem 0 0 var(--left); padding-top: .6rem; border-top: 1px solid var(--rule); font-size: .82rem; color: var(--quiet); overflow-wrap: anywhere; }
 
 .banner { position: sticky; top: 0; z-index: 4; padding: .55rem 1rem; background: var(--ink); color: #fff; font-weight: 700; text-align: center; letter-spacing: .03em; }
@@ -144,6 +145,12 @@ const NARROW = `
 }
 `;
 
+const HINTS = `
+@media screen and (max-width: 46rem) {
+  .broad::before, figure .scroll::before { content: "moves sideways: more at the right"; display: block; position: sticky; left: 0; width: fit-content; font-size: .75rem; color: var(--quiet); }
+}
+`;
+
 const PRINT = `
 @media print {
   :root { --left: 11mm; --right: 36mm; --desk: #fff; }
@@ -152,6 +159,7 @@ const PRINT = `
   main { max-width: none; margin: 0; padding: 0; box-shadow: none; }
   .contents, .skip, #trace, details { display: none; }
   h2[id="notebook"] { display: none; }
+  .on-paper { display: block; margin-left: 0; }
   a, .num, .ref { color: inherit; text-decoration: none; border: 0; }
   h2 { margin-top: 7mm; }
   h2, h3, h4, h5, h6, .body-name, caption, .line.text:has(> .matter > .prose > :is(h3, h4, h5, h6):last-child) { break-after: avoid; }
@@ -176,4 +184,4 @@ const PRINT = `
 }
 `;
 
-export const RULES: string = SCREEN + NARROW + PRINT;
+export const RULES: string = SCREEN + NARROW + HINTS + PRINT;

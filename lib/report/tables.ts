@@ -1,8 +1,9 @@
 // Tables, whose numbers lead to what they stand on like any other.
 
-import { bandsOf, type TableCell, type TableEntry } from "../sheet/index.ts";
+import { bandsOf, symbolTex, type TableCell, type TableEntry } from "../sheet/index.ts";
 import { bandInCell, noteOnBands } from "./bands.ts";
 import { type Html, h, type Part } from "./html.ts";
+import { maths } from "./maths.ts";
 import { cellLink } from "./references.ts";
 
 /** Cells of a table that stand on the same entries. */
@@ -31,9 +32,16 @@ const LONG = 40;
 const textCell = (text: string): Html =>
   text.length > LONG ? h`<td class="words">${text}</td>` : h`<td>${text}</td>`;
 
+/** The symbol of a result is set as it is in its own line. */
+const heading = (text: string): Part =>
+  /^[A-Za-z][A-Za-z0-9]*(_[A-Za-z0-9]+)+$/.test(text) ? maths(symbolTex(text)) : text;
+
+/** More columns than this are not all seen on a telephone, and the page says so there. */
+const SEEN = 3;
+
 function rowOf(entry: TableEntry, row: readonly TableCell[], keys: readonly string[]): Html {
   return h`<tr>${row.map((cell, i): Part => {
-    if (typeof cell === "string") return i === 0 ? h`<th scope="row">${cell}</th>` : textCell(cell);
+    if (typeof cell === "string") return i === 0 ? h`<th scope="row">${heading(cell)}</th>` : textCell(cell);
     return h`<td class="figures">${cellLink(entry.id, keys.indexOf(keyOf(cell)), cell.value.text)}${bandInCell(cell.band)}</td>`;
   })}</tr>
 `;
@@ -42,7 +50,7 @@ function rowOf(entry: TableEntry, row: readonly TableCell[], keys: readonly stri
 /** A table with its caption, in a frame that scrolls where the page is narrow. */
 export function table(entry: TableEntry): Html {
   const keys = cellGroups(entry).map((g) => JSON.stringify(g.uses));
-  return h`<div class="scroll" tabindex="0" role="region" aria-label="${entry.caption}"><table>
+  return h`<div class="scroll${entry.columns.length > SEEN ? " broad" : ""}" tabindex="0" role="region" aria-label="${entry.caption}"><table>
 <caption>${entry.caption}</caption>
 <thead><tr>${entry.columns.map((c) => (c === "" ? h`<td></td>` : h`<th scope="col">${c}</th>`))}</tr></thead>
 <tbody>

@@ -59,3 +59,16 @@ function cellRows(book: Book, entry: Extract<Entry, { kind: "table" }>, label: s
 export const why = (book: Book): Html =>
   h`<ol class="why">
 ${book.items.filter((item) => item.label !== "").map((item) => row(book, item))}</ol>`;
+
+/** More rows than this are folded on the screen and left out in print, where they would take more pages than the calculation. */
+const MOST = 200;
+
+/** The list as it stands on the page: whole, or folded where it is long. A number clicked shows its row all the same. */
+export function whyFolded(book: Book): Html {
+  const count = book.items.filter((item) => item.label !== "").length;
+  if (count <= MOST) return why(book);
+  return h`<details><summary>All ${count} lines, each with what it stands on and what stands on it</summary>
+${why(book)}</details>
+<p class="on-paper">The list of what stands on what has ${count} lines and is not printed: beside every line of the calculation stands what it stands on. In this file opened on a screen, any number shows it when clicked.</p>
+`;
+}

@@ -16,6 +16,7 @@ export {
   sum,
   valueAt,
 } from "./piecewise.ts";
+export { rigidMotionWords, stillMotion } from "./rigid-motion.ts";
 export { crossings, polynomialRoots, roots, turningPoints, type Zeros, zeros } from "./roots.ts";
 export type {
   Action,

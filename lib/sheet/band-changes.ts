@@ -2,6 +2,7 @@
 
 import { bandText } from "./band-words.ts";
 import type { BandChange } from "./change.ts";
+import { earlierCells } from "./earlier-cells.ts";
 import type { Entry, ResultBand } from "./record.ts";
 import { bandsOf, type NamedBand, readerName } from "./values.ts";
 
@@ -14,8 +15,10 @@ const NONE = "no band";
 export function bandChange(before: Entry, after: Entry): readonly BandChange[] {
   const [was, is] = [bandsOf(before), bandsOf(after)];
   const old = new Map(was.map((one) => [one.name, one]));
-  const now = new Set(is.map(({ name }) => name));
-  const otherwise = is.filter(({ name, band }) => differs(old.get(name)?.band, band));
+  const cells = before.kind === "table" && after.kind === "table" ? earlierCells(before, after) : undefined;
+  const earlier = (name: string): string => (cells === undefined ? name : (cells.get(name) ?? ""));
+  const now = new Set(is.map(({ name }) => earlier(name)));
+  const otherwise = is.filter(({ name, band }) => differs(old.get(earlier(name))?.band, band));
   const gone = was.filter(({ name }) => !now.has(name));
   if (otherwise.length + gone.length === 0) return [];
   const governing = after.kind === "result" && after.governing;

@@ -15,7 +15,7 @@ import { basisOf, quantityOf, useOf } from "./basis.ts";
 import { calculate, type SymbolEntry } from "./calculate.ts";
 import { compare } from "./compare.ts";
 import { displayOf, formulaDisplay } from "./display.ts";
-import { type Draft, symbolOf } from "./draft.ts";
+import { type Draft, symbolOf, type Unique } from "./draft.ts";
 import { checkedHead } from "./head.ts";
 import type { CellRef } from "./host.ts";
 import type { CheckResult, Ledger } from "./ledger.ts";
@@ -31,6 +31,7 @@ import {
   type ResultBand,
   type ShownValue,
 } from "./record.ts";
+import { Sentences } from "./sentences.ts";
 import { shownAsWritten, shownGiven, shownValue } from "./shown.ts";
 import { EntryStore, readUse } from "./store.ts";
 import { checkedSymbol, symbolTex, unknownSymbol } from "./symbol.ts";
@@ -41,6 +42,7 @@ export class Book implements Ledger {
   figures: number;
   readonly #store = new EntryStore();
   readonly #overrides = new Overrides();
+  readonly #notConsidered = new Sentences();
 
   constructor(head: Head, figures: number) {
     this.head = checkedHead(head);
@@ -186,12 +188,23 @@ export class Book implements Ledger {
     return this.put({ kind: "query", id: idFromText("query", checkedText("the query", text)), uses, text });
   }
 
+  notConsidered(...sentences: readonly string[]): readonly string[] {
+    if (sentences.length === 0)
+      throw new Error(
+        'notConsidered: nothing is named; write a sentence for each thing left out, sheet.notConsidered("wind on the gable")',
+      );
+    const checked = sentences.map((sentence) => checkedText("notConsidered: a sentence", sentence).trim());
+    this.#notConsidered.add(checked);
+    return Object.freeze(checked);
+  }
+
   text(cell: CellRef, markdown: string): Entry {
     return this.#store.put({ kind: "text", id: `text ${cell.id}`, uses: [], markdown }, cell);
   }
 
-  put(draft: Draft): Entry {
+  put(draft: Draft, unique?: Unique): Entry {
     for (const use of draft.uses) readUse(use);
+    if (unique !== undefined) this.#store.refuseSecond(unique, draft.id);
     return this.#store.put(draft);
   }
 
@@ -209,10 +222,16 @@ export class Book implements Ledger {
 
   endCell(cellId: string): void {
     this.#store.endCell(cellId);
+    this.#notConsidered.endCell(cellId);
   }
 
-  setFromOutside<D extends Dimension>(name: string, value: Quantity<D>, written: string): Quantity<D> {
-    return this.#overrides.apply(name, value, written);
+  setFromOutside<D extends Dimension>(
+    name: string,
+    value: Quantity<D>,
+    written: string,
+    span?: Quantity<D>,
+  ): Quantity<D> {
+    return this.#overrides.apply(name, value, written, span);
   }
 
   unusedOverrides(): readonly string[] {
@@ -220,12 +239,14 @@ export class Book implements Ledger {
   }
 
   record(about: Parameters<Ledger["record"]>[0]): CalculationRecord {
+    const notConsidered = this.#notConsidered.all();
     return Object.freeze({
       format: RECORD_FORMAT,
       version: RECORD_VERSION,
       complete: about.complete,
       ...(about.failure === undefined ? {} : { failure: about.failure }),
       head: this.head,
+      ...(notConsidered.length === 0 ? {} : { notConsidered }),
       overrides: Object.freeze(this.#overrides.used()),
       entries: Object.freeze(this.entries()),
       notebook: Object.freeze({ ...about.notebook }),

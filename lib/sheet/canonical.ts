@@ -5,31 +5,64 @@
 /** A value in canonical JSON. A field that is undefined is left out. Throws naming the place of a number that is not
  *  finite, of a lone surrogate, and of anything JSON has no form for. */
 export function canonicalJson(value: unknown, place = "record"): string {
-  switch (typeof value) {
-    case "boolean":
-      return String(value);
-    case "number":
-      if (!Number.isFinite(value)) throw new Error(`${place} is ${value}; a finite number is wanted`);
-      return JSON.stringify(value);
-    case "string":
-      if (/\p{Cs}/u.test(value)) throw new Error(`${place} holds half a character (a lone surrogate)`);
-      return JSON.stringify(value);
-    case "object":
-      return value === null ? "null" : Array.isArray(value) ? list(value, place) : members(value, place);
+  const text = written(value);
+  if (text === undefined) throw new Error(faultIn(value, place) ?? `${place} cannot be written`);
+  return text;
+}
+
+const namesOf = (value: object): readonly string[] =>
+  Object.keys(value)
+    .filter((name) => value[name as keyof object] !== undefined)
+    .sort();
+
+/** The text of a value; nothing where JSON has no form for it or for what is in it. */
+function written(value: unknown): string | undefined {
+  if (faultOf(value) !== undefined) return undefined;
+  if (typeof value !== "object" || value === null) return JSON.stringify(value);
+  const parts: string[] = [];
+  if (Array.isArray(value)) {
+    for (const member of value) {
+      const text = written(member);
+      if (text === undefined) return undefined;
+      parts.push(text);
+    }
+    return `[${parts.join()}]`;
   }
-  throw new Error(`${place} is ${typeof value}; JSON has no form for that`);
+  for (const name of namesOf(value)) {
+    const text = written(value[name as keyof object]);
+    if (text === undefined) return undefined;
+    parts.push(`${JSON.stringify(name)}:${text}`);
+  }
+  return `{${parts.join()}}`;
 }
 
-function list(values: readonly unknown[], place: string): string {
-  return `[${values.map((value, i) => canonicalJson(value, `${place}[${i}]`)).join()}]`;
+/** What keeps a value itself, not what is in it, from being written; in words that follow its place. */
+function faultOf(value: unknown): string | undefined {
+  switch (typeof value) {
+    case "number":
+      return Number.isFinite(value) ? undefined : `is ${value}; a finite number is wanted`;
+    case "string":
+      return /\p{Cs}/u.test(value) ? "holds half a character (a lone surrogate)" : undefined;
+    case "boolean":
+    case "object":
+      return undefined;
+  }
+  return `is ${typeof value}; JSON has no form for that`;
 }
 
-function members(value: object, place: string): string {
-  const written = Object.entries(value)
-    .filter(([, member]) => member !== undefined)
-    .sort(([a], [b]) => (a < b ? -1 : a > b ? 1 : 0))
-    .map(([name, member]) => `${JSON.stringify(name)}:${canonicalJson(member, `${place}.${name}`)}`);
-  return `{${written.join()}}`;
+/** The first fault, with its place: looked for only where there is one, as records are large. */
+function faultIn(value: unknown, place: string): string | undefined {
+  const fault = faultOf(value);
+  if (fault !== undefined) return `${place} ${fault}`;
+  if (typeof value !== "object" || value === null) return undefined;
+  const members: readonly (readonly [string, unknown])[] = Array.isArray(value)
+    ? value.map((member, i) => [`${place}[${i}]`, member])
+    : namesOf(value).map((name) => [`${place}.${name}`, value[name as keyof object]]);
+  for (const [where, member] of members) {
+    const found = faultIn(member, where);
+    if (found !== undefined) return found;
+  }
+  return undefined;
 }
 
 /** SHA-256 of a text in UTF-8, or of bytes, as 64 hexadecimal digits. */

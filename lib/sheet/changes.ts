@@ -10,6 +10,7 @@ import type {
   ValueChange,
   WordChange,
 } from "./change.ts";
+import { earlierCells } from "./earlier-cells.ts";
 import type {
   AssumptionEntry,
   CalculationRecord,
@@ -161,8 +162,9 @@ function wordsOf(entry: Ground): string {
 function resultChanges([before, after]: Pair, differs: Differs): readonly ResultChange[] {
   if (after.kind === "given" || after.kind === "assumption" || before.kind !== after.kind) return [];
   const earlier = new Map(valuesOf(before).map((one) => [one.name, one.value]));
+  const cells = before.kind === "table" && after.kind === "table" ? earlierCells(before, after) : undefined;
   return valuesOf(after).flatMap(({ id, name, value }) => {
-    const was = earlier.get(name);
+    const was = earlier.get(cells === undefined ? name : (cells.get(name) ?? ""));
     if (was === undefined || !differs(was, value)) return [];
     const words = (after.kind === "table" ? cellNames(after).get(name) : undefined) ?? readerName(after);
     return {

@@ -7,6 +7,12 @@ type Without<E, K extends PropertyKey> = E extends unknown ? Omit<E, K> : never;
 /** An entry without what the ledger adds: version, cell, and whether it is out of date. */
 export type Draft = Without<Entry, "version" | "cell" | "outOfDate">;
 
+/** What an entry is called by its users, where its id must not be taken twice: "load case G", and what to change: "key". */
+export interface Unique {
+  readonly called: string;
+  readonly change: string;
+}
+
 /** The entry and everything in it frozen. */
 export function frozen<T>(value: T): T {
   if (typeof value !== "object" || value === null || Object.isFrozen(value)) return value;

@@ -3,8 +3,9 @@
 export { bandCellTexts, bandText, isSettled, tableBandNote } from "./band-words.ts";
 export { canonicalDigest, canonicalJson, sha256 } from "./canonical.ts";
 export { changesBetween, isUnchanged, shareOf } from "./changes.ts";
+export { bandInShort, type ChangedGroup, condensed, wordDifference } from "./condensed.ts";
 export { escaped, formulaDisplay, lineDisplay } from "./display.ts";
-export type { Draft } from "./draft.ts";
+export type { Draft, Unique } from "./draft.ts";
 export { attachHost, type CellRef, type Host, host } from "./host.ts";
 export type { CheckResult, DimensionAsked, Ledger } from "./ledger.ts";
 export { toMathML } from "./mathml.ts";

@@ -9,7 +9,7 @@ import type {
   DimensionOfUnit,
   Quantity,
 } from "../quantity/index.ts";
-import type { Draft } from "./draft.ts";
+import type { Draft, Unique } from "./draft.ts";
 import type { CellRef } from "./host.ts";
 import type { AssumptionEntry, CalculationRecord, Entry, Failure, Head, ResultBand } from "./record.ts";
 
@@ -58,11 +58,14 @@ export interface Ledger {
   conclude(text: string): Entry;
   /** A question to be settled by the engineer or the checker. */
   query(text: string, uses?: readonly string[]): Entry;
+  /** What was left out of consideration, a sentence each; the cover names it before the usual ones. No line of the calculation:
+   *  a cell run again replaces its own. */
+  notConsidered(...sentences: readonly string[]): readonly string[];
   /** The text of a text cell. */
   text(cell: CellRef, markdown: string): Entry;
   /** Stores an entry another room made; adds its version and cell. Answers with the entry stored, whose id has a
-   *  number added when the one asked for was taken. */
-  put(draft: Draft): Entry;
+   *  number added when the one asked for was taken; a `unique` one is refused then, as a symbol is. */
+  put(draft: Draft, unique?: Unique): Entry;
   /** The value of a symbol; throws on an unknown one, naming the nearest. */
   lookup(symbol: string): Quantity;
   entry(id: string): Entry | undefined;
@@ -70,8 +73,14 @@ export interface Ledger {
   entries(): readonly Entry[];
   /** Drops what earlier runs of a cell recorded and its last run did not. */
   endCell(cellId: string): void;
-  /** A value the notebook wrote, or the one set from outside under this name; `written` is how the notebook says it. */
-  setFromOutside<D extends Dimension>(name: string, value: Quantity<D>, written: string): Quantity<D>;
+  /** A value the notebook wrote, or the one set from outside under this name; `written` is how the notebook says it. A value that may
+   *  be set as a part of a span, "0.2 L", says that span. */
+  setFromOutside<D extends Dimension>(
+    name: string,
+    value: Quantity<D>,
+    written: string,
+    span?: Quantity<D>,
+  ): Quantity<D>;
   /** Symbols set from outside that no given or assumption has taken up. */
   unusedOverrides(): readonly string[];
   record(about: {

@@ -39,6 +39,10 @@ const signs: Readonly<Record<string, string>> = {
 
 let parser: ((text: string) => MathNode) | undefined;
 
+/** Trees of the formulas read last: a notebook reads the same ones on every run. Nobody changes a tree. */
+const trees = new Map<string, Node>();
+const KEPT = 500;
+
 /** A mathjs instance with the parser in it and nothing else; made when the first formula is read. */
 function newParser(): (text: string) => MathNode {
   if (parseDependencies === undefined) throw new Error("mathjs came without its parser");
@@ -47,10 +51,15 @@ function newParser(): (text: string) => MathNode {
 
 function parse(text: string): Node {
   if (typeof text !== "string" || text.trim() === "") throw new Error("the formula is empty");
+  const known = trees.get(text);
+  if (known) return known;
   parser ??= newParser();
   const plain = spellGreek(text.replace(/[×·−≤≥²³π]/g, (sign) => signs[sign] ?? sign));
   try {
-    return parser(plain) as unknown as Node;
+    const tree = parser(plain) as unknown as Node;
+    if (trees.size >= KEPT) trees.clear();
+    trees.set(text, tree);
+    return tree;
   } catch (error) {
     throw new Error(`"${text}" cannot be read as a formula: ${(error as Error).message}`);
   }

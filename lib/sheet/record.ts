@@ -35,6 +35,8 @@ export interface ResultBand {
   };
   /** The middle of the true values over the hand value, less 1, shown in percent; or less the hand value. */
   readonly bias: ShownValue;
+  /** Only one frame was tried, nothing that matters being unknown. */
+  readonly single?: true;
   /** What was tried and what was not. */
   readonly words: string;
   /** What the band stands on: the entry that says what is not known, then what the frames tried were made of. The value beside it
@@ -268,7 +270,7 @@ export interface CalculationRecord {
   readonly complete: boolean;
   readonly failure?: Failure;
   readonly head: Head;
-  /** What the engineer says was left out of consideration, a sentence each. */
+  /** What the engineer says was left out of consideration, a sentence each, in the order of the sheet. */
   readonly notConsidered?: readonly string[];
   readonly overrides: readonly { readonly symbol: string; readonly written: string; readonly set: string }[];
   readonly entries: readonly Entry[];

@@ -18,6 +18,7 @@ const band = z
     measure: z.enum(["ratio", "difference"]),
     against: z.strictObject(four).readonly(),
     bias: shownForm,
+    single: z.exactOptional(z.literal(true)),
     words: text,
     uses: list(use),
   })

@@ -1,6 +1,6 @@
 // The entries of a ledger: their versions, the cells that made them, their order, and whether they are out of date.
 
-import { type Draft, frozen, substance, symbolOf } from "./draft.ts";
+import { type Draft, frozen, substance, symbolOf, type Unique } from "./draft.ts";
 import { type CellRef, type Host, host } from "./host.ts";
 import type { Entry } from "./record.ts";
 import { bandUses } from "./values.ts";
@@ -80,7 +80,7 @@ export class EntryStore {
   #freeId(draft: Draft, at: CellRef | undefined): string {
     const symbol = symbolOf(draft);
     if (symbol !== undefined) {
-      this.#refuseSecond(symbol, draft.id, at);
+      this.refuseSecond({ called: symbol, change: "symbol" }, draft.id, at);
       return draft.id;
     }
     if (draft.kind === "text") return draft.id; // one text cell, one entry
@@ -94,18 +94,20 @@ export class EntryStore {
     return there !== undefined && (this.#made.has(id) || there.cell?.id !== at?.id);
   }
 
-  #refuseSecond(symbol: string, id: string, at: CellRef | undefined): void {
+  /** Throws when another cell has an entry of this id, or the running cell has made it already. */
+  refuseSecond({ called, change }: Unique, id: string, at: CellRef | undefined = host().cell): void {
+    this.#newRun(at);
     const there = this.#stored.get(id);
     if (there === undefined || at === undefined) return;
     if (there.cell?.id !== at.id) {
       const first =
         there.cell === undefined ? "before the first cell" : `in cell ${this.#number(there.cell)}`;
       throw new Error(
-        `${symbol} is defined ${first} and again in cell ${at.number}; give one of them another symbol`,
+        `${called} is defined ${first} and again in cell ${at.number}; give one of them another ${change}`,
       );
     }
     if (this.#made.has(id)) {
-      throw new Error(`${symbol} is defined twice in cell ${at.number}; give one of them another symbol`);
+      throw new Error(`${called} is defined twice in cell ${at.number}; give one of them another ${change}`);
     }
   }
 

@@ -11,8 +11,16 @@ export interface NamedValue {
   readonly value: ShownValue;
 }
 
-const cellName = ({ id, columns }: TableEntry, row: number, column: number): string =>
-  `${id}, row ${row + 1}, ${columns[column] ?? `column ${column + 1}`}`;
+const isHeadedTwice = ({ columns }: TableEntry, column: number): boolean =>
+  columns.indexOf(columns[column] ?? "") !== columns.lastIndexOf(columns[column] ?? "");
+
+/** The name of a cell; a heading that is there twice says its column too. */
+export function cellName(entry: TableEntry, row: number, column: number): string {
+  const { id, columns } = entry;
+  const heading = columns[column];
+  const which = isHeadedTwice(entry, column) ? `${heading}, column ${column + 1}` : heading;
+  return `${id}, row ${row + 1}, ${which ?? `column ${column + 1}`}`;
+}
 
 /** The numbers an entry shows: its own value, or the cells of a table. */
 export function valuesOf(entry: Entry): readonly NamedValue[] {
@@ -62,12 +70,14 @@ export function cellNames(entry: TableEntry): ReadonlyMap<string, string> {
   const short = entry.caption.replace(/[:(].*$/s, "").trim();
   const names = entry.rows.flatMap((row, i) => {
     const numbers = row.findIndex((cell) => typeof cell !== "string");
-    const label = row.slice(0, numbers === -1 ? 1 : numbers).join(", ");
-    return row.flatMap((cell, j) =>
-      typeof cell === "string"
-        ? []
-        : [[cellName(entry, i, j), `${label}: ${entry.columns[j] ?? ""} (${short})`] as const],
-    );
+    const first = row.slice(0, numbers === -1 ? 1 : numbers).join(", ");
+    return row.flatMap((cell, j) => {
+      if (typeof cell === "string") return [];
+      // under a heading that is there twice the words just before the number tell which it is
+      const beside = row.slice(1, j).findLast((one) => typeof one === "string");
+      const label = isHeadedTwice(entry, j) && beside !== undefined ? `${String(row[0])}, ${beside}` : first;
+      return [[cellName(entry, i, j), `${label}: ${entry.columns[j] ?? ""} (${short})`] as const];
+    });
   });
   return new Map(names);
 }

@@ -3,9 +3,10 @@
 // A joint goes with the member ends that are rigid there. Where all ends are pinned it goes with the first of them that is
 // not a bar, so that no joint is a body without need; the other ends meet it by a pin with two forces. A bar, pinned at both
 // ends and loaded at its joints only, is no body either: it passes one force along itself. A joint where nothing but bars
-// meets stands free by itself.
+// meets stands free by itself; so does one whose rotation a support holds and no member end, for on a pinned member its
+// moment would be one unknown too many.
 
-import { byName, type Load, type Member, type Release, type Structure } from "../structure/index.ts";
+import { byName, type Load, type Member, type Release, resists, type Structure } from "../structure/index.ts";
 
 export interface Connection {
   readonly member: string;
@@ -31,8 +32,14 @@ export function connections(structure: Structure, loads: readonly Load[]): reado
     const bar = !busy.has(member.name) && isPin(member.releases.start) && isPin(member.releases.end);
     return [endOf(member, "start", bar), endOf(member, "end", bar)];
   });
+  const heldAgainstTurning = new Set(
+    structure.supports.flatMap((s) => (resists(s, "rotation") ? [s.joint] : [])),
+  );
   const owners = byName(
-    structure.joints.map(({ name }) => ({ name, owner: ownerOf(ends.filter((e) => e.joint === name)) })),
+    structure.joints.map(({ name }) => ({
+      name,
+      owner: heldAgainstTurning.has(name) ? undefined : ownerOf(ends.filter((e) => e.joint === name)),
+    })),
   );
   return ends.map((end) => ({
     ...end,

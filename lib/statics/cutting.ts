@@ -56,8 +56,9 @@ export function endsOf(
   s: Segment,
 ): readonly Connection[] {
   return all.filter((c) => {
+    if (c.member !== s.member) return false;
     const node = nodes[c.end === "start" ? s.from : s.to];
-    return c.member === s.member && node?.kind === "joint" && node.name === c.joint;
+    return node?.kind === "joint" && node.name === c.joint;
   });
 }
 

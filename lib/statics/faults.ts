@@ -13,6 +13,7 @@ export type StaticsFault =
       readonly hinges: number;
     }
   | { readonly kind: "self-stress in a mechanism"; readonly words: string }
+  | { readonly kind: "too few equations"; readonly unknowns: readonly string[]; readonly equations: number }
   | { readonly kind: "differs"; readonly what: string; readonly sequence: number; readonly whole: number };
 
 /** An error of the statics; `fault` holds the data the words were made from. */
@@ -36,6 +37,8 @@ function wordsOf(fault: StaticsFault): string {
       return `the structure with ${hingesText(fault.hinges)} does not balance this load: ${fault.words}; take a hinge out or treat the load by another method`;
     case "self-stress in a mechanism":
       return `the free bodies have no single answer: ${fault.words}`;
+    case "too few equations":
+      return `internal check failed: the bodies give ${counted(fault.equations, "independent equation")} for ${counted(fault.unknowns.length, "unknown")} (${fault.unknowns.join(", ")}); please report this structure`;
     case "differs":
       return `internal check failed: ${fault.what} is ${fault.sequence} by free bodies and ${fault.whole} by the whole structure; please report this structure`;
   }

@@ -1,14 +1,11 @@
 // The motion of a mechanism in the trade's words.
 
-import type { Mechanism } from "../results/index.ts";
+import { type Mechanism, rigidMotionWords, stillMotion as still } from "../results/index.ts";
 import { axisOf, calledBy, memberNamed, type Skeleton, type Structure } from "../structure/index.ts";
-import { and, pointText } from "./words.ts";
+import { and } from "./words.ts";
 
 type Moved = Mechanism["points"][number];
 type Turn = Mechanism["turns"][number];
-
-/** Displacements below this part of the largest, which is 1, are none. */
-const still = 1e-6;
 
 /** One line without a full stop: "sway: B and C move sideways together, columns AB and CD turn about A and D". */
 export function motionWords(
@@ -17,29 +14,7 @@ export function motionWords(
   points: readonly Moved[],
   turns: readonly Turn[],
 ): string {
-  return rigidWords(skeleton, points, turns) ?? partWords(structure, skeleton, points, turns);
-}
-
-/** The whole structure moving as one body, when it does. */
-function rigidWords(
-  { nodes, segments }: Skeleton,
-  points: readonly Moved[],
-  turns: readonly Turn[],
-): string | undefined {
-  const size = Math.max(...segments.map((s) => s.length));
-  const rotation = turns[0]?.rotation ?? 0;
-  if (turns.some((t) => Math.abs(t.rotation - rotation) * size > still)) return undefined;
-  const [first, at] = [points[0], nodes[0]];
-  if (first === undefined || at === undefined) return undefined;
-  if (Math.abs(rotation) * size <= still) {
-    if (Math.abs(first.uy) <= still) return "the whole structure slides sideways";
-    return Math.abs(first.ux) <= still
-      ? "the whole structure moves up or down"
-      : "the whole structure slides at a slope";
-  }
-  const [x, y] = [at.x - first.uy / rotation, at.y + first.ux / rotation];
-  const centre = nodes.find((n) => Math.hypot(n.x - x, n.y - y) <= still * size);
-  return `the whole structure turns about ${centre?.name ?? pointText(x, y)}`;
+  return rigidMotionWords(skeleton, points, turns) ?? partWords(structure, skeleton, points, turns);
 }
 
 function partWords(

@@ -2,6 +2,7 @@
 
 import { eliminate } from "./elimination.ts";
 import { coefficientIn, type Equation, type Found, termsOf, unknownsIn } from "./equations.ts";
+import { StaticsError } from "./faults.ts";
 
 export interface Answer {
   readonly equation: Equation;
@@ -39,7 +40,7 @@ function smallSet(
   return extend([], 0);
 }
 
-/** Independent equations, in order, until there are as many as unknowns. */
+/** Independent equations, in order, until there are as many as unknowns. Throws where there are too few. */
 function wholeSet(equations: readonly Equation[], known: ReadonlyMap<string, Found>): readonly Equation[] {
   const names = unknownsOf(equations, known);
   const chosen: Equation[] = [];
@@ -47,9 +48,9 @@ function wholeSet(equations: readonly Equation[], known: ReadonlyMap<string, Fou
   for (const equation of equations) {
     const row = Float64Array.from(names, (name) => coefficientIn(equation, name));
     if (grows(basis, row)) chosen.push(equation);
-    if (chosen.length === names.length) break;
+    if (chosen.length === names.length) return chosen;
   }
-  return chosen;
+  throw new StaticsError({ kind: "too few equations", unknowns: names, equations: chosen.length });
 }
 
 /** Whether a row is independent of the orthonormal basis; if so it is added to it. */

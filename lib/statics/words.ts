@@ -17,8 +17,3 @@ export function ordinal(n: number): string {
   const ending = teen ? "th" : (["th", "st", "nd", "rd"][n % 10] ?? "th");
   return `${n}${ending}`;
 }
-
-/** A point without a name: "the point x = 2 m, y = 3.5 m". */
-export function pointText(x: number, y: number): string {
-  return `the point x = ${Number(x.toPrecision(4))} m, y = ${Number(y.toPrecision(4))} m`;
-}

@@ -63,6 +63,8 @@ export type StructureFault =
       readonly begin: number;
       readonly end: number;
     }
+  | { readonly kind: "reversed"; readonly what: string; readonly begin: string; readonly end: string }
+  | { readonly kind: "off member"; readonly what: string; readonly place: string }
   | { readonly kind: "couple at hinge"; readonly what: string; readonly hinge: string }
   | { readonly kind: "couple on pin"; readonly what: string; readonly joint: string }
   | { readonly kind: "no load"; readonly what: string }
@@ -138,6 +140,10 @@ function wordsOf(fault: StructureFault): string {
       return `hinges ${fault.hinges.join(" and ")} are at the same place, ${metres(fault.at)} along member ${fault.member}; keep one`;
     case "empty stretch":
       return `${fault.what} on member ${fault.member} runs from ${metres(fault.begin)} to ${metres(fault.end)}; its end must lie beyond its beginning`;
+    case "reversed":
+      return `${fault.what} runs from ${fault.begin} to ${fault.end}; its end must lie beyond its beginning, both measured from the member's start`;
+    case "off member":
+      return `${fault.what} is at ${fault.place}, outside its member; from 0 L to 1 L is wanted, measured from the member's start`;
     case "couple at hinge":
       return `${fault.what} acts exactly at hinge ${fault.hinge}, which takes no moment; move it to one side of the hinge`;
     case "couple on pin":

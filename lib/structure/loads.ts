@@ -5,7 +5,7 @@
 import { type Measure, type Quantity, readMeasure } from "../quantity/index.ts";
 import { StructureError } from "./faults.ts";
 import { deepFreeze } from "./freeze.ts";
-import { type Along, readPlace } from "./place.ts";
+import { type Along, checkOnSome, checkStretch, readPlace } from "./place.ts";
 import { mergeSources } from "./sources.ts";
 import type { DistributedLoad, JointLoad, MemberPointLoad, Sources } from "./types.ts";
 
@@ -77,6 +77,7 @@ function lineLoad(
 ): DistributedLoad {
   const begin = readPlace(from ?? "0 L", `beginning of the load on ${member}`);
   const end = readPlace(to ?? "1 L", `end of the load on ${member}`);
+  checkStretch(begin.place, end.place, `the load on ${member}${label === "" ? "" : ` (${label})`}`);
   if (per !== undefined) checkProjection(per, member);
   return deepFreeze({
     kind: "distributed",
@@ -110,6 +111,7 @@ export function pointLoad(
 ): MemberPointLoad {
   const force = readMeasure(P, "force", `point load on ${member}`);
   const place = readPlace(at, `point load on ${member}`);
+  checkOnSome(place.place, `the point load on ${member}${label === "" ? "" : ` (${label})`}`);
   const {
     direction: [x, y],
     ...axes
@@ -135,6 +137,7 @@ export function coupleLoad(
 ): MemberPointLoad {
   const couple = readMeasure(C, "moment", `couple on ${member}`);
   const place = readPlace(at, `couple on ${member}`);
+  checkOnSome(place.place, `the couple on ${member}${label === "" ? "" : ` (${label})`}`);
   return deepFreeze({
     kind: "member point",
     member,

@@ -17,6 +17,34 @@ export function readPlace(along: Along, what: string): { readonly place: Place; 
   return { place: { metres: length.si }, from: length.from };
 }
 
+/** Throws on a place that is on no member however long. */
+export function checkOnSome(place: Place, what: string): void {
+  const off = "metres" in place ? place.metres < 0 : place.fraction < -1e-9 || place.fraction > 1 + 1e-9;
+  if (off) throw new StructureError({ kind: "off member", what, place: placeText(place) });
+}
+
+/** Throws on a stretch that ends at its beginning or before it, as far as that shows without the member's length. */
+export function checkStretch(begin: Place, end: Place, what: string): void {
+  checkOnSome(begin, what);
+  checkOnSome(end, what);
+  const reversed =
+    "metres" in begin && "metres" in end
+      ? end.metres <= begin.metres
+      : "fraction" in begin && "fraction" in end
+        ? end.fraction <= begin.fraction
+        : isAt(begin, 1) || isAt(end, 0);
+  if (reversed)
+    throw new StructureError({ kind: "reversed", what, begin: placeText(begin), end: placeText(end) });
+}
+
+const isAt = (place: Place, fraction: 0 | 1): boolean =>
+  "fraction" in place ? place.fraction === fraction : fraction === 0 && place.metres === 0;
+
+const placeText = (place: Place): string =>
+  "metres" in place ? `${short(place.metres)} m` : `${short(place.fraction)} L`;
+
+const short = (x: number): number => Number(x.toPrecision(6));
+
 function finiteNumber(digits: string, text: string, what: string): number {
   const value = Number(digits);
   if (!Number.isFinite(value)) throw new StructureError({ kind: "place", what, text });

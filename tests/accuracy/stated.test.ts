@@ -51,10 +51,7 @@ describe("statedUnknowns", () => {
     });
     expect(stated.sizesKnown).toBe(false);
     // A = I/i²: 2 (50/12)² / (35/4)²
-    expect(stated.nominal).toEqual([
-      "columns: the measure of the others",
-      "beam: I 2, A 0.454 times those of columns",
-    ]);
+    expect(stated.nominal).toEqual(["I of beam 2 times I of columns, A of beam 0.454 times A of columns"]);
   });
 
   test.each<[string, Structure, StatedText | undefined, string[]]>([
@@ -265,18 +262,34 @@ describe("statedUnknowns", () => {
       "a range upside down",
       bare,
       { "I of beams / I of columns": "4 to 1" },
-      "I of beams / I of columns is to lie between 4 and 1",
+      '"I of beams / I of columns" is stated as "4 to 1"; wanted: numbers more than zero, of two the smaller first',
     ],
-    ["a factor below 1", bare, { "I of beams": "within 0.5" }, "I of beams is to lie between 2 and 0.5"],
-    ["nought", bare, { "I of beams": 0 }, "I of beams is to lie between 0 and 0"],
-    ["a number that is none", bare, { "I of beams": Number.NaN }, "I of beams is to lie between NaN and NaN"],
+    [
+      "a factor below 1",
+      bare,
+      { "I of beams": "within 0.5" },
+      '"I of beams" is stated as "within 0.5"; wanted: ',
+    ],
+    ["nought", bare, { "I of beams": 0 }, '"I of beams" is stated as 0; wanted: numbers more than zero'],
+    ["a number that is none", bare, { "I of beams": Number.NaN }, '"I of beams" is stated as NaN; wanted: '],
+    [
+      "fixities upside down",
+      bare,
+      { bases: "half fixed to pinned" },
+      '"bases" is stated as "half fixed to pinned"; wanted: numbers from 0 (pinned, free to turn) to 1 (fixed), of two the smaller first',
+    ],
     [
       "words that are no fixity",
       bare,
       { bases: "stiff" },
       '"bases" is stated as "stiff"; wanted is a range such as "pinned to half fixed"',
     ],
-    ["a fixity above 1", bare, { bases: "0.5 to 2" }, "the fixity at bases is to lie between 0.5 and 2"],
+    [
+      "a fixity above 1",
+      bare,
+      { bases: "0.5 to 2" },
+      '"bases" is stated as "0.5 to 2"; wanted: numbers from 0',
+    ],
     [
       "a base that is none",
       bare,

@@ -77,6 +77,15 @@ describe("subscripts", () => {
       ],
     ],
     ["roof_beam", [["roof_beam", false]]],
+    [
+      "A0_x and AB12_M",
+      [
+        ["A0", false],
+        ["x", true],
+        [" and AB12", false],
+        ["M", true],
+      ],
+    ],
     ["12.8 kN/m", [["12.8 kN/m", false]]],
   ] as const)("runs(%s)", (text, expected) => {
     expect(runs(text).map((r) => [r.text, r.lowered])).toEqual(expected);

@@ -4,7 +4,7 @@ import { afterEach, beforeEach, describe, expect, test } from "vitest";
 import { covers, sampled, statedUnknowns } from "../../lib/accuracy/index.ts";
 import { hinge } from "../../lib/guide/index.ts";
 import type { Quantity } from "../../lib/quantity/index.ts";
-import { attachHost, forgetLedger, type ResultBand } from "../../lib/sheet/index.ts";
+import { attachHost, bandText, forgetLedger, type ResultBand } from "../../lib/sheet/index.ts";
 import { beam, uniform } from "../../lib/structure/index.ts";
 import { ofKind, solved, started, twoHinges } from "./solved.ts";
 
@@ -184,7 +184,7 @@ describe("where bands are shown", () => {
     const value = hand.moment("BC", { at: "B" }) as unknown as Record<symbol, () => Record<string, string>>;
     const shown = value[Symbol.for("Jupyter.display")]?.() ?? {};
     expect(shown["text/plain"]).toMatch(
-      /^−63\.4 kN·m\ntrue value 90 % between .*bias .*; of the stiffnesses tried;/,
+      /^−63\.4 kN·m\ntrue value 90 % between .*in the middle \d+ % (more|less) than this: hand too (small|large); of the stiffnesses tried;/,
     );
     expect(shown["text/html"]).toContain("true value 90 %");
   });
@@ -215,7 +215,7 @@ describe("what is not known", () => {
     expect(assumption?.text).toContain("I of beam / I of columns 1 to 4");
     expect(assumption?.text).toContain("fixity 0 to 0.5");
     expect(assumption?.text).toContain("taken by default: A of columns 0.5 to 2 times nominal");
-    expect(assumption?.text).toContain("beam: I 2");
+    expect(assumption?.text).toContain("nominal: I of beam 2 times I of columns, A of beam ");
     expect(assumption?.because).toBe("sizes are still open");
     const table = ofKind(sheet, "table").find(({ id }) => id.startsWith("ranges of unknowns"));
     expect(table?.rows).toContainEqual([
@@ -319,5 +319,62 @@ describe("a cell run again", () => {
     const third = solve();
     expect(third.against).not.toEqual(first.against);
     expect(unknown().map(({ because }) => because)).toEqual(["now known better"]);
+  });
+});
+
+describe("bands say what they rest on when nobody stated what is not known", () => {
+  const words = (one: ReturnType<typeof solved>): string =>
+    bandOf(one, one.hand.moment("BC", { at: "B" })).words;
+
+  test("nominal ratios all 1", () => {
+    expect(words(solved())).toBe(
+      "of the stiffnesses tried; what is not known was not stated: by default nominal ratios of I all 1, each within a factor of 2; loads, geometry, cracking and second order not varied",
+    );
+  });
+
+  test("about the sections given", () => {
+    const section = { E: 210e9, I: 1e-4, A: 0.01 };
+    expect(words(solved(undefined, { sections: { all: section } }))).toMatch(
+      /not stated: by default sections as given, each within a factor of 1\.1;/,
+    );
+  });
+
+  test("about the ratios the hinges were placed by", () => {
+    const begun = started();
+    const by = {
+      by: "relative stiffness",
+      ratios: { "I of beam / I of columns": 3 },
+      because: "like halls",
+    } as const;
+    const G = begun.sheet.loadCase("G", "gravity", uniform("BC", "12 kN/m"));
+    const ends = [hinge("BC", { from: "B", ...by }), hinge("BC", { from: "C", ...by, symmetry: true })];
+    const hand = begun.sheet.freeBodies(begun.sheet.hinges(begun.frame, [G], ends));
+    expect(words({ ...begun, hand })).toMatch(
+      /by default nominal ratios of I as the hinges under G were placed by, each within a factor of 2;/,
+    );
+  });
+
+  test("stated: no word of a default", () => {
+    expect(words(solved(ratio))).toBe(covers);
+  });
+
+  test("a beam of one section: one frame was tried, and what was not", () => {
+    const { sheet } = started();
+    const frame = beam({ spans: ["6 m", "8 m"] });
+    const G = sheet.loadCase("G", "floor", uniform("AB", "12 kN/m"), uniform("BC", "12 kN/m"));
+    const set = sheet.hinges(
+      frame,
+      [G],
+      [hinge("BC", { from: "B", at: "0.2 L", because: "near a quarter" })],
+    );
+    const hand = sheet.freeBodies(set);
+    const band = bandOf({ sheet, frame, hand }, hand.moment("BC", { at: "B" }));
+    expect(band.single).toBe(true);
+    expect(bandText(band)).toMatch(
+      /^true value −\d+(\.\d+)? kN·m \(\d\.\d\d of this\) in the one frame tried$/,
+    );
+    expect(band.words).toBe(
+      "not varied: one section throughout; settlements and sections that change along a member not tried; loads, geometry, cracking and second order not varied",
+    );
   });
 });

@@ -56,6 +56,13 @@ describe("what verbs answer shows itself by what they recorded", () => {
     );
   });
 
+  test("what was not considered is shown as it was said", () => {
+    const { sheet } = solved();
+    const said = sheet.notConsidered("fire", "drift");
+    expect(displayOf(said)).toEqual({ "text/plain": "not considered:\n  fire\n  drift" });
+    expect([...said]).toEqual(["fire", "drift"]);
+  });
+
   test("a conclusion is its words, escaped where they are shown as HTML", () => {
     const { sheet } = solved();
     expect(displayOf(sheet.conclude("M <= 10 & no more"))).toEqual({

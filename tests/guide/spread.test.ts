@@ -8,7 +8,7 @@ import { hinge } from "../../lib/guide/index.ts";
 import { valueAt } from "../../lib/results/index.ts";
 import { forgetLedger } from "../../lib/sheet/index.ts";
 import { beam, buildingFrame, uniform } from "../../lib/structure/index.ts";
-import { ofKind, solved, started } from "./solved.ts";
+import { ofKind, solved, started, twoHinges } from "./solved.ts";
 
 beforeEach(() => forgetLedger());
 afterEach(() => forgetLedger());
@@ -76,9 +76,9 @@ describe("sheet.spread(pinned portal under gravity)", () => {
       "result",
       "what moves",
       "through",
-      "at least",
-      "as chosen",
-      "at greatest",
+      "at lower end",
+      "as chosen or nominal",
+      "at upper end",
     ]);
     expect(table?.rows.map(([result]) => result)).toEqual(["M_B", "M_B", "M_m", "M_m"]);
     const known = new Set(sheet.entries().map(({ id, version }) => `${id}@${version}`));
@@ -91,6 +91,52 @@ describe("sheet.spread(pinned portal under gravity)", () => {
     const svg = drawSketch(figure?.spec as RangesFigure, "f");
     expect(svg).toContain("as chosen");
     expect(figure?.alternative).toContain("M_B as chosen −63.4 kN·m");
+  });
+
+  test("leaves out of table and figure what hardly moves a result, and says what that is", () => {
+    const { sheet, hand } = solved({ "I of beam / I of columns": "1 to 4", "A of columns": "within 1.0001" });
+    sheet.result("M_B", hand.moment("BC", { at: "B" }), "knee", { governing: true });
+    sheet.result("N_A", hand.axial("AB", { at: "A" }), "column", { governing: true });
+    const { rows } = sheet.spread(hand);
+    const causes = (result: string) => rows.filter((row) => row.result === result).map(({ cause }) => cause);
+    expect(causes("N_A")).toEqual(causes("M_B"));
+    // N of a column of a symmetric frame is half the load whatever the stiffness: 60 kN
+    for (const row of rows.filter(({ result }) => result === "N_A"))
+      expect([row.least, row.chosen, row.greatest].map(({ si }) => si / -60e3)).toEqual([
+        expect.closeTo(1, 9),
+        expect.closeTo(1, 9),
+        expect.closeTo(1, 9),
+      ]);
+    const words = "moved by less than 0.5 %: M_B by A of columns and A of beam; N_A by any";
+    const table = ofKind(sheet, "table").find(({ id }) => id === "spread G");
+    expect(table?.caption).toContain(words);
+    expect(table?.rows.map(([result, cause]) => [result, cause])).toEqual([
+      ["M_B", "hinges h1 and h2 together"],
+      ["M_B", "I of beam / I of columns"],
+    ]);
+    const figure = ofKind(sheet, "figure").find(({ id }) => id === "figure spread G");
+    expect(figure?.caption).toContain(words);
+    const spec = figure?.spec as RangesFigure | undefined;
+    expect(spec?.panels.map(({ heading, bars }) => [heading, bars.length])).toEqual([["M_B, knee", 2]]);
+    expect(figure?.alternative).toContain("N_A as chosen −60.0 kN, hardly moved");
+  });
+
+  test("draws no figure where nothing moves anything", () => {
+    const { sheet, hand } = solved(stated);
+    sheet.spread(hand, { results: [hand.axial("AB", { at: "A" })] });
+    const table = ofKind(sheet, "table").find(({ id }) => id === "spread G");
+    expect(table?.rows).toEqual([]);
+    expect(table?.caption).toContain("moved by less than 0.5 %: N of AB, 0 m from its start by any");
+    expect(ofKind(sheet, "figure").some(({ id }) => id === "figure spread G")).toBe(false);
+  });
+
+  test("names hinges with their set as soon as the sheet has more than one", () => {
+    const one = solved(stated);
+    const other = one.sheet.freeBodies(twoHinges(one, "0.1 L", "S"));
+    one.sheet.result("M_B", one.hand.moment("BC", { at: "B" }), "knee", { governing: true });
+    one.sheet.result("M_S", other.moment("BC", { at: "B" }), "knee", { governing: true });
+    const causes = [one.hand, other].map((hand) => one.sheet.spread(hand).rows[0]?.cause);
+    expect(causes).toEqual(["hinges h1 and h2 together (G)", "hinges h1 and h2 together (S)"]);
   });
 
   test("takes the results asked for instead, by symbol or as the hand answered", () => {

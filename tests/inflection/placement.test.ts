@@ -138,3 +138,70 @@ describe("placement", () => {
     expect(turned.words).toContain("hinge in BC 1 m");
   });
 });
+
+describe("placement(a span beside an overhang)", () => {
+  // w L²/8 of the propped span less half of the moment at C; M = 0 where a quadratic has its roots.
+  const of = beam({ spans: ["8 m", "6 m", "2 m"], supports: ["pinned", "roller", "roller", "free"] });
+  const tip = (P: `${number} kN`) => [uniform("BC", "10 kN/m"), atJoint("D", { down: P })];
+  /** First zero from B of 10 kN/m on 6 m between moments M_B and M_C, kN·m. */
+  const zero = (M_B: number, M_C: number): number => {
+    const V = 30 + (M_C - M_B) / 6;
+    return (V - Math.sqrt(V ** 2 + 20 * M_B)) / 10;
+  };
+
+  it("from B: B free to turn to fixed, the moment at C as it is", () => {
+    const placed = placement(of, tip("10 kN"), { member: "BC", from: "B", at: "0.2 L" });
+    expect(placed.range?.least).toBe(0);
+    expect(placed.range?.most).toBeCloseTo(zero(-45 + 10, -20), 10);
+    expect(placed.words).toContain("B from free to turn to fixed, the moment at C known by statics");
+  });
+
+  it("from C: where that moment puts it", () => {
+    const placed = placement(of, tip("10 kN"), { member: "BC", from: "C", at: "0.1 L" });
+    const [free, fixed] = [zero(-20, 0), zero(-20, -35)];
+    expect(placed.range?.least).toBeCloseTo(Math.min(free, fixed), 10);
+    expect(placed.range?.most).toBeCloseTo(Math.max(free, fixed), 10);
+    expect(placed.words).toContain("the moment at C known by statics, B from free to turn to fixed");
+  });
+
+  it("an overhang without load leaves C free to turn", () => {
+    const loads = [uniform("BC", "10 kN/m")];
+    const placed = placement(of, loads, { member: "BC", from: "B", at: "0.2 L" });
+    expect(placed.range?.most).toBeCloseTo(1.5, 10);
+    expect(placed.words).toContain("C free to turn");
+    expect(() => placement(of, loads, { member: "BC", from: "C", at: "0.2 L" })).toThrow(
+      "member BC is free to turn at C",
+    );
+  });
+
+  it("a heavy overhang: no restraint at B gives a point near it", () => {
+    const placed = placement(of, tip("60 kN"), { member: "BC", from: "B", at: "0.2 L" });
+    expect([placed.range, placed.inside]).toEqual([undefined, undefined]);
+    expect(placed.words).toContain("the moment does not change sign near the left end");
+  });
+
+  it("without load of its own: 0 to L/3 from the end that holds against it", () => {
+    const loads = [atJoint("D", { down: "10 kN" })];
+    expect(placement(of, loads, { member: "BC", from: "B", at: "0.2 L" }).range).toEqual({
+      least: 0,
+      most: 2,
+    });
+    expect(placement(of, loads, { member: "BC", from: "C", at: "0.8 L" }).range).toEqual({
+      least: 4,
+      most: 6,
+    });
+  });
+
+  it("by end fixity: that of B counts, and it is said that C's is not used", () => {
+    const placed = placement(of, tip("10 kN"), { member: "BC", from: "B", fixity: { near: 1, far: 0.5 } });
+    expect(placed.distance).toBeCloseTo(zero(-35, -20), 10);
+    expect(placed.known).toEqual(["C"]);
+    expect(placed.words).toContain("0.5 at the far end, the moment at C known by statics");
+  });
+
+  it("a hinge in the overhang itself has no range", () => {
+    const placed = placement(of, tip("10 kN"), { member: "CD", from: "C", at: "0.5 L" });
+    expect(placed.range).toBeUndefined();
+    expect(placed.words).toContain("an overhang: its moment is known by statics");
+  });
+});

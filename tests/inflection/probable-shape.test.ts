@@ -40,6 +40,22 @@ const frame = (bays: number, storeys: number, bases: "pinned" | "fixed"): Struct
 const beamsOf = (of: Structure): readonly Load[] =>
   of.members.filter((m) => m.group === "beams").map((m) => uniform(m.name, "10 kN/m"));
 const overhang = beam({ spans: ["6 m", "2 m"], supports: ["pinned", "roller", "free"] });
+const spansAndTip = beam({
+  spans: ["6 m", "6 m", "2 m"],
+  supports: ["pinned", "roller", "roller", "free"],
+});
+const stubbed = structure({
+  joints: {
+    A: ["0 m", "0 m"],
+    B: ["0 m", "4 m"],
+    C: ["8 m", "4 m"],
+    D: ["8 m", "0 m"],
+    E: ["10 m", "4 m"],
+    F: ["-2 m", "4 m"],
+  },
+  members: { AB: ["A", "B"], BC: ["B", "C"], CD: ["C", "D"], CE: ["C", "E"], FB: ["F", "B"] },
+  supports: { A: "fixed", B: { x: true }, D: "fixed" },
+});
 const pinnedPortal = portal({ span: "8 m", height: "4 m", bases: "pinned" });
 const fixedPortal = portal({ span: "8 m", height: "4 m", bases: "fixed" });
 
@@ -60,6 +76,25 @@ const rows: readonly (readonly [name: string, of: Structure, loads: readonly Loa
     [pointLoad("AB", "5 kN", { at: "1.5 m" })],
   ],
   ["overhang loaded alone", overhang, on(overhang, "01")],
+  ["overhang without load, the span loaded", overhang, on(overhang, "10")],
+  ["both loaded", overhang, on(overhang, "11")],
+  [
+    "force on the joint at the tip, the span loaded",
+    overhang,
+    [...on(overhang, "10"), atJoint("C", { down: "6 kN" })],
+  ],
+  ["force on the joint at the tip alone", overhang, [atJoint("C", { down: "6 kN" })]],
+  ["an overhang that outweighs the span", overhang, [...on(overhang, "10"), atJoint("C", { down: "60 kN" })]],
+  ["two spans and an overhang", spansAndTip, on(spansAndTip, "111")],
+  ["two spans and an overhang, the inner span loaded", spansAndTip, on(spansAndTip, "010")],
+  ["two spans and an overhang, the overhang loaded", spansAndTip, on(spansAndTip, "001")],
+  [
+    "two spans and a heavy overhang, the first span without load",
+    spansAndTip,
+    [...on(spansAndTip, "010"), atJoint("D", { down: "90 kN" })],
+  ],
+  ["portal with a stub", stubbed, [uniform("BC", "10 kN/m"), atJoint("E", { down: "2 kN" })]],
+  ["portal with a heavy stub", stubbed, [uniform("BC", "4 kN/m"), atJoint("E", { down: "40 kN" })]],
   ["two spans", spans(2), on(spans(2), "11")],
   ["two spans, one loaded", spans(2), on(spans(2), "10")],
   [
@@ -161,6 +196,15 @@ describe("probableShape says what it cannot know", () => {
     expect(unknowns(probableShape(held, [atJoint("B", { right: "5 kN" })]))[0]).toContain("holds the frame");
     const hinged = withHinges(fixedPortal, [{ member: "BC", from: "B", at: "1 m" }]);
     expect(unknowns(probableShape(hinged, [uniform("BC", "5 kN/m")]))[1]).toContain("has a hinge");
+  });
+
+  it("a loaded span beside an overhang that outweighs it and another loaded span", () => {
+    const loads = [...on(spansAndTip, "110"), atJoint("D", { down: "90 kN" })];
+    expect(unknowns(probableShape(spansAndTip, loads))).toEqual([
+      undefined,
+      "what hangs on C outweighs the load of the span: which way it bends at B cannot be known",
+      undefined,
+    ]);
   });
 
   it("loads of both senses on one span, and a couple at a joint", () => {

@@ -55,7 +55,7 @@ describe("Compiler", () => {
     await other.check("export {};");
     expect(processes()).toBe(before + 1);
     await other.close();
-    for (let tries = 0; tries < 100 && processes() > before; tries++)
+    for (let tries = 0; tries < 1000 && processes() > before; tries++)
       await new Promise((done) => setTimeout(done, 20));
     expect(processes()).toBe(before);
   });

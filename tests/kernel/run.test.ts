@@ -121,11 +121,16 @@ describe("runNotebooks", () => {
   });
 
   test("an override no given takes up is refused, naming the givens", async () => {
-    const file = save("canopy.ipynb", sound);
+    const file = save("canopy.ipynb", [
+      ...sound,
+      'sheet.assume("r_I", 2.5, "like canopies"); sheet.assume("dry site", { because: "seen" })',
+    ]);
     await run([file]);
     const good = content("canopy.html");
     expect(await run([file], { q: "5 kN/m", w: "1 kN/m" })).toEqual(["failed"]);
-    expect(complained).toMatch(/--set "w" was not used; the givens are L, q\. No package was written/);
+    expect(complained).toMatch(
+      /--set "w" was not used; the givens are L, q; assumptions with a value can be set too: r_I\. No package was written/,
+    );
     expect(content("canopy.html")).toBe(good);
     expect(written()).toEqual(["canopy.html"]);
   });

@@ -25,7 +25,7 @@ const cells = (load: string): string =>
 
 async function until(what: () => boolean): Promise<void> {
   for (let tries = 0; !what(); tries++) {
-    if (tries > 1000) throw new Error("it did not come to that");
+    if (tries > 6000) throw new Error("it did not come to that");
     await new Promise((done) => setTimeout(done, 10));
   }
 }

@@ -41,6 +41,44 @@ describe("footing", () => {
     );
   });
 
+  test.each<[string, readonly number[], readonly string[]]>([
+    ["one part gives way, the nearest to the next figure", [12.34, -7.07, -5.27], ["12.4", "−7.1", "−5.3"]],
+    ["equal values stay equal", [2.744, 2.744, -5.488], ["2.74", "2.74", "−5.48"]],
+    [
+      "equal values give way together",
+      [1.1149, 1.1149, -0.7452, -0.7451, -0.7395],
+      ["1.12", "1.12", "−0.75", "−0.75", "−0.74"],
+    ],
+    [
+      "equal values part where nothing else is left",
+      [1.1145, 1.1145, 1.1145, 1.1145, -4.458],
+      ["1.12", "1.11", "1.11", "1.11", "−4.45"],
+    ],
+    ["nothing to do", [5, -3, -2], ["5.00", "−3.00", "−2.00"]],
+    ["all nought", [0, 0], ["0", "0"]],
+  ])("values that add up to nought print a total of nought: %s", (_, numbers, printed) => {
+    const { parts, total } = footing(numbers.map((number) => quantity(number * 1000, "force")));
+    expect(parts.map((part) => part.replace(" kN", ""))).toEqual(printed);
+    expect(Number(total.replace(" kN", ""))).toBe(0);
+  });
+
+  test("values that add up to nought foot to nought, and none is off by a whole last unit", () => {
+    const some = fc.array(fc.integer({ min: -1e9, max: 1e9 }), { minLength: 1, maxLength: 9 });
+    fc.assert(
+      fc.property(some, (micros) => {
+        const numbers = [...micros, -micros.reduce((a, b) => a + b, 0)].map((micro) => micro / 1e6);
+        const { parts, total, decimals } = footing(numbers.map((number) => quantity(number * 1000, "force")));
+        const printed = parts.map((part) => units(part, decimals));
+        expect(units(total, decimals) + 0).toBe(0);
+        expect(printed.reduce((sum, part) => sum + part, 0) + 0).toBe(0);
+        printed.forEach((part, i) => {
+          expect(Math.abs(part - (numbers[i] ?? 0) * 10 ** decimals)).toBeLessThan(1.0001);
+        });
+      }),
+      { seed: 814, numRuns: 500 },
+    );
+  });
+
   test("a value that needs no rounding keeps its figures", () => {
     const parts = [2, 1.26, 1.26, 0.5].map((number) => quantity(number * 1000, "force"));
     expect(footing(parts, 2)).toEqual({

@@ -57,6 +57,15 @@ describe("hingebook changes", () => {
     const { head, raised, settled, words, added, removed } = changes;
     expect([head, raised, settled, words, added, removed].flat()).toEqual([]);
     expect(text).toMatch(/s +6\.30 kN\/m +-> +6\.90 kN\/m +\+9\.5 % +\d+ lines stand on it/);
+    // what a reader needs first stands first, tables and equations a line each, whatever their numbers
+    expect(text.split("\n").length).toBeLessThan(40);
+    expect(text.indexOf("results changed")).toBeLessThan(text.indexOf("numbers of tables"));
+    expect(text).toMatch(/Internal forces under G \+ S: \d+ of \d+ values, each \+5\.5 %/);
+    for (const [was, is] of text
+      .split("\n")
+      .slice(1)
+      .map((line) => line.split(/ +-> +/)))
+      if (is !== undefined) expect(was?.endsWith(` ${is}`)).toBe(false);
     expect(text).toMatch(/governs +M_B +−88\.1 kN·m +-> +−92\.9 kN·m +\+5\.5 %/);
   });
 

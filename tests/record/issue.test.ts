@@ -78,11 +78,37 @@ describe("hingebook issue", () => {
     const html = readFileSync(issued("frame-P2.html"), "utf8");
     expect(html).toContain("ISSUED WITH one check that does NOT HOLD");
     expect(html).toContain("What changed since revision P1");
+    const section = html.split("What changed since revision P1")[1]?.split("</section>")[0] ?? "";
+    // a table is one line, however many of its numbers changed
+    expect(section).toMatch(/Internal forces under G \+ S.*<td>\d+ of \d+<\/td>/);
+    expect(section.match(/<tr>/g)?.length).toBeLessThan(40);
     const { since } = recordOf(issued("frame-P2.html"));
     expect(since?.revision).toBe("P1");
     expect(since?.changes.grounds.map(({ id, value }) => [id, value?.before, value?.after])).toEqual([
       ["s", "6.30 kN/m", "7.40 kN/m"],
     ]);
+  });
+
+  test("a date before that of the issue it supersedes is refused, and nothing is written", () => {
+    const before = readdirSync(join(job, "issued")).sort();
+    const words = ["frame.ipynb", "--rev", "P3", "--why", "late", "--date", "2031-04-29"] as const;
+    const { code, err } = hingebook(job, "issue", ...words);
+    expect(code).toBe(1);
+    expect(err).toMatch(
+      /P3 would be dated 2031-04-29, before P2 of 2031-04-30, which it supersedes; give --date 2031-04-30 or a later one/,
+    );
+    expect(readdirSync(join(job, "issued")).sort()).toEqual(before);
+  });
+
+  test("nothing changed since the issue before: a warning", () => {
+    const same = jobFolder();
+    expect(issue(same, "P1").out).not.toContain("WARNING");
+    const { code, out } = issue(same, "P2");
+    expect(code).toBe(0);
+    expect(out).toMatch(/supersedes P1 of 2031-04-30\n {2}WARNING: nothing changed since P1/);
+    expect(readFileSync(join(same, "issued/frame-P2.html"), "utf8")).toContain(
+      "Nothing changed since revision P1",
+    );
   });
 
   test("nothing is issued from a notebook that stops, and the register stays", () => {

@@ -98,7 +98,7 @@ describe("verify(issued package)", () => {
         missed.push(`seed ${seed}, byte ${at} xor ${by}: ${out}${err}`);
     }
     expect(missed).toEqual([]);
-  }, 120_000);
+  });
 
   test("a shown value changed: the page is named with the line, what it shows and what is due", async () => {
     const path = altered((matter) =>

@@ -31,9 +31,10 @@ describe("a record with bands", () => {
   test("the cover has the band of a governing result, and once what it stands for", () => {
     const cover = part('id="outcome"', "<h3>Checks");
     expect(cover).toContain(
-      "true value 90 % between 150 and 201 kN·m (0.85 to 1.14 of this), least 141, greatest 208 kN·m, bias −2 %",
+      "true value 90 % between 150 and 201 kN·m (0.85 to 1.14 of this), least 141, greatest 208 kN·m, in the middle 2 % less than this: hand too large",
     );
     expect(cover.split(tried).length - 1).toBe(1);
+    expect(cover).toMatch(/Bands: of the stiffnesses tried; .* not varied; unknowns: A2 *\./);
     expect(text(page)).toContain("The method is approximate");
   });
 

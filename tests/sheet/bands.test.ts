@@ -93,9 +93,9 @@ const fresh = (...given: readonly [number?, (readonly number[])?]): CalculationR
 };
 
 describe("bandText", () => {
-  test("a ratio: interval, share of the value, least, greatest and bias, the unit once", () => {
+  test("a ratio: interval, share of the value, least, greatest and middle, the unit once", () => {
     expect(bandText(ratios(-113, spread, []))).toBe(
-      "true value 90 % between −132 and −104 kN·m (0.92 to 1.17 of this), least −140, greatest −99.4 kN·m, bias +4 %",
+      "true value 90 % between −132 and −104 kN·m (0.92 to 1.17 of this), least −140, greatest −99.4 kN·m, in the middle 4 % more than this: hand too small",
     );
     expect(bandCellTexts(ratios(-113, spread, []))).toEqual(["−132 to −104", "(−140 to −99.4)"]);
   });
@@ -107,8 +107,31 @@ describe("bandText", () => {
       bias: { ...kNm(0.4), text: "+0.400 kN·m" },
     };
     expect(bandText(band)).toBe(
-      "true value 90 % between −2.00 and 2.00 kN·m, least −3.00, greatest 3.00 kN·m, bias +0.400 kN·m",
+      "true value 90 % between −2.00 and 2.00 kN·m, least −3.00, greatest 3.00 kN·m, in the middle +0.400 kN·m from this",
     );
+  });
+
+  const middle = (si: number, text: string): string =>
+    bandText({ ...ratios(-113, spread, []), bias: { si, dimension: "pure number", unit: "", text } })
+      .split("greatest −99.4 kN·m")
+      .at(-1) ?? "";
+  test.each([
+    [0.51, "+51 %", ", in the middle 51 % more than this: hand too small"],
+    [0.006, "+0.6 %", ", in the middle 0.6 % more than this: hand too small"],
+    [0.0049, "+0.5 %", ""],
+    [0, "0 %", ""],
+    [-0.0049, "−0.5 %", ""],
+    [-0.02, "−2 %", ", in the middle 2 % less than this: hand too large"],
+    [-1.3, "−130 %", ", in the middle of the other sign (−0.30 of this)"],
+  ])(
+    "the middle %f from the hand value says which of the two is too small, or nothing",
+    (si, text, words) => {
+      expect(middle(si, text)).toBe(words);
+    },
+  );
+  test("a middle near the hand value beside zero is not said", () => {
+    const band = { ...ratios(1, [-3, -2, 2, 3], []), measure: "difference" as const };
+    expect(bandText({ ...band, bias: { ...kNm(0.01), text: "+0.0100 kN·m" } })).not.toContain("middle");
   });
 
   test("what every frame tried agrees on is said so, with its value where that is not the hand value", () => {
@@ -117,6 +140,9 @@ describe("bandText", () => {
       "true value 45.0 kN·m (0.90 of this) in every frame tried",
     );
     expect(bandCellTexts(ratios(50, [1, 1, 1, 1], []))).toEqual(["same in all"]);
+    const single = { ...ratios(50, [0.9, 0.9, 0.9, 0.9], []), single: true } as const;
+    expect(bandText(single)).toBe("true value 45.0 kN·m (0.90 of this) in the one frame tried");
+    expect(bandCellTexts(single)).toEqual(["45.0 kN·m in one frame"]);
   });
 
   test("least and greatest that are the interval are not said twice in a cell", () => {

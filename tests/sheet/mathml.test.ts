@@ -1,6 +1,6 @@
 import { describe, expect, test } from "vitest";
 import { quantity, readMeasure } from "../../lib/quantity/index.ts";
-import { numberTex, shownValue, toMathML, unitTex, valueTex } from "../../lib/sheet/index.ts";
+import { numberTex, shownValue, symbolTex, toMathML, unitTex, valueTex } from "../../lib/sheet/index.ts";
 import { freshLedger } from "./notebook.ts";
 
 describe("toMathML", () => {
@@ -15,6 +15,48 @@ describe("toMathML", () => {
   });
   test("markup in text is escaped", () => {
     expect(toMathML("\\text{<img src=x>}")).not.toContain("<img");
+  });
+});
+
+/** What a reader sees of MathML. */
+const seen = (html: string): string =>
+  html
+    .replace(/<[^>]*>/g, "")
+    .replace(/[\u2062\u200b]/g, "")
+    .normalize("NFKC");
+
+const counted = (count: number, named: (i: number) => string): readonly string[] =>
+  Array.from({ length: count }, (_, i) => named(i + 1));
+
+describe("a name prints whole", () => {
+  const subscripts = [
+    ...counted(120, (i) => `h${i}`),
+    ...counted(40, (i) => `A${i}`),
+    ...counted(40, (i) => `AB${i}C${i + 8}`),
+    ...["B1", "B12", "Z110", "12a", "1a", "h007", "x1y22z333", "snow", "Ed", "h", "12", "B1C10D100E1000"],
+  ];
+  test(`as the subscript of a symbol, ${subscripts.length} of them`, () => {
+    const printed = subscripts.map((name) => seen(toMathML(symbolTex(`X_${name}`))));
+    expect(printed).toEqual(subscripts.map((name) => `X${name}`));
+  });
+  test("as one of several subscripts", () => {
+    const pairs = subscripts.map((name, i) => `${name}_${subscripts.at(-1 - i)}`);
+    const printed = pairs.map((pair) => seen(toMathML(symbolTex(`M_${pair}`))));
+    expect(printed).toEqual(pairs.map((pair) => `M${pair.replace("_", ",")}`));
+  });
+  test("as the symbol itself", () => {
+    const names = [...counted(120, (i) => `h${i}`), "AB10", "EI", "L1b22"];
+    expect(names.map((name) => seen(toMathML(symbolTex(name))))).toEqual(names);
+  });
+  test.each([
+    ["M_{\\mathrm{B1,C10}}", "MB1,C10"],
+    ["M_{\\mathrm{B11},C}", "MB11,C"],
+    ["\\sum F_{\\mathrm{along\\ B10}}", "∑Falong\u00a0B10"],
+  ])("as records of any age write it: %s", (tex, text) => {
+    expect(seen(toMathML(tex))).toBe(text.normalize("NFKC"));
+  });
+  test("upright and in one piece", () => {
+    expect(toMathML("X_{\\mathrm{h11}}")).toContain("<mtext>h11</mtext>");
   });
 });
 

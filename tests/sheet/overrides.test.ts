@@ -1,4 +1,5 @@
 import { afterEach, describe, expect, test } from "vitest";
+import { quantity } from "../../lib/quantity/index.ts";
 import { attachHost, forgetLedger } from "../../lib/sheet/index.ts";
 import { notebook } from "./notebook.ts";
 
@@ -37,6 +38,21 @@ describe("givens set from outside", () => {
     expect(sheet.lookup("g").in("klf")).toBeCloseTo(0.4, 12);
   });
 
+  test("a part of a span is taken where the span is said, and refused with what to write elsewhere", () => {
+    const { run } = notebook({ x_h: "0.2 L", r: "0.2 L", "hinge h1 (G)": "0.2 L" });
+    run(1, (s) => {
+      const written = quantity(1.2, "length");
+      expect(s.setFromOutside("hinge h1 (G)", written, "0.1 L", quantity(12, "length")).si).toBeCloseTo(
+        2.4,
+        12,
+      );
+    });
+    expect(() => run(2, (s) => s.assume("x_h", "1.2 m", "a try"))).toThrow(
+      'x_h, set from outside: "0.2 L" is a part of a span, and only places of hinges are set so; x_h is a length, write one with its unit',
+    );
+    expect(() => run(3, (s) => s.assume("r", 0.1, "a try"))).toThrow("r is a pure number, write 0.2");
+  });
+
   test("those that nothing took up are known", () => {
     const { sheet, run } = notebook({ g: "6 kN/m", q: "1 kN/m" });
     run(1, (s) => s.given("g", "5.2 kN/m"));
@@ -47,6 +63,10 @@ describe("givens set from outside", () => {
     ["6 kN", 'g, set from outside: "6 kN" is a force; a force per length is wanted, e.g. "5.2 kN/m"'],
     ["6", 'g, set from outside: "6" is a pure number'],
     ["", "g, set from outside is empty"],
+    [
+      "0.2 L",
+      'g, set from outside: "0.2 L" is a part of a span, and only places of hinges are set so; g is a force per length',
+    ],
     ["6 kN/n", 'g, set from outside: "6 kN/n": "kN/n" is not a unit known here'],
   ] as const;
   test.each(wrong)("%j is refused for a line load", (text, message) => {

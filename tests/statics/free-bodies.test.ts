@@ -4,12 +4,14 @@ import { freeBodies, type StaticsError } from "../../lib/statics/index.ts";
 import {
   atJoint,
   beam,
+  buildingFrame,
   type HingeAt,
   type Load,
   pointLoad,
   portal,
   type Structure,
   structure,
+  support,
   uniform,
   withHinges,
 } from "../../lib/structure/index.ts";
@@ -237,6 +239,36 @@ describe("freeBodies: results", () => {
     expect(force("AB")).toBeCloseTo((-5000 * Math.sqrt(13)) / 3, 6);
     expect(force("AC")).toBeCloseTo(10000 / 3, 6);
   });
+});
+
+describe("freeBodies: a member end released at a fixed support", () => {
+  const released = (held: string): Structure => {
+    const frame = withHinges(buildingFrame({ bays: ["6 m"], storeys: ["4 m"], bases: "fixed" }), [
+      hinge("A1B1", "A1", "0.1 L"),
+      hinge("A1B1", "B1", "0.1 L"),
+      hinge("B0B1", "B0", "1 m"),
+    ]);
+    const roller = support(held, { x: true });
+    const members = frame.members.map((m) =>
+      m.name === "A0A1" ? { ...m, releases: { ...m.releases, start: { moment: true } } } : m,
+    );
+    return { ...frame, members, supports: [...frame.supports, roller] };
+  };
+  // by hand: h1_y = 10·4.8/2 = 24 kN; thrust of the left column 24·0.6 + 10·0.6²/2 = 16.2 kN·m over 4 m = 4.05 kN, of the
+  // right one 16.2 over the 3 m above its hinge = 5.4 kN, 5.4·1 kN·m at its foot; the roller takes the difference
+  it.each([["A1"], ["B1"]])(
+    "the support's moment is nought by the joint alone, the frame held at %s",
+    (held) => {
+      const solution = freeBodies(released(held), [uniform("A1B1", "10 kN/m")]);
+      const [A, B, roller] = solution.reactions;
+      expect(A).toMatchObject({ joint: "A0", moment: 0 });
+      expect([A?.x, A?.y, B?.x, B?.y, B?.moment, roller?.x].map((v) => Math.round(v ?? Number.NaN))).toEqual([
+        4050, 30000, -5400, 30000, 5400, 1350,
+      ]);
+      expect(order(solution)).toContain("joint A0: sum M about A0 -> A0_M");
+      expect(solution.steps.filter((s) => s.together.length > 0)).toEqual([]);
+    },
+  );
 });
 
 describe("freeBodies: refusals", () => {

@@ -67,12 +67,18 @@ const kinds: Readonly<Record<string, (d: Draw) => Structure>> = {
       bases: { left: d.of("pinned", "fixed"), right: d.of("pinned", "fixed") },
       ...(d.below(2) === 0 ? {} : { rise: m(d.length(0.5, 2.5)) }),
     }),
-  frame: (d) =>
-    buildingFrame({
-      bays: Array.from({ length: 1 + d.below(2) }, () => m(d.length(4, 8))),
-      storeys: Array.from({ length: 1 + d.below(2) }, () => m(d.length(3, 4.5))),
-      bases: d.of("pinned", "fixed"),
-    }),
+  frame: (d) => frameOf(d),
+  "frame held at its floors": (d) => {
+    const frame = frameOf(d);
+    const levels = [...new Set(frame.joints.map((j) => j.y))].filter((y) => y > 0);
+    const held = levels.flatMap((y): Support[] => {
+      const floor = frame.joints.filter((j) => j.y === y);
+      const joint = d.of(floor[0], floor[floor.length - 1])?.name ?? "";
+      const holds = { x: true, y: false, rotation: false };
+      return d.below(4) === 0 ? [] : [{ joint, kind: "roller", holds, from: [] }];
+    });
+    return { ...frame, supports: [...frame.supports, ...held] };
+  },
   truss: (d) =>
     truss({
       panels: Array.from({ length: 2 + d.below(3) }, () => m(d.length(1.5, 4))),
@@ -119,6 +125,14 @@ const kinds: Readonly<Record<string, (d: Draw) => Structure>> = {
     });
   },
 };
+
+function frameOf(d: Draw): Structure {
+  return buildingFrame({
+    bays: Array.from({ length: 1 + d.below(2) }, () => m(d.length(4, 8))),
+    storeys: Array.from({ length: 1 + d.below(2) }, () => m(d.length(3, 4.5))),
+    bases: d.of("pinned", "fixed"),
+  });
+}
 
 /** Lets go one restraint at a time, keeping only what leaves the structure stable, until nothing is redundant. */
 function weakened(start: Structure, d: Draw): Structure | undefined {
@@ -175,13 +189,7 @@ function withRelease(
   if (what === "shear" && (start.moment || far.moment)) return undefined;
   if (what === "moment" && sliding) return undefined;
   const releases = { ...member.releases, [end]: { ...member.releases[end], [what]: true } };
-  const members = of.members.map((x) => (x === member ? { ...x, releases } : x));
-  const joint = member[end];
-  const spins = members.every(
-    (x) => (x.start !== joint || x.releases.start.moment) && (x.end !== joint || x.releases.end.moment),
-  );
-  const held = of.supports.some((s) => s.joint === joint && s.holds.rotation);
-  return spins && held ? undefined : { ...of, members };
+  return { ...of, members: of.members.map((x) => (x === member ? { ...x, releases } : x)) };
 }
 
 function withoutHold(of: Structure, support: Support, axis: "x" | "y" | "rotation"): Structure | undefined {
@@ -217,19 +225,46 @@ function loadOn(of: Structure, d: Draw): Load {
     }
     default: {
       const joint = of.joints[d.below(of.joints.length)]?.name ?? "";
-      const turns = of.members.some(
-        (x) => (x.start === joint && !x.releases.start.moment) || (x.end === joint && !x.releases.end.moment),
-      );
-      const couple = turns ? d.of(0, 0, size()) : 0;
+      const couple = memberTakesMoment(of, joint) ? d.of(0, 0, size()) : 0;
       return { kind: "joint", joint, fx: d.of(0, size()), fy: d.of(0, -size()), couple, ...words };
     }
   }
 }
 
+function memberTakesMoment(of: Structure, joint: string): boolean {
+  return of.members.some(
+    (x) => (x.start === joint && !x.releases.start.moment) || (x.end === joint && !x.releases.end.moment),
+  );
+}
+
+/** Joints whose rotation only a support holds: every member end there is released. */
+export function heldAlone(of: Structure): readonly string[] {
+  return of.supports
+    .filter(({ joint, holds }) => {
+      const ends = of.members.flatMap((x) => [
+        ...(x.start === joint ? [x.releases.start] : []),
+        ...(x.end === joint ? [x.releases.end] : []),
+      ]);
+      return holds.rotation && ends.every((end) => end.moment);
+    })
+    .map((s) => s.joint);
+}
+
 /** A determinate structure with one to four loads, or nothing where the weakening came to no end. */
 function caseOf(numbers: readonly number[]): Case | undefined {
   const d = new Draw(numbers);
-  const kind = d.of("beam", "portal", "frame", "truss", "girder", "tree", "arch", "portal", "tree");
+  const kind = d.of(
+    "beam",
+    "portal",
+    "frame",
+    "frame held at its floors",
+    "truss",
+    "girder",
+    "tree",
+    "arch",
+    "portal",
+    "tree",
+  );
   const whole = kinds[kind]?.(d);
   if (whole === undefined) throw new Error(`no kind ${kind}`);
   const of = weakened(whole, d);

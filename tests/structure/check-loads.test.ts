@@ -47,14 +47,14 @@ describe("checkLoads", () => {
     ],
     [
       "a point load before its member",
-      pointLoad("AB", "5 kN", { at: "-0.5 m" }),
+      { ...pointLoad("AB", "5 kN", { at: "0.5 m" }), at: { metres: -0.5 } },
       "is at -0.5 m on member AB",
     ],
-    ["a line load that ends beyond", uniform("BC", "5 kN/m", { to: "1.5 L" }), "is at 21 m on member BC"],
+    ["a line load that ends beyond", uniform("BC", "5 kN/m", { to: "21 m" }), "is at 21 m on member BC"],
     [
       "a line load that ends before it begins",
-      uniform("BC", "5 kN/m", { from: "8 m", to: "2 m" }),
-      "runs from 8 m to 2 m; its end must lie beyond its beginning",
+      uniform("BC", "5 kN/m", { from: "8 m", to: "0.5 L" }),
+      "on member BC runs from 8 m to 7 m; its end must lie beyond its beginning",
     ],
     ["a couple on a hinge", coupleLoad("BC", "5 kN m", { at: "2 m" }), "acts exactly at hinge h1"],
     [

@@ -70,3 +70,42 @@ describe("loads", () => {
     expect(make).toThrow(words);
   });
 });
+
+describe("a load that fits no member is refused where it is made", () => {
+  it.each<[string, () => unknown, string]>([
+    [
+      "ends reversed, in metres",
+      () => uniform("BC", "5 kN/m", { from: "8 m", to: "2 m" }),
+      "the load on BC (5 kN/m) runs from 8 m to 2 m; its end must lie beyond its beginning",
+    ],
+    [
+      "ends reversed, in parts",
+      () => varying("BC", "1 kN/m", "5 kN/m", { from: "0.75 L", to: "0.25 L", label: "drift" }),
+      "the load on BC (drift) runs from 0.75 L to 0.25 L",
+    ],
+    ["from the end on", () => uniform("BC", "5 kN/m", { from: "1 L" }), "runs from 1 L to 1 L"],
+    ["to the beginning", () => uniform("BC", "5 kN/m", { from: "1 m", to: "0 L" }), "runs from 1 m to 0 L"],
+    [
+      "before the member",
+      () => uniform("BC", "5 kN/m", { from: "-1 m" }),
+      "the load on BC (5 kN/m) is at -1 m",
+    ],
+    ["beyond the member", () => uniform("BC", "5 kN/m", { to: "1.5 L" }), "is at 1.5 L, outside its member"],
+    [
+      "a point load beyond it",
+      () => pointLoad("BC", "5 kN", { at: "1.2 L" }),
+      "the point load on BC (5 kN) is at 1.2 L, outside its member; from 0 L to 1 L is wanted",
+    ],
+    [
+      "a couple before it",
+      () => coupleLoad("BC", "5 kN m", { at: "-0.5 m" }),
+      "the couple on BC (5 kN m) is at -0.5 m",
+    ],
+  ])("%s", (_, make, words) => {
+    expect(make).toThrow(words);
+  });
+
+  it("a stretch from metres to a part waits for the member's length", () => {
+    expect(uniform("BC", "5 kN/m", { from: "8 m", to: "0.5 L" }).begin).toEqual({ metres: 8 });
+  });
+});

@@ -38,6 +38,11 @@ describe.each(names.flatMap((name) => systems.map((units) => [name, units] as co
       else expect(open).toEqual([]);
     });
 
+    test("no symbol prints as a hinge does: h with a number", () => {
+      const symbols = record.entries.flatMap((entry) => ("symbol" in entry ? (entry.symbol ?? []) : []));
+      expect(symbols.filter((symbol) => /^h_?\d+$/.test(symbol))).toEqual([]);
+    });
+
     test("prompts: as many as stand in the notebook", () => {
       const { count, cells } = promptsLeft(record);
       expect(count).toBe(source.match(/‹/g)?.length);
