@@ -34,7 +34,9 @@ describe("hingebook run boat-shed-frame.ipynb", () => {
     expect(plain.out.match(/^ {2}cell +\d+ /gm)?.length).toBe(13);
     expect(plain.out).toContain("Boat shed, main frame on line 3: preliminary");
     expect(plain.out).toMatch(/M_B = −88\.1 kN·m/);
-    expect(plain.out).toMatch(/true value 90 % between −\d.* of this\), least −.*, greatest −.* kN·m, in the middle \d/);
+    expect(plain.out).toMatch(
+      /true value 90 % between −\d.* of this\), least −.*, greatest −.* kN·m, in the middle \d/,
+    );
     expect(plain.out).toMatch(
       /bands: of the stiffnesses tried; loads, geometry, cracking and second order not varied/,
     );
