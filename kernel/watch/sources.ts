@@ -8,7 +8,7 @@ const ENDINGS = /\.(?:csv|json|m?ts|m?js|cjs)$/;
 const LARGEST_bytes = 20_000_000;
 
 /** Saving is several events; what follows within this time is the same saving. */
-const TOGETHER_ms = 8;
+const TOGETHER_ms = 4;
 
 /** A digest of everything whose change asks for another run. Outputs saved with the notebook do not count. Throws where
  *  the notebook cannot be read. */

@@ -118,17 +118,17 @@ export function plainSpelling(unit: string): string {
   return shorthands[spelled] ?? spelled;
 }
 
+/** Units by the texts they were written with. */
 const cache = new Map<string, Unit>();
 
 /** Looks a written unit up. Throws on an unknown one, naming the nearest known unit. */
 export function lookUpUnit(unit: string): Unit {
-  const spelling = plainSpelling(unit);
-  const seen = cache.get(spelling);
+  const seen = cache.get(unit);
   if (seen !== undefined) return seen;
-  const row = table.get(spelling);
+  const row = table.get(plainSpelling(unit));
   if (row === undefined) throw new Error(unknownUnit(unit));
   const found: Unit = Object.freeze({ dimension: row[1], factor: factor(row[2], si[row[1]]) });
-  cache.set(spelling, found);
+  cache.set(unit, found);
   return found;
 }
 

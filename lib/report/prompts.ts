@@ -27,16 +27,22 @@ function sourceOf(cell: unknown): string {
   return Array.isArray(source) ? source.join("") : typeof source === "string" ? source : "";
 }
 
-/** Every text in a piece of the record, wherever it stands. */
-function textsIn(value: unknown): readonly string[] {
-  if (typeof value === "string") return [value];
-  if (typeof value !== "object" || value === null) return [];
-  return Object.values(value).flatMap(textsIn);
+/** Every prompt in a piece of the record, wherever it stands, into `found`. Records are large and prompts few: nothing is made on
+ *  the way. */
+function gather(value: unknown, found: Set<string>): void {
+  if (typeof value === "string") {
+    if (value.includes("‹")) for (const prompt of promptsIn(value)) found.add(prompt);
+  } else if (Array.isArray(value)) {
+    for (const one of value) if (typeof one !== "number") gather(one, found);
+  } else if (typeof value === "object" && value !== null)
+    for (const key in value) gather((value as Readonly<Record<string, unknown>>)[key], found);
 }
 
-const promptsOf = (value: Entry | CalculationRecord["head"]): readonly string[] => [
-  ...new Set(textsIn(value).flatMap(promptsIn)),
-];
+function promptsOf(value: Entry | CalculationRecord["head"]): ReadonlySet<string> {
+  const found = new Set<string>();
+  gather(value, found);
+  return found;
+}
 
 /** The prompts still in a calculation. Those in the notebook count as often as they stand there; one that stands on the
  *  sheet alone (it came from a file beside the notebook, say) counts once, in the cell that put it there. */
