@@ -70,11 +70,14 @@ interface Places {
   readonly asked: readonly { readonly wanted: Wanted; readonly value: number }[];
 }
 
-/** Evenly along the member, and on both sides of every break of the function. */
+/** Evenly along the member, and on both sides of every break of the function; at the ends alone where it is the same all along, as
+ *  then it is in every frame under the same loads. */
 function placesOf(forces: MemberForces, quantity: ForceQuantity): Places {
   const { member, length, [quantity]: f } = forces;
   const inside = f.breaks.filter((x) => x > 1e-9 * length && x < (1 - 1e-9) * length);
-  const even = Array.from({ length: parts + 1 }, (_, i) => (length * i) / parts);
+  const level = f.pieces.every(([, ...rest]) => rest.every((coefficient) => coefficient === 0));
+  const steps = level ? 1 : parts;
+  const even = Array.from({ length: steps + 1 }, (_, i) => (length * i) / steps);
   const plain = even.filter((x) => !inside.some((b) => Math.abs(b - x) <= 1e-9 * length));
   const places = [
     ...plain.map((x): readonly [number, Side] => [x, x === length ? "left" : "right"]),
