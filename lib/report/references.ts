@@ -28,7 +28,16 @@ interface Reference {
   readonly line?: number;
 }
 
-function reference(item: Item, after: Part = ""): Reference {
+/** References as they are made: an item is named in many places of its page. */
+const made = new WeakMap<Item, Reference>();
+
+function reference(item: Item): Reference {
+  const found = made.get(item) ?? referenceTo(item);
+  made.set(item, found);
+  return found;
+}
+
+function referenceTo(item: Item): Reference {
   const { id } = item.entry;
   const tex = texOf(item.entry);
   const line = tex === undefined && /^\d+$/.test(item.label) ? { line: Number(item.label) } : {};
@@ -36,7 +45,7 @@ function reference(item: Item, after: Part = ""): Reference {
   return {
     id,
     ...line,
-    link: h`<a class="ref" href="#${lineAnchor(id)}" title="${placeName(item)}">${short}</a>${after}`,
+    link: h`<a class="ref" href="#${lineAnchor(id)}" title="${placeName(item)}">${short}</a>`,
   };
 }
 
@@ -67,7 +76,10 @@ const CHANGED = h` <span class="stale">(changed since)</span>`;
 
 const groundReference = (book: Book, ground: Ground): Reference => {
   const item = book.item(ground.id);
-  if (item) return reference(item, ground.state === "changed" ? CHANGED : "");
+  if (item) {
+    const found = reference(item);
+    return ground.state === "changed" ? { ...found, link: h`${found.link}${CHANGED}` } : found;
+  }
   return { id: ground.id, link: h`<span class="gone">${ground.id} (no longer on the sheet)</span>` };
 };
 
