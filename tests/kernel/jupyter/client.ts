@@ -33,6 +33,8 @@ async function freePorts(count: number): Promise<number[]> {
 
 /** Between two questions to a kernel that has not been heard yet. */
 const ASK_AGAIN_ms = 150;
+/** A kernel starts in less than a second on a machine that is free; one not heard by then is ended. */
+const LONGEST_START_ms = 60_000;
 
 export interface Ran {
   readonly reply: Json;
@@ -105,11 +107,15 @@ export class Client {
    *  lost, so one question may not be enough. False when the kernel has ended. */
   async #isHeard(): Promise<boolean> {
     const ended = this.#gone.then(() => false);
+    const late = setTimeout(() => this.process.kill("SIGKILL"), LONGEST_START_ms);
+    void ended.then(() => clearTimeout(late));
     for (let heard: boolean | undefined; ; ) {
       const asked = this.request("kernel_info_request", {}).then(() => true);
       asked.catch(() => undefined); // an unanswered question is given up with the socket
       heard = await Promise.race([asked, ended, this.#sent.then(() => sleep(ASK_AGAIN_ms, undefined))]);
-      if (heard !== undefined) return heard;
+      if (heard === undefined) continue;
+      clearTimeout(late);
+      return heard;
     }
   }
 
@@ -142,6 +148,7 @@ export class Client {
     return new Promise((done, fail) => {
       this.#waiting.set(msg_id, { outputs: [], done });
       this.#sent = this.#sent.then(() => this.#shell.send(frames)).catch(fail);
+      void this.#gone.then(() => fail(new Error(`the kernel ended before it answered the ${type}`)));
     });
   }
 

@@ -26,22 +26,47 @@ function hold(code: string, cell: number, ran: Ran, expected: Expected): void {
   expect(printed(ran), about).toBe("prints" in expected ? expected.prints : "");
 }
 
+/** A row takes two seconds on a machine that is free. */
+const LONGEST_ms = 60_000;
+
 describe("cells that follow one another, run by the live kernel", () => {
   const ran = new Map<string, readonly Ran[]>();
+
+  /** Rows whose kernel was not heard to the end at the first try. */
+  const again: string[] = [];
+
+  /** Runs a row in a kernel of its own, which is ended where it does not come to an end by itself. */
+  async function runRow({ cells }: (typeof table)[number]): Promise<readonly Ran[]> {
+    const client = await Client.start(FOLDER);
+    const late = setTimeout(() => client.process.kill("SIGKILL"), LONGEST_ms);
+    try {
+      const found: Ran[] = [];
+      for (const [code] of cells) found.push(await client.execute(code));
+      return found;
+    } finally {
+      await client.close();
+      clearTimeout(late);
+    }
+  }
 
   beforeAll(async () => {
     const rows = [...table];
     const work = async (): Promise<void> => {
       for (let row = rows.shift(); row; row = rows.shift()) {
-        const client = await Client.start(FOLDER);
-        const cells: Ran[] = [];
-        for (const [code] of row.cells) cells.push(await client.execute(code));
-        ran.set(row.name, cells);
-        await client.close();
+        const { name } = row;
+        const first = await runRow(row).catch((error: unknown) => {
+          again.push(name);
+          console.warn(`hingebook: "${name}" is run again: ${String(error)}`);
+        });
+        ran.set(name, first ?? (await runRow(row)));
       }
     };
     await Promise.all(Array.from({ length: AT_ONCE }, work));
   }, 400_000); // a hundred and more processes, on a machine that may be busy
+
+  test("a kernel that is not heard to the end is a rare thing", () => {
+    expect(again.length, again.join(", ")).toBeLessThanOrEqual(2);
+  });
 
   test("every row has run", () => {
     expect(ran.size).toBe(table.length);
