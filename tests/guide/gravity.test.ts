@@ -133,7 +133,7 @@ describe("sheet.gravity, free bodies against the method's end moments", () => {
 
 describe("sheet.gravity by common practice", () => {
   test("one bay: beam ends -0.045 wL², midspan 0.08 wL², columns half and half", () => {
-    // Saouma, lecture notes Structural Engineering, eq. 14.29-14.30, read: 0.1 L gives +0.08 wL² and -0.045 wL².
+    // V. E. Saouma, Structural Engineering, eq. 14.29-14.30, read: 0.1 L gives +0.08 wL² and -0.045 wL².
     const sheet = open();
     const frame = buildingFrame({ bays: ["8 m"], storeys: ["4 m", "4 m"], bases: "fixed" });
     const G = sheet.loadCase("G", "floors", ...on("20 kN/m", "A1B1", "A2B2"));
