@@ -23,14 +23,9 @@ const quantities: readonly ForceQuantity[] = ["N", "V", "M"];
 /** Between what 90 % of the true values lie along every member of a small frame; where they all agree, no line is drawn. */
 export function diagramBands(bands: BandBook, hand: Hand): DiagramBands {
   const none = { bands: [], words: "" };
-  if (
-    "none" in
-    bands.taken(
-      hand.frame,
-      hand.solved.map(({ set }) => set),
-    )
-  )
-    return none;
+  const sets = hand.solved.map(({ set }) => set);
+  const taken = bands.taken(hand.frame, sets);
+  if ("none" in taken) return none;
   if (hand.members.length > mostMembers)
     return { bands: [], words: "; the bands stand in the table of internal forces" };
   const lines = hand.members.flatMap((forces) => quantities.map((quantity) => placesOf(forces, quantity)));
@@ -47,12 +42,7 @@ export function diagramBands(bands: BandBook, hand: Hand): DiagramBands {
     return open ? [{ quantity, member, at, low, high }] : [];
   });
   if (drawn.length === 0) {
-    const { single } = triedOf(
-      bands.taken(
-        hand.frame,
-        hand.solved.map(({ set }) => set),
-      ),
-    );
+    const { single } = triedOf(taken);
     const words = single
       ? "; true values of the one frame tried stand in the tables"
       : "; the true values are the same in every frame tried";

@@ -20,7 +20,7 @@ import {
 } from "./gravity-moments.ts";
 import { recordCutEnds, recordEndMoments, recordMethod, recordPlaces } from "./gravity-records.ts";
 import { hingeId, setName } from "./hinge-names.ts";
-import { endsOf, judge, outsideWords, recordRanges } from "./hinge-ranges.ts";
+import { endsOf, judge, queryOutside, recordRanges } from "./hinge-ranges.ts";
 import { recordVerdict } from "./hinge-verdict.ts";
 import { endMomentsOf, heldFloors, recordRelease } from "./release.ts";
 import { givenRatios } from "./set-ratios.ts";
@@ -80,15 +80,7 @@ export function recordGravity(
     why === "anywhere" ? "no moment in the member: any place will do" : "",
   );
   recordRanges(ledger, name, hinged, loads, hinged.hinges, judged, idle);
-  const outside = hinged.hinges.filter(
-    ({ name: one }, i) => outsideWords(one, name, judged[i]) !== undefined,
-  );
-  if (outside.length > 0)
-    ledger.query(
-      `Under ${name} ${outside.map((one) => `${one.name} in ${one.member}`).join(", ")} ${outside.length === 1 ? "lies" : "lie"} outside the isolated-span range under this load (see the table of ranges). ` +
-        "The true point can lie there beside loaded or much longer spans, or where a joint moves; say why it does here.",
-      mergeSources(...outside.map(({ from }) => from)),
-    );
+  queryOutside(ledger, name, hinged.hinges, judged);
   const couples = coupleLoads(cuts.ends, cut === undefined ? [] : [cut]);
   const entries = Object.freeze(cases.map(({ entry }) => entry));
   const set = {

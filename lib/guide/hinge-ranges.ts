@@ -39,14 +39,38 @@ function isPinnedEnd(error: unknown): boolean {
   return (error as { fault?: { kind?: unknown } } | undefined)?.fault?.kind === "pinned end";
 }
 
+const whyOutside =
+  "The true point can lie there beside loaded or much longer spans, or where a joint moves; say why it does here.";
+
+type Outside = Placement & Required<Pick<Placement, "range">>;
+
+const isOutside = (judged: Placement | undefined): judged is Outside =>
+  judged?.inside === false && judged.range !== undefined;
+
 /** What to ask about a hinge outside the range; none where it lies inside or has none. */
 export function outsideWords(name: string, set: string, judged: Placement | undefined): string | undefined {
-  if (judged?.inside !== false || judged.range === undefined) return undefined;
+  if (!isOutside(judged)) return undefined;
   const { distance, length, from, range, member } = judged;
   return (
     `Hinge ${name} under ${set}, ${spanPart(distance / length)} from ${from}, lies outside the isolated-span range ` +
     `${spanPart(range.least / length)} to ${spanPart(range.most / length)} of ${member} under this load. ` +
-    "The true point can lie there beside loaded or much longer spans, or where a joint moves; say why it does here."
+    whyOutside
+  );
+}
+
+/** One query for all hinges of a set that lie outside their ranges; none where all lie inside. */
+export function queryOutside(
+  ledger: Ledger,
+  set: string,
+  hinges: readonly Hinge[],
+  judged: readonly (Placement | undefined)[],
+): void {
+  const outside = hinges.filter((_, i) => isOutside(judged[i]));
+  if (outside.length === 0) return;
+  const places = outside.map(({ name, member }) => `${name} in ${member}`).join(", ");
+  ledger.query(
+    `Under ${set} ${places} ${outside.length === 1 ? "lies" : "lie"} outside the isolated-span range under this load (see the table of ranges). ${whyOutside}`,
+    mergeSources(...outside.map(({ from }) => from)),
   );
 }
 
